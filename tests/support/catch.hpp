@@ -1,0 +1,3 @@
+// The one place that includes Catch: precompiled for every test program.
+#pragma once
+#include <catch2/catch.hpp>
