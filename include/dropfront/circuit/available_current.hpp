@@ -1,0 +1,25 @@
+#pragma once
+#include <functional>
+#include <string>
+
+#include "dropfront/circuit/steady_state.hpp"
+
+namespace dropfront::circuit {
+
+/// Largest constant rail load with steady rail minimum >= the required voltage.
+struct AvailableCurrent {
+  bool usable = false;
+  std::string reason;
+  double current_A = 0;   ///< 0 when even the unloaded rail stays below required_V
+  double rail_min_V = 0;  ///< of an independent steady state at current_A
+  StateVector state{};    ///< start state there, to warm neighbouring corners of the same score
+  int steady_states = 0;  ///< how many were solved
+};
+
+/// `values.rail_current_A` is ignored; load_cutoff_V should be half of required_V. Tolerance: current to
+/// 1e-6 relative or 1 nA; the returned current is on the passing side (rail_min_V >= required_V - 1e-7 V).
+/// `ceiling_A` is an upper bound to start from (charge balance), 0: computed here.
+AvailableCurrent find_available_current(Network (*build)(const ElementValues&), ElementValues values,
+                                        double required_V, double ceiling_A = 0);
+
+}  // namespace dropfront::circuit

@@ -1,0 +1,36 @@
+#pragma once
+#include <limits>
+#include <optional>
+
+#include "dropfront/circuit/waveform.hpp"
+
+namespace dropfront::circuit {
+
+/// Piecewise-linear one-way curve: open below threshold_V, slope_ohm above.
+struct Curve {
+  double threshold_V = 0;
+  double slope_ohm = 1;
+};
+
+/// Zener in breakdown: the main branch and, where the data give the knee, an inner parallel branch.
+struct ClampCurve {
+  Curve main;
+  std::optional<Curve> knee;
+};
+
+/// One design's values at one set of conditions: everything an arrangement needs to build its network.
+struct ElementValues {
+  Waveform mains;
+  double series_resistor_ohm = 0;
+  double dropper_F = 0;
+  double dropper_esr_ohm = 0;
+  double discharge_ohm = std::numeric_limits<double>::infinity();  ///< whole chain; infinite: none
+  Curve rectifier;                                                 ///< also the zener's forward direction
+  ClampCurve clamp;
+  double reservoir_F = 0;
+  double reservoir_esr_ohm = 0;
+  double rail_current_A = 0;  ///< constant-current load on the rail, leakage and Iq included
+  double load_cutoff_V = 0;   ///< the load falls off linearly below this rail voltage
+};
+
+}  // namespace dropfront::circuit

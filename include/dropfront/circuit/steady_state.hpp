@@ -1,0 +1,50 @@
+#pragma once
+#include <array>
+#include <string>
+#include <vector>
+
+#include "dropfront/circuit/network.hpp"
+
+namespace dropfront::circuit {
+
+inline constexpr int kMaxStates = 4;
+using StateVector = std::array<double, kMaxStates>;
+
+enum class SteadyStatus { converged, alternating, failed };
+
+struct SteadyOptions {
+  int max_newton_passes = 40;       ///< one pass is one period (half a period with symmetry)
+  int max_march_periods = 4000;     ///< fallback marching before giving up
+  double state_tolerance_V = 1e-8;  ///< stop: greatest |x(T) - x(0)| after the last Newton step
+  bool powers = true;               ///< losses, currents, energy law; false: rail extremes only
+  bool multipliers = true;          ///< check that every multiplier lies inside the unit circle
+};
+
+/// The periodic steady state of a network. Check `usable()` before any number.
+struct SteadyState {
+  SteadyStatus status = SteadyStatus::failed;
+  std::string reason;   ///< why it failed or what was noticed; empty when all is well
+  StateVector start{};  ///< capacitor voltages at mains phase zero
+  double rail_min_V = 0;
+  double rail_max_V = 0;
+  double rail_mean_V = 0;
+  double input_power_W = 0;  ///< mean of v·i drawn from the line
+  double input_current_Arms = 0;
+  std::array<double, static_cast<int>(Owner::count)> loss_W{};  ///< mean power dissipated, by owner
+  std::vector<double> capacitor_current_Arms;                   ///< one a capacitor of the network
+  std::vector<double> branch_peak_A;                            ///< one a branch of the network
+  std::vector<double> branch_mean_A;
+  double energy_residual = 0;      ///< |in - dissipated - stored change| / in over the period
+  double greatest_multiplier = 0;  ///< |eigenvalue| of the one-period Jacobian
+  int passes = 0;
+
+  bool usable() const { return status != SteadyStatus::failed; }
+  double ripple_Vpp() const { return rail_max_V - rail_min_V; }
+};
+
+/// Solves for the periodic steady state. Never throws, never returns NaN in a usable result.
+/// `guess` is a start state (capacitor voltages at mains phase zero) or null for the analytic cold start.
+SteadyState solve_steady_state(const Network& network, const SteadyOptions& options = {},
+                               const StateVector* guess = nullptr);
+
+}  // namespace dropfront::circuit

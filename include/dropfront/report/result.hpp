@@ -1,0 +1,53 @@
+#pragma once
+#include <string>
+#include <vector>
+
+#include "dropfront/problem/problem.hpp"
+#include "dropfront/scoring/score.hpp"
+#include "dropfront/search/search.hpp"
+
+namespace dropfront::report {
+
+enum class Status { done, none_found, proven_none, cut_short };
+
+/// A front member or a filled-in ranked design with what people want to know of it.
+struct Entry {
+  int number = 0;  ///< from 1; ranked designs off the front are numbered after it
+  scoring::Design design;
+  scoring::Objectives objectives;
+  std::string tightest_check;
+  std::optional<double> tightest_headroom;
+  bool on_front = true;
+  std::optional<scoring::Score> evidence;  ///< ranked designs only
+};
+
+struct RankedList {
+  std::string name;  ///< cheapest, lowest_standby, smallest, most_margin, balanced
+  std::vector<int> numbers;
+};
+
+/// One finished search, ready for the writers. Pure data; `problem` outlives it.
+struct Result {
+  const problem::Problem* problem = nullptr;
+  Status status = Status::done;
+  search::SearchCounts counts;
+  bool exhaustive = false;
+  std::vector<Entry> front;
+  std::vector<Entry> extras;  ///< ranked, not on the front
+  std::vector<RankedList> ranked;
+  struct NearMiss {
+    scoring::Design design;
+    std::string check;
+    double shortfall = 0;
+  };
+  std::vector<NearMiss> near_misses;
+  struct Conflict {
+    std::string check;
+    std::int64_t failed = 0;
+    double least_shortfall = 0;
+  };
+  std::vector<Conflict> conflict;  ///< most often failed first; filled when nothing complies
+  std::vector<std::string> cautions;
+};
+
+}  // namespace dropfront::report

@@ -1,0 +1,34 @@
+#pragma once
+#include <optional>
+#include <string>
+#include <string_view>
+#include <vector>
+
+namespace dropfront::scoring {
+
+/// Where a check was at its worst.
+struct At {
+  std::string supply;  ///< empty with a single unnamed supply
+  std::string corner;  ///< lean_cold, ..., plug_in, shorted, unplug, fault
+  std::optional<double> ambient_degC;
+  std::string load;  ///< name, "none", or a current as text
+  std::optional<double> phase_deg;
+  std::string ends;  ///< which ends of the free tolerances, e.g. "series_resistor high"
+};
+
+/// One check's verdict.
+struct Check {
+  std::string_view id;
+  std::optional<double> value;  ///< absent: could not be computed (reason in basis)
+  std::optional<double> limit;  ///< absent: no rating given
+  std::string_view unit;
+  bool at_most = true;       ///< side "<=", else ">="
+  std::optional<bool> pass;  ///< null: no rating given
+  At at;
+  std::string basis;  ///< the formula or source by name, in a few words
+
+  /// 1 - value/limit for "<=", value/limit - 1 for ">="; null where the limit is 0 or anything is missing.
+  std::optional<double> headroom() const;
+};
+
+}  // namespace dropfront::scoring

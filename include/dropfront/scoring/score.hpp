@@ -1,0 +1,67 @@
+#pragma once
+#include <cstdint>
+#include <optional>
+#include <string>
+#include <vector>
+
+#include "dropfront/circuit/steady_state.hpp"
+#include "dropfront/scoring/check.hpp"
+#include "dropfront/scoring/design.hpp"
+#include "dropfront/scoring/requirement.hpp"
+
+namespace dropfront::scoring {
+
+enum class Verdict { compliant, breaks_limits, undefined };
+
+/// The four objectives with names, never by position. Absent: could not be computed (price or size not given,
+/// no steady state).
+struct Objectives {
+  std::optional<std::int64_t> cost_micro;
+  std::optional<double> standby_loss_W;
+  std::optional<std::int64_t> board_area_um2;
+  std::optional<double> current_margin_A;  ///< worst case, end of life, at the output; more is better
+};
+
+/// One row of `operation`.
+struct Operation {
+  std::string corner;  ///< nominal, lean_cold, lean_hot, rich_empty, ...
+  double ambient_degC = 25;
+  std::string ends;
+  double load_current_A = 0;  ///< at the output
+  double rail_current_A = 0;
+  std::optional<double>
+      available_current_A;  ///< rail current; absent: not computed at this depth, or no answer
+  circuit::SteadyState state;
+  std::string note;
+};
+
+struct SupplyOperations {
+  std::string supply;
+  std::vector<Operation> operations;
+};
+
+enum class Depth {
+  cheap,      ///< cost, area, height, static ratings: no steady state solved
+  screen,     ///< adds lean and standby: the four objectives and their checks
+  compliant,  ///< all checks, stopping at the first that fails (checks then holds what was computed)
+  full        ///< everything, never stopping, operations with available currents included
+};
+
+struct Score {
+  Verdict verdict = Verdict::undefined;
+  bool complete = false;  ///< false: stopped early, objectives or checks may be missing
+  Objectives objectives;
+  std::optional<double> current_margin_new_A;  ///< the margin with new parts
+  std::vector<Check> checks;                   ///< in the fixed order of the check table
+  std::vector<SupplyOperations> operations;    ///< Depth::full only
+  std::vector<std::string> cautions;
+  /// Graded, finite measure of broken limits: sum over failed checks of the relative shortfall, at least 1
+  /// per undefined check. 0 when compliant. For the relaxation only.
+  double violation = 0;
+};
+
+/// Scores one design. Total: any design gives a verdict; never throws, never NaN in a set field. Depends on
+/// nothing but its arguments, so `assess` and `search` give the same bits.
+Score score(const Design& design, const Requirement& requirement, Depth depth);
+
+}  // namespace dropfront::scoring

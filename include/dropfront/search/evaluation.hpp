@@ -1,0 +1,47 @@
+#pragma once
+#include <cstdint>
+#include <functional>
+#include <string>
+#include <vector>
+
+#include "dropfront/search/space.hpp"
+
+namespace dropfront::search {
+
+enum class Outcome { compliant, breaks_limits, undefined };
+
+/// What the search learns of one design. All objectives are minimised (a margin comes in negated).
+struct Evaluation {
+  Outcome outcome = Outcome::undefined;
+  bool complete = true;              ///< false: stopped early because it cannot reach the front, or failed
+  std::vector<double> objectives;    ///< in the problem's order; NaN where unknown
+  double violation = 0;              ///< graded and finite, 0 when compliant
+  std::vector<std::int16_t> broken;  ///< indices into the problem's check names that failed
+  std::vector<double> shortfall;     ///< relative shortfall, one per entry of `broken`
+};
+
+using Dominated = std::function<bool(const std::vector<double>& objectives)>;
+
+/// The bridge to whatever is being designed. Every member is called from several threads at once, is total
+/// and depends on its arguments only.
+class Evaluator {
+ public:
+  virtual ~Evaluator() = default;
+  virtual const Space& space() const = 0;
+  virtual int objective_count() const = 0;
+  /// Step of each objective for the Pareto filter; 0: raw.
+  virtual const std::vector<double>& resolution() const = 0;
+  virtual const std::vector<std::string>& check_names() const = 0;
+  /// Exact for the objectives that need no solving (NaN for the others), with the checks that need none.
+  virtual Evaluation look(const Choice& choice) const = 0;
+  /// Objectives and limits in order of cost. May stop early (complete = false) once `dominated`, called with
+  /// the objectives known so far and NaN for the others, says the design cannot reach the front; an empty
+  /// function: never. The search passes a front frozen before the batch, so that threads do not matter.
+  virtual Evaluation evaluate(const Choice& choice, const Dominated& dominated) const = 0;
+  /// A design between the options: for each slot with an axis a position in [0, 1] (0: least coordinate,
+  /// 1: greatest), category slots fixed by `categories` (whose other entries are ignored). Violation is
+  /// graded and finite, objectives finite.
+  virtual Evaluation relaxed(const Choice& categories, const std::vector<double>& position) const = 0;
+};
+
+}  // namespace dropfront::search
