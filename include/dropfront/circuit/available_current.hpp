@@ -2,6 +2,7 @@
 #include <functional>
 #include <string>
 
+#include "dropfront/circuit/element_values.hpp"
 #include "dropfront/circuit/steady_state.hpp"
 
 namespace dropfront::circuit {
