@@ -1,5 +1,6 @@
 #pragma once
 #include <cstdint>
+#include <deque>
 #include <memory>
 #include <optional>
 #include <string>
@@ -12,7 +13,22 @@
 
 namespace dropfront::problem {
 
-/// What each slot offers after filters and series expansion. Lists hold pointers into `storage`.
+/// Parts that stand in no list: members of families and inline objects. Adding never moves a part.
+struct DerivedParts {
+  std::deque<parts::Dropper> droppers;
+  std::deque<parts::Resistor> resistors;
+  std::deque<parts::Clamp> clamps;
+  std::deque<parts::Reservoir> reservoirs;
+  std::deque<parts::Rectifier> rectifiers;
+  std::deque<parts::OutputStage> output_stages;
+  std::deque<parts::Varistor> varistors;
+  std::deque<parts::Fuse> fuses;
+  std::deque<parts::Thyristor> thyristors;
+  std::deque<parts::Ceramic> ceramics;
+};
+
+/// What each slot offers after filters and series expansion, in part order (rows as read, then families by
+/// ascending value, then inline objects). Pointers into the problem's catalogue and derived parts.
 struct Offers {
   std::vector<const circuit::Arrangement*> arrangements;
   std::vector<const parts::Dropper*> droppers;
@@ -31,6 +47,7 @@ struct Offers {
   std::vector<const parts::Ceramic*> ceramics;
   std::vector<const parts::Thyristor*> thyristors;
   std::vector<const parts::Resistor*> gate_resistors;
+  bool varistor_before_resistor = true;  ///< line side of the series resistor, else behind it
 };
 
 /// A default the reader filled in, for `check` to print.
@@ -52,7 +69,8 @@ struct Problem {
   std::string title;
   std::string source;  ///< the file as the user named it, for messages
   std::string text;    ///< the problem as JSON, defaults not filled in, this combination's values set
-  std::shared_ptr<parts::Catalogue> catalogue;  ///< lists, families and inline objects; keeps Offers alive
+  std::shared_ptr<parts::Catalogue> catalogue;  ///< rows of the lists, as read
+  std::shared_ptr<DerivedParts> derived;        ///< families and inline objects; both keep Offers alive
   scoring::Requirement requirement;
   Offers offers;
   std::vector<double> resolution;  ///< one an objective of the requirement, SI (cost: currency)
@@ -80,7 +98,8 @@ struct ProblemFile {
 /// Throws values::InputError (file, JSON pointer with line:column, what was found, what is allowed).
 ProblemFile read_problem_file(const std::string& path, const std::vector<std::string>& sets = {});
 
-/// Reads a design file against the problem's lists; inline parts are added to the problem's catalogue.
+/// Reads a design file against the problem's lists; inline parts are added to the problem's
+/// derived parts. `slots` of the problem are ignored: any part of the lists may be named.
 scoring::Design read_design_file(const std::string& path, Problem& problem);
 
 }  // namespace dropfront::problem
