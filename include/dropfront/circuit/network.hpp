@@ -36,6 +36,7 @@ struct CapacitorElement {
   Node a, b;
   double capacitance_F;
   Owner owner;
+  double start_V = 0;  ///< analytic guess of its voltage at mains phase zero in the steady state
 };
 /// Piecewise-linear one-way branch: no current below threshold_V, (v - threshold_V)/slope_ohm above, a to b.
 struct BranchElement {

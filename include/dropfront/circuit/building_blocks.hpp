@@ -1,0 +1,36 @@
+#pragma once
+#include "dropfront/circuit/element_values.hpp"
+#include "dropfront/circuit/network.hpp"
+
+namespace dropfront::circuit {
+
+/// Resistance of the documented leak that fixes the potential of a bridge's output while all diodes are off.
+inline constexpr double kBridgeLeak_ohm = 1e9;
+
+/// Line, series resistor, dropper with its loss and discharge chain. Returns the node behind the dropper.
+Node add_mains_side(Network& network, const ElementValues& values);
+
+/// Zener breakdown from cathode to anode, knee branch included.
+void add_clamp(Network& network, Node cathode, Node anode, const ClampCurve& clamp);
+
+/// One rectifier diode.
+void add_rectifier(Network& network, Node anode, Node cathode, const Curve& curve);
+
+/// Four diodes between the a.c. nodes `line_side` and the neutral, their leaks, and the half-period symmetry.
+/// Returns the positive and negative rail nodes.
+struct BridgeNodes {
+  Node positive, negative;
+};
+BridgeNodes add_bridge(Network& network, Node line_side, const ElementValues& values);
+
+/// Reservoir with its ESR and the load, and names them the rail.
+void add_rail(Network& network, Node positive, Node negative, const ElementValues& values);
+
+/// Analytic cold start at mains phase zero (v = 0, rising, dropper current at its crest): the rail at its
+/// clamp, the dropper carrying what is left. `drop_V` is what stands between dropper node and rail.
+void set_start(Network& network, const ElementValues& values, double rail_V, double drop_V);
+
+/// Zener in breakdown in series with a forward diode, as one equivalent curve (exact for these curves).
+ClampCurve in_series(const ClampCurve& clamp, const Curve& forward);
+
+}  // namespace dropfront::circuit

@@ -1,0 +1,19 @@
+#include "dropfront/circuit/arrangements/builders.hpp"
+#include "dropfront/circuit/building_blocks.hpp"
+
+namespace dropfront::circuit {
+
+Network build_half_wave_clamp_ahead(const ElementValues& values) {
+  Network network;
+  const Node behind = add_mains_side(network, values);
+  add_clamp(network, behind, 0, values.clamp);
+  add_rectifier(network, 0, behind, values.rectifier);  // the zener's forward direction resets the dropper
+  const Node rail = network.add_node();
+  add_rectifier(network, behind, rail, values.rectifier);
+  add_rail(network, rail, 0, values);
+  set_start(network, values, values.clamp.main.threshold_V - values.rectifier.threshold_V,
+            values.rectifier.threshold_V);
+  return network;
+}
+
+}  // namespace dropfront::circuit

@@ -1,0 +1,96 @@
+#include "dropfront/circuit/building_blocks.hpp"
+
+#include <cmath>
+#include <numbers>
+
+namespace dropfront::circuit {
+
+Node add_mains_side(Network& network, const ElementValues& values) {
+  const Node line = network.add_node();
+  network.source = {line, values.mains};
+  const Node after_resistor = network.add_node();
+  network.resistors.push_back({line, after_resistor, values.series_resistor_ohm, Owner::series_resistor});
+  Node film = after_resistor;
+  if (values.dropper_esr_ohm > 0) {
+    film = network.add_node();
+    network.resistors.push_back({after_resistor, film, values.dropper_esr_ohm, Owner::dropper});
+  }
+  const Node behind = network.add_node();
+  network.capacitors.push_back({film, behind, values.dropper_F, Owner::dropper});
+  if (std::isfinite(values.discharge_ohm)) {
+    network.resistors.push_back({after_resistor, behind, values.discharge_ohm, Owner::discharge});
+  }
+  return behind;
+}
+
+void add_clamp(Network& network, Node cathode, Node anode, const ClampCurve& clamp) {
+  if (clamp.knee) {
+    network.branches.push_back(
+        {cathode, anode, clamp.knee->threshold_V, clamp.knee->slope_ohm, Owner::clamp});
+  }
+  network.branches.push_back({cathode, anode, clamp.main.threshold_V, clamp.main.slope_ohm, Owner::clamp});
+}
+
+void add_rectifier(Network& network, Node anode, Node cathode, const Curve& curve) {
+  network.branches.push_back({anode, cathode, curve.threshold_V, curve.slope_ohm, Owner::rectifier});
+}
+
+BridgeNodes add_bridge(Network& network, Node line_side, const ElementValues& values) {
+  const Node positive = network.add_node();
+  const Node negative = network.add_node();
+  add_rectifier(network, line_side, positive, values.rectifier);
+  add_rectifier(network, 0, positive, values.rectifier);
+  add_rectifier(network, negative, line_side, values.rectifier);
+  add_rectifier(network, negative, 0, values.rectifier);
+  for (const Node ac : {line_side, Node{0}}) {
+    network.resistors.push_back({ac, positive, kBridgeLeak_ohm, Owner::leak});
+    network.resistors.push_back({negative, ac, kBridgeLeak_ohm, Owner::leak});
+  }
+  if (values.mains.odd_only()) network.half_period_signs = {-1, 1};
+  return {positive, negative};
+}
+
+void add_rail(Network& network, Node positive, Node negative, const ElementValues& values) {
+  Node plate = positive;
+  if (values.reservoir_esr_ohm > 0) {
+    plate = network.add_node();
+    network.resistors.push_back({positive, plate, values.reservoir_esr_ohm, Owner::reservoir});
+  }
+  network.capacitors.push_back({plate, negative, values.reservoir_F, Owner::reservoir});
+  if (values.rail_current_A > 0) {
+    network.loads.push_back({positive, negative, values.rail_current_A, values.load_cutoff_V});
+  }
+  network.rail = positive;
+  network.rail_return = negative;
+}
+
+void set_start(Network& network, const ElementValues& values, double rail_V, double drop_V) {
+  const double crest_current_A =
+      values.mains.omega() * values.dropper_F * std::numbers::sqrt2 * values.mains.voltage_Vrms();
+  for (auto& capacitor : network.capacitors) {
+    if (capacitor.owner == Owner::dropper) {
+      capacitor.start_V = -(rail_V + drop_V) - crest_current_A * values.series_resistor_ohm;
+    } else {
+      capacitor.start_V = rail_V;
+    }
+  }
+}
+
+ClampCurve in_series(const ClampCurve& clamp, const Curve& forward) {
+  ClampCurve sum;
+  if (!clamp.knee) {
+    sum.main = {clamp.main.threshold_V + forward.threshold_V, clamp.main.slope_ohm + forward.slope_ohm};
+    return sum;
+  }
+  const double knee_slope = clamp.knee->slope_ohm;
+  const double both = 1 / (1 / knee_slope + 1 / clamp.main.slope_ohm);
+  // Current at which the main branch opens beside the knee branch; the series curve bends there too.
+  const double bend_A = (clamp.main.threshold_V - clamp.knee->threshold_V) / knee_slope;
+  sum.knee = Curve{clamp.knee->threshold_V + forward.threshold_V, knee_slope + forward.slope_ohm};
+  sum.main.threshold_V = clamp.main.threshold_V + forward.threshold_V + forward.slope_ohm * bend_A;
+  const double both_in_series = both + forward.slope_ohm;
+  sum.main.slope_ohm = 1 / (1 / both_in_series - 1 / sum.knee->slope_ohm);
+  return sum;
+}
+
+}  // namespace dropfront::circuit
