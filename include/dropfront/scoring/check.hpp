@@ -8,7 +8,7 @@ namespace dropfront::scoring {
 
 /// Where a check was at its worst.
 struct At {
-  std::string supply;  ///< empty with a single unnamed supply
+  std::string supply;  ///< empty with a single unnamed supply; filled in by the scorer
   std::string corner;  ///< lean_cold, ..., plug_in, shorted, unplug, fault
   std::optional<double> ambient_degC;
   std::string load;  ///< name, "none", or a current as text
@@ -23,7 +23,8 @@ struct Check {
   std::optional<double> limit;  ///< absent: no rating given
   std::string_view unit;
   bool at_most = true;       ///< side "<=", else ">="
-  std::optional<bool> pass;  ///< null: no rating given
+  std::optional<bool> pass;  ///< null: no rating given, or unsolved
+  bool unsolved = false;     ///< no steady state or transient to judge by: never accepted as a missing rating
   At at;
   std::string basis;  ///< the formula or source by name, in a few words
 

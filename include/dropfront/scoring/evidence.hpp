@@ -2,54 +2,27 @@
 #include <memory>
 #include <optional>
 #include <string>
+#include <vector>
 
-#include "dropfront/circuit/available_current.hpp"
-#include "dropfront/circuit/transient.hpp"
+#include "dropfront/scoring/corners/mains_shape.hpp"
 #include "dropfront/scoring/design.hpp"
+#include "dropfront/scoring/lean.hpp"
+#include "dropfront/scoring/load_profile.hpp"
+#include "dropfront/scoring/operating_point.hpp"
+#include "dropfront/scoring/plug_in.hpp"
 #include "dropfront/scoring/requirement.hpp"
 
 namespace dropfront::scoring {
 
-/// One solved operating point and what it was solved with.
-struct OperatingPoint {
-  std::string corner;
-  double ambient_degC = 25;  ///< outside the enclosure
-  double local_degC = 25;    ///< ambient + enclosure x input power
-  std::string ends;
-  std::string load;           ///< name for people
-  double load_current_A = 0;  ///< at the output
-  double rail_current_A = 0;  ///< adds Iq, leakage and rail loads
-  circuit::ElementValues values;
-  circuit::SteadyState state;
-  double clamp_junction_degC = 25;
-};
-
-/// The lean corner's answer.
-struct LeanAnswer {
-  OperatingPoint cold, hot;                          ///< at the heaviest sustained load, at the deciding ends
-  double available_cold_A = 0, available_hot_A = 0;  ///< rail current
-  bool hot_decides = false;
-  double margin_A = 0;  ///< at the output
-  double margin_new_A = 0;
-  double capability_A = 0;  ///< greatest sustained output current
-  bool usable = false;
-  std::string reason;
-};
-
-struct PlugInAnswer {
-  circuit::Transient rail;   ///< high clamp curve, reservoir C min, ESR max: rail.transient
-  circuit::Transient clamp;  ///< low-slope curve: the clamp's pulse
-  circuit::Transient resistor_low, resistor_high;  ///< both ends of Rs
-  double clamp_pulse_use = 0;  ///< fraction of the clamp's pulse rating used, absent rating: 0
-  double peak_current_A = 0;
-  bool usable = false;
-  std::string reason;
-};
-
-/// The corners of one design on one supply, each solved once, when first asked for.
+/// The corners of one design on one supply, each solved once, when first asked for. What a corner holds does
+/// not depend on which others were asked for, nor in which order.
+/// The design must have arrangement, dropper, series resistor, clamp, reservoir, rectifier and output stage.
 class Evidence {
  public:
   Evidence(const Design& design, const Requirement& requirement, const Supply& supply);
+  /// With shapes made before (`shapes` must outlive this).
+  Evidence(const Design& design, const Requirement& requirement, const Supply& supply,
+           const MainsShapes& shapes);
   ~Evidence();
   Evidence(const Evidence&) = delete;
   Evidence& operator=(const Evidence&) = delete;
@@ -57,16 +30,38 @@ class Evidence {
   const Design& design() const;
   const Requirement& requirement() const;
   const Supply& supply() const;
+  const MainsShapes& shapes() const;
+  const LoadProfile& loads() const;
 
   double required_rail_V() const;  ///< V_required
   const LeanAnswer& lean();
+  const OperatingPoint& lean_cold();  ///< at the heaviest sustained load, at the ends that decide there
+  const OperatingPoint& lean_hot();
+  /// Rail current the lean corner delivers with the rail minimum at `rail_V` (least of both ambients, at the
+  /// deciding ends), without Iq and leakage taken off. Absent: no answer.
+  std::optional<double> lean_current_at_A(double rail_V);
+  /// Rail current taken beside the output load: Iq (greatest; in dropout: the greater of the two), leakage,
+  /// rail loads with the mean of their bursts.
+  double overhead_A(bool in_dropout) const;
+  /// The margin with new parts (no ageing), else as lean().margin_A. Absent: no answer.
+  std::optional<double> margin_new_A();
+
   const OperatingPoint& nominal();
-  const OperatingPoint& rich_empty();      ///< the ambient with the greatest rail
+  const OperatingPoint& rich_empty();      ///< the ambient with the greatest rail (rail_greatest_V)
   const OperatingPoint& rich_empty_hot();  ///< the same load at the high ambient, for powers
-  const OperatingPoint& rich_loaded();     ///< the load with the greatest input power
+  const OperatingPoint& rich_loaded();     ///< of rich_loads(), the one with the greatest input power
+  /// Rich loaded from no load to the heaviest, in that order: stresses that grow with load are worst at the
+  /// last, powers somewhere between. A check takes the worst of these.
+  const std::vector<OperatingPoint>& rich_loads();
   const OperatingPoint& standby();
-  const OperatingPoint& standby_worst();
+  const OperatingPoint& standby_worst();  ///< production worst: the standby objective
   const PlugInAnswer& plug_in();
+
+  /// Available rail current with the values of `point` (its own V_required at nominal). Absent: no answer.
+  std::optional<double> available_A(const OperatingPoint& point);
+
+  int steady_states() const;  ///< solved so far, searches included
+  int transients() const;     ///< run so far
 
  private:
   struct Impl;

@@ -1,11 +1,13 @@
 #pragma once
 #include <cstdint>
+#include <functional>
 #include <optional>
 #include <string>
 #include <vector>
 
 #include "dropfront/circuit/steady_state.hpp"
 #include "dropfront/scoring/check.hpp"
+#include "dropfront/scoring/corners/mains_shape.hpp"
 #include "dropfront/scoring/design.hpp"
 #include "dropfront/scoring/requirement.hpp"
 
@@ -60,8 +62,26 @@ struct Score {
   double violation = 0;
 };
 
-/// Scores one design. Total: any design gives a verdict; never throws, never NaN in a set field. Depends on
-/// nothing but its arguments, so `assess` and `search` give the same bits.
+/// Called once cost and area are known, and again once all four objectives are: true stops the score there
+/// (complete = false). It must depend on its argument only for the same bits on any thread.
+using Stop = std::function<bool(const Objectives& known)>;
+
+/// Scores designs against one requirement. What depends on the requirement alone is worked out once.
+/// Thread-safe; `requirement` must outlive it.
+class Scorer {
+ public:
+  explicit Scorer(const Requirement& requirement);
+  /// Total: any design gives a verdict; never throws, never NaN in a set field. Depends on nothing but the
+  /// design, the requirement and the depth, so `assess` and `search` give the same bits; a deeper score
+  /// repeats the figures of a shallower one to the bit.
+  Score score(const Design& design, Depth depth, const Stop& stop = {}) const;
+
+ private:
+  const Requirement* requirement_;
+  std::vector<MainsShapes> shapes_;
+};
+
+/// One design scored once.
 Score score(const Design& design, const Requirement& requirement, Depth depth);
 
 }  // namespace dropfront::scoring
