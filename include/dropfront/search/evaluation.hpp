@@ -13,7 +13,8 @@ enum class Outcome { compliant, breaks_limits, undefined };
 /// What the search learns of one design. All objectives are minimised (a margin comes in negated).
 struct Evaluation {
   Outcome outcome = Outcome::undefined;
-  bool complete = true;              ///< false: stopped early because it cannot reach the front, or failed
+  bool complete = true;              ///< false: stopped early because it cannot reach the front, or failed;
+                                     ///< what was computed by then is filled in all the same
   std::vector<double> objectives;    ///< in the problem's order; NaN where unknown
   double violation = 0;              ///< graded and finite, 0 when compliant
   std::vector<std::int16_t> broken;  ///< indices into the problem's check names that failed
@@ -33,14 +34,17 @@ class Evaluator {
   virtual const std::vector<double>& resolution() const = 0;
   virtual const std::vector<std::string>& check_names() const = 0;
   /// Exact for the objectives that need no solving (NaN for the others), with the checks that need none.
+  /// Outcome compliant: none of those checks is broken, and a full evaluation may still comply.
   virtual Evaluation look(const Choice& choice) const = 0;
   /// Objectives and limits in order of cost. May stop early (complete = false) once `dominated`, called with
-  /// the objectives known so far and NaN for the others, says the design cannot reach the front; an empty
-  /// function: never. The search passes a front frozen before the batch, so that threads do not matter.
+  /// the objectives known so far and NaN for the others (a value may also be a bound the objective cannot
+  /// fall below), says the design cannot reach the front, or once a check fails. With an empty function
+  /// nothing is skipped: every check is made, failed or not, and complete = true unless undefined.
+  /// The search passes a front frozen before the batch, so that threads do not matter.
   virtual Evaluation evaluate(const Choice& choice, const Dominated& dominated) const = 0;
-  /// A design between the options: for each slot with an axis a position in [0, 1] (0: least coordinate,
-  /// 1: greatest), category slots fixed by `categories` (whose other entries are ignored). Violation is
-  /// graded and finite, objectives finite.
+  /// A design between the options: `position` holds one entry for each slot whose `coordinate` is not empty,
+  /// in slot order, in [0, 1] (0: least coordinate, 1: greatest); category slots are fixed by `categories`
+  /// (one entry a slot; those of other slots are ignored). Violation is graded and finite, objectives finite.
   virtual Evaluation relaxed(const Choice& categories, const std::vector<double>& position) const = 0;
 };
 
