@@ -1,4 +1,6 @@
 #pragma once
+#include <cstdint>
+#include <optional>
 #include <string>
 #include <vector>
 
@@ -19,6 +21,11 @@ struct Entry {
   std::optional<double> tightest_headroom;
   bool on_front = true;
   std::optional<scoring::Score> evidence;  ///< ranked designs only
+  struct Alternative {
+    std::string slot;
+    std::vector<std::string> parts;  ///< electrically equal, not better in price or size
+  };
+  std::vector<Alternative> alternatives;  ///< second sources
 };
 
 struct RankedList {
@@ -31,6 +38,8 @@ struct Result {
   const problem::Problem* problem = nullptr;
   Status status = Status::done;
   search::SearchCounts counts;
+  std::uint64_t seed = 1;
+  std::string effort = "normal";
   bool exhaustive = false;
   std::vector<Entry> front;
   std::vector<Entry> extras;  ///< ranked, not on the front
@@ -49,5 +58,8 @@ struct Result {
   std::vector<Conflict> conflict;  ///< most often failed first; filled when nothing complies
   std::vector<std::string> cautions;
 };
+
+/// The entry of that number, on the front or off it; null if there is none.
+const Entry* find_entry(const Result& result, int number);
 
 }  // namespace dropfront::report

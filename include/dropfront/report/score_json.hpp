@@ -1,0 +1,25 @@
+#pragma once
+#include "dropfront/report/json_writer.hpp"
+#include "dropfront/scoring/score.hpp"
+
+namespace dropfront::report {
+
+/// The assess document: design, verdict, objectives, current_margin_new_A, operation, checks, cautions.
+/// `operation` is {corner: {...}} with one supply, {supply: {corner: {...}}} with several.
+void write_score(JsonWriter& json, const scoring::Design& design, const scoring::Requirement& requirement,
+                 const scoring::Score& score);
+
+/// The document by itself, ended by a line break.
+std::string score_document(const scoring::Design& design, const scoring::Requirement& requirement,
+                           const scoring::Score& score);
+
+/// ["...", ...], one a line.
+void write_texts(JsonWriter& json, const std::vector<std::string>& texts);
+
+/// R.m.s. mains voltage of a named corner: low for lean, high for rich, else nominal.
+double corner_voltage_Vrms(const scoring::Supply& supply, std::string_view corner);
+
+/// Slot or sink by which a loss is reported, e.g. "series_resistor"; "load" is all that the rail feeds.
+std::string_view owner_name(circuit::Owner owner);
+
+}  // namespace dropfront::report

@@ -1,0 +1,12 @@
+#include "dropfront/report/result.hpp"
+
+namespace dropfront::report {
+
+const Entry* find_entry(const Result& result, int number) {
+  for (const auto* list : {&result.front, &result.extras})
+    for (const auto& entry : *list)
+      if (entry.number == number) return &entry;
+  return nullptr;
+}
+
+}  // namespace dropfront::report
