@@ -61,14 +61,18 @@ double greatest_diffusion_W_sqrt_s(const std::vector<PowerStep>& trace) {
   return best;
 }
 
-double pulse_use(const std::vector<PowerStep>& trace, const PulseRating& rating, double start_degC) {
-  const double room_K = rating.max_junction_degC - std::max(start_degC, 25.0);
-  if (!(room_K > 0)) return std::numeric_limits<double>::infinity();
+double pulse_stress_W_sqrt_s(const std::vector<PowerStep>& trace, double shortest_s) {
   double peak_W = 0;
   for (const PowerStep& step : trace)
     if (step.duration_s > 0) peak_W = std::max(peak_W, step.power_W);
-  const double stress = std::max(greatest_diffusion_W_sqrt_s(trace), peak_W * std::sqrt(rating.shortest_s));
-  return stress / (rating.power_W * std::sqrt(rating.time_s)) * (rating.max_junction_degC - 25) / room_K;
+  return std::max(greatest_diffusion_W_sqrt_s(trace), peak_W * std::sqrt(shortest_s));
+}
+
+double pulse_use(double stress_W_sqrt_s, const PulseRating& rating, double start_degC) {
+  const double room_K = rating.max_junction_degC - std::max(start_degC, 25.0);
+  if (!(room_K > 0)) return std::numeric_limits<double>::infinity();
+  return stress_W_sqrt_s / (rating.power_W * std::sqrt(rating.time_s)) * (rating.max_junction_degC - 25) /
+         room_K;
 }
 
 double film_pulse_energy_J(double rated_J, double rated_s, double pulse_s) {

@@ -11,7 +11,11 @@ namespace {
 using Catch::Matchers::WithinRel;
 constexpr double kRounding = 1e-12;
 
-const PulseRating kRating{4.5, 8.3e-3, 150, 0};
+const PulseRating kRating{4.5, 8.3e-3, 150};
+
+double use(const std::vector<PowerStep>& trace, double start_degC = 25) {
+  return pulse_use(greatest_diffusion_W_sqrt_s(trace), kRating, start_degC);
+}
 
 /// P0·exp(-t/tau) in `pieces` equal stretches over `length` time constants, each with its mean power.
 std::vector<PowerStep> decay(double peak_W, double tau_s, int pieces, double length = 6) {
@@ -26,33 +30,33 @@ std::vector<PowerStep> decay(double peak_W, double tau_s, int pieces, double len
 }
 
 TEST_CASE("the rated pulse from a junction at 25 degC uses exactly the whole rating") {
-  CHECK_THAT(pulse_use({{8.3e-3, 4.5}}, kRating, 25), WithinRel(1.0, kRounding));
+  CHECK_THAT(use({{8.3e-3, 4.5}}, 25), WithinRel(1.0, kRounding));
 }
 
 TEST_CASE("a pulse a hundred times shorter may have ten times the power") {
-  CHECK_THAT(pulse_use({{8.3e-5, 45}}, kRating, 25), WithinRel(1.0, kRounding));
+  CHECK_THAT(use({{8.3e-5, 45}}, 25), WithinRel(1.0, kRounding));
 }
 
 TEST_CASE("cutting a trace into more stretches changes nothing") {
   std::vector<PowerStep> fine;
   for (int k = 0; k < 83; ++k) fine.push_back({1e-4, 4.5});
-  CHECK_THAT(pulse_use(fine, kRating, 25), WithinRel(1.0, 1e-9));  // sums of 83 times
+  CHECK_THAT(use(fine), WithinRel(1.0, 1e-9));  // sums of 83 times
 }
 
 TEST_CASE("the use is proportional to the power and never falls when a stretch is added") {
   const std::vector<PowerStep> once{{1e-4, 20}, {2e-4, 5}};
   const std::vector<PowerStep> twice{{1e-4, 40}, {2e-4, 10}};
   const std::vector<PowerStep> longer{{1e-4, 20}, {2e-4, 5}, {1e-5, 100}};
-  CHECK_THAT(pulse_use(twice, kRating, 25), WithinRel(2 * pulse_use(once, kRating, 25), kRounding));
-  CHECK(pulse_use(longer, kRating, 25) >= pulse_use(once, kRating, 25));
-  CHECK(pulse_use({}, kRating, 25) == 0);
+  CHECK_THAT(use(twice), WithinRel(2 * use(once), kRounding));
+  CHECK(use(longer) >= use(once));
+  CHECK(use({}) == 0);
 }
 
 TEST_CASE("a warm junction leaves a smaller share of the rating and one at its maximum leaves none") {
   // Half of the 125 K is gone at 87.5 degC.
-  CHECK_THAT(pulse_use({{8.3e-3, 4.5}}, kRating, 87.5), WithinRel(2.0, kRounding));
-  CHECK(std::isinf(pulse_use({{8.3e-3, 4.5}}, kRating, 150)));
-  CHECK(pulse_use({{8.3e-3, 4.5}}, kRating, -20) == pulse_use({{8.3e-3, 4.5}}, kRating, 25));
+  CHECK_THAT(use({{8.3e-3, 4.5}}, 87.5), WithinRel(2.0, kRounding));
+  CHECK(std::isinf(use({{8.3e-3, 4.5}}, 150)));
+  CHECK(use({{8.3e-3, 4.5}}, -20) == use({{8.3e-3, 4.5}}, 25));
 }
 
 TEST_CASE("an exponential pulse heats as Dawson's integral says") {
@@ -80,10 +84,10 @@ TEST_CASE("a peak inside a stretch after a step up is found") {
 }
 
 TEST_CASE("a spike shorter than the shortest stated pulse counts as that long") {
-  PulseRating rating = kRating;
-  rating.shortest_s = 10e-6;
-  CHECK(pulse_use({{1e-9, 100}}, rating, 25) == pulse_use({{10e-6, 100}}, rating, 25));
-  CHECK(pulse_use({{1e-9, 100}}, kRating, 25) < pulse_use({{1e-9, 100}}, rating, 25));
+  const std::vector<PowerStep> spike{{1e-9, 100}};
+  CHECK(pulse_stress_W_sqrt_s(spike, 10e-6) == greatest_diffusion_W_sqrt_s({{10e-6, 100}}));
+  CHECK(pulse_stress_W_sqrt_s(spike, 0) == greatest_diffusion_W_sqrt_s(spike));
+  CHECK(pulse_stress_W_sqrt_s({{1e-3, 100}}, 10e-6) == greatest_diffusion_W_sqrt_s({{1e-3, 100}}));
 }
 
 TEST_CASE("a film resistor takes less energy in a shorter pulse") {

@@ -17,21 +17,22 @@ struct PowerStep {
 /// memory.
 double greatest_diffusion_W_sqrt_s(const std::vector<PowerStep>& trace);
 
+/// Greatest diffusion value, but not less than √shortest times the peak power: below `shortest_s` (the
+/// shortest pulse the data speak of, 0: none) a spike counts as if it lasted so long.
+double pulse_stress_W_sqrt_s(const std::vector<PowerStep>& trace, double shortest_s);
+
 /// Single-pulse rating of a junction that starts at 25 degC.
 struct PulseRating {
   double power_W = 0;  ///< > 0, constant for time_s
   double time_s = 0;   ///< > 0
   double max_junction_degC = 150;
-  /// The t^(-½) line is followed down to this length only; a shorter spike counts as if it lasted so long at
-  /// its peak power.
-  double shortest_s = 0;
 };
 
-/// Share of the rating that a trace uses up, from a junction at `start_degC`:
-///   max(diffusion, P_peak·√t_shortest) / (P_ref·√t_ref) · (Tjmax - 25)/(Tjmax - Tstart)
+/// Share of the rating that a pulse of the given stress uses up, from a junction at `start_degC`:
+///   stress / (P_ref·√t_ref) · (Tjmax - 25)/(Tjmax - Tstart)
 /// 1 is the rating. Infinite when the junction starts at or above its maximum; a start below 25 degC earns no
 /// credit.
-double pulse_use(const std::vector<PowerStep>& trace, const PulseRating& rating, double start_degC);
+double pulse_use(double stress_W_sqrt_s, const PulseRating& rating, double start_degC);
 
 /// Energy in joules a film resistor takes in a pulse of `pulse_s` when it takes `rated_J` in one of
 /// `rated_s`, by P·√t = constant: E = E_ref·√(t/t_ref). Both times > 0. Wirewound parts hold a fixed energy
