@@ -20,8 +20,8 @@ const std::vector<std::string>& series_names();
 /// or 3 digits; exceptions: eight members of E24 (inherited by E3..E12) and 9.20 of E192.
 const std::vector<int>& series_decade(Series series);
 
-/// `value` > 0 and finite for the following; members are correctly rounded decimals (4700 is 4.7e3 exactly).
-/// A value within 1e-9 of a member counts as that member.
+/// Values of 1e-30 .. 1e30 for the following, else 0 or an empty list. Members are correctly rounded decimals
+/// (4700 is 4.7e3 exactly). A value within 1e-9 of a member counts as that member.
 
 /// The member with the least difference from `value` (ties: the lower).
 double nearest_preferred(Series series, double value);
@@ -30,7 +30,7 @@ double nearest_preferred(Series series, double value);
 double next_lower_preferred(Series series, double value);
 double next_higher_preferred(Series series, double value);
 
-/// All members of [from, to], ascending. Empty when from > to or either is not positive and finite.
+/// All members of [from, to], ascending. Empty when from > to.
 std::vector<double> preferred_between(Series series, double from, double to);
 
 }  // namespace dropfront::values
