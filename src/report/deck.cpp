@@ -16,6 +16,9 @@ constexpr double kJunctionShare = 0.01;         // emission coefficient
 constexpr double kJunctionSaturation_A = 1e-9;  // its reverse current: below any leakage that matters
 constexpr double kThermal_V = 0.025864186;      // kT/q at 27 degC, the simulator's own temperature
 constexpr double kJunctionReference_A = 1e-3;   // where the smooth curve meets the piecewise-linear one
+// Without it a bridge whose diodes are all off hangs on the leak alone, and some runs stop for want of a time
+// step.
+constexpr double kJunctionCapacitance_F = 5e-12;
 
 constexpr std::array<std::string_view, static_cast<int>(circuit::Owner::count)> kOwnerNames{
     "line",    "series resistor", "dropper",       "discharge chain",
@@ -89,8 +92,8 @@ void write_branches(Deck& deck, const std::vector<circuit::BranchElement>& branc
     } else {
       deck.line("VT{0} {1} d{0} DC {2}", number, node(branch.a), branch.threshold_V - junction_V);
       deck.line("D{0} d{0} {1} DM{0}", number, node(branch.b));
-      deck.line(".model DM{} D(IS={} N={} RS={})", number, kJunctionSaturation_A, kJunctionShare,
-                branch.slope_ohm);
+      deck.line(".model DM{} D(IS={} N={} RS={} CJO={})", number, kJunctionSaturation_A, kJunctionShare,
+                branch.slope_ohm, kJunctionCapacitance_F);
     }
   }
 }

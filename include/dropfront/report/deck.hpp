@@ -8,7 +8,7 @@ namespace dropfront::report {
 
 /// How a piecewise-linear branch is written.
 enum class BranchForm {
-  smooth,    ///< near-ideal junction (IS 1 nA, N 0.01) with RS = slope, in series with the threshold
+  smooth,  ///< near-ideal junction (IS 1 nA, N 0.01, CJO 5 pF) with RS = slope, in series with the threshold
   piecewise  ///< the exact curve, as a behavioural current source
 };
 
