@@ -32,10 +32,11 @@ void check_stays(const Arrangement& arrangement) {
     INFO(arrangement.name << ": " << design.purpose);
     const Network network = arrangement.build(design.values);
     const SteadyState ours = solve_steady_state(network);
+    INFO(ours.reason);
     REQUIRE(ours.usable());
     report::DeckOptions options;
     options.initial_V.assign(ours.start.begin(), ours.start.end());
-    options.run_periods = 24;
+    options.run_periods = design.run_periods;
     compare(ours, support::run_ngspice(report::make_deck(network, design.purpose, options)));
   }
 }
@@ -47,6 +48,7 @@ void check_cold_start(const Arrangement& arrangement, std::size_t which, double 
   INFO(arrangement.name << ", cold start: " << design.purpose);
   const Network network = arrangement.build(design.values);
   const SteadyState ours = solve_steady_state(network);
+  INFO(ours.reason);
   REQUIRE(ours.usable());
   report::DeckOptions options;
   options.run_periods = run_periods;

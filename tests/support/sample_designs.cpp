@@ -1,5 +1,7 @@
 #include "support/sample_designs.hpp"
 
+#include <algorithm>
+#include <cmath>
 #include <numbers>
 
 namespace dropfront::support {
@@ -47,7 +49,10 @@ std::vector<SampleDesign> sample_designs(const circuit::Arrangement& arrangement
   std::vector<SampleDesign> sample;
   const auto add = [&](const std::string& purpose, ElementValues values, double load_share) {
     values.rail_current_A = load_share * charge_balance_A(arrangement, values);
-    sample.push_back({purpose, &arrangement, std::move(values)});
+    // Slowest fall: the load alone discharges the reservoir; ten times 0.2 V of it.
+    const double fall_s = 2.0 * values.reservoir_F / values.rail_current_A;
+    const double periods = std::clamp(std::ceil(fall_s * values.mains.frequency_Hz()), 24.0, 250.0);
+    sample.push_back({purpose, &arrangement, std::move(values), periods});
   };
   // A bridge's 3.3 uF at 230 V would be an oven: the same share of load, smaller parts.
   const double scale = arrangement.full_wave ? 0.5 : 1.0;

@@ -12,6 +12,7 @@ struct SampleDesign {
   std::string purpose;
   const circuit::Arrangement* arrangement = nullptr;
   circuit::ElementValues values;
+  double run_periods = 24;  ///< long enough that a rail off its steady state by 0.2 V would be seen to move
 };
 
 /// The deterministic sample for one arrangement: the corners of practice by hand (light load with a big
