@@ -1,6 +1,4 @@
 #pragma once
-#include <optional>
-#include <string>
 #include <string_view>
 #include <vector>
 
@@ -10,7 +8,7 @@ namespace dropfront::problem {
 
 /// The words of the problem file for the objectives: cost, standby_loss, board_area, current_margin.
 std::string_view objective_name(scoring::Objective objective);
-std::optional<scoring::Objective> find_objective(std::string_view name);
+const std::vector<scoring::Objective>& all_objectives();  ///< in that order
 
 /// plug, switched, fixed.
 std::string_view connection_name(scoring::ConnectionKind kind);

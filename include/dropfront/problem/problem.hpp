@@ -73,7 +73,7 @@ struct Problem {
   std::shared_ptr<DerivedParts> derived;        ///< families and inline objects; both keep Offers alive
   scoring::Requirement requirement;
   Offers offers;
-  std::vector<double> resolution;  ///< one an objective of the requirement, SI (cost: currency)
+  std::vector<double> resolution;  ///< one an objective of the requirement: currency, W, mm2, A
   int top = 5;
   std::string effort = "normal";
   std::uint64_t seed = 1;

@@ -1,0 +1,73 @@
+#include <fmt/format.h>
+
+#include <filesystem>
+
+#include "dropfront/problem/input_hash.hpp"
+#include "dropfront/problem/named_part.hpp"
+#include "dropfront/problem/problem.hpp"
+#include "dropfront/problem/scalars.hpp"
+#include "dropfront/problem/support.hpp"
+#include "dropfront/values/text_file.hpp"
+
+namespace dropfront::problem {
+namespace {
+
+template <class Part>
+const Part* optional_part(ObjectReader& reader, const char* slot, Problem& problem) {
+  const auto cursor = reader.take(slot);
+  return cursor ? read_part<Part>(*cursor, problem) : nullptr;
+}
+
+/// A chain is a part's name (one element), {"part": name, "count": n} or an inline object with "count".
+void read_chain(const Cursor& cursor, Problem& problem, scoring::Design& design) {
+  design.discharge_count = 1;
+  const Node& node = cursor.node();
+  if (node.kind == Node::Kind::object) {
+    const Node* part = node.find("part");
+    for (std::size_t i = 0; i < node.keys.size(); ++i) {
+      if (node.keys[i].name != "count") continue;
+      design.discharge_count = static_cast<int>(read_whole(cursor.member(i), 1, 20));
+      if (part && part->kind == Node::Kind::text && node.keys.size() == 2) {
+        design.discharge = require_part<parts::Resistor>(cursor.member(1 - i), part->text, problem);
+        return;
+      }
+    }
+  }
+  design.discharge = read_part<parts::Resistor>(cursor, problem, {"count"});
+}
+
+void refuse_unused(ObjectReader& reader, const char* slot, const scoring::Design& design) {
+  const auto cursor = reader.take(slot);
+  if (cursor)
+    throw cursor->error(fmt::format("the arrangement {} has no {}", design.arrangement->name, slot));
+}
+
+}  // namespace
+
+scoring::Design read_design_file(const std::string& path, Problem& problem) {
+  const std::string text = values::read_text_file(path);
+  const Node root = parse_document(text, path);
+  ObjectReader reader(Cursor(root, path), keys::design);
+  scoring::Design design;
+  design.arrangement = read_arrangement(reader.require("arrangement"));
+  design.dropper = read_part<parts::Dropper>(reader.require("dropper"), problem);
+  design.series_resistor = read_part<parts::Resistor>(reader.require("series_resistor"), problem);
+  design.clamp = read_part<parts::Clamp>(reader.require("clamp"), problem);
+  design.reservoir = read_part<parts::Reservoir>(reader.require("reservoir"), problem);
+  design.rectifier = read_part<parts::Rectifier>(reader.require("rectifier"), problem);
+  design.output_stage = read_part<parts::OutputStage>(reader.require("output_stage"), problem);
+  if (const auto chain = reader.take("discharge")) read_chain(*chain, problem, design);
+  design.varistor = optional_part<parts::Varistor>(reader, "varistor", problem);
+  design.fuse = optional_part<parts::Fuse>(reader, "fuse", problem);
+  design.ceramic = optional_part<parts::Ceramic>(reader, "ceramic", problem);
+  refuse_unused(reader, "thyristor", design);
+  refuse_unused(reader, "gate_resistor", design);
+  reader.finish();
+  caution_unchecked("design.varistor", design.varistor != nullptr, checks("varistor."), problem.cautions);
+  caution_unchecked("design.fuse", design.fuse != nullptr, checks("fuse."), problem.cautions);
+  caution_unchecked("design.ceramic", design.ceramic != nullptr, checks("ceramic."), problem.cautions);
+  problem.inputs.push_back({std::filesystem::path(path).filename().string(), hash_of_file(path)});
+  return design;
+}
+
+}  // namespace dropfront::problem
