@@ -45,8 +45,8 @@ enum class ColumnType { number, truth, word };
 /// Allowed numbers of a column, in the column's unit.
 struct Range {
   double low = 0;
-  bool low_open = true;  ///< low itself refused
-  double high = 1e300;
+  double high = 1;
+  bool low_open = false;  ///< low itself refused
   bool high_open = false;
 };
 
@@ -58,9 +58,15 @@ struct Column {
   values::Unit unit = values::Unit::count;  ///< numbers only
   Range range;                              ///< numbers only
   std::vector<std::string> words;           ///< words only: those allowed; empty: any text
+  bool several_words = false;               ///< words only: a list, separated by spaces
   std::string default_text;                 ///< property: the default as a person would write it
   std::string default_reason;               ///< property: where the default comes from
+  std::vector<std::string> unless;          ///< required: not needed when all of these are given
+  std::string required_for;                 ///< needed when the column `kind` holds this word
 };
+
+/// "more than 0 and at most 1 mF": the range in words.
+std::string range_text(const Column& column);
 
 /// All columns of a kind, common ones last. `price` (inline parts only) is not among them.
 const std::vector<Column>& columns_of(Kind kind);

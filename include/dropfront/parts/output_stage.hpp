@@ -11,8 +11,8 @@ struct OutputStage {
   StageKind kind = StageKind::direct;
   double output_voltage_V = 0;
   double tolerance = 0;
-  double dropout_V = 0;
-  double quiescent_current_A = 0;
+  double dropout_V = 0;                    ///< default: linear 2 V, else 0
+  double quiescent_current_A = 0;          ///< default: linear 6 mA, step-down 1 mA, direct 0
   double quiescent_current_dropout_A = 0;  ///< default: quiescent_current_A
   Rating input_max_V;
   Rating input_min_V;  ///< step-down: required
@@ -20,7 +20,7 @@ struct OutputStage {
   Rating input_off_V;
   Rating efficiency;  ///< step-down: required; fraction
   Rating thermal_resistance_K_per_W;
-  Rating max_junction_degC;
+  Rating max_junction_degC;  ///< default 150 degC
 };
 
 }  // namespace dropfront::parts

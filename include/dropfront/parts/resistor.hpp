@@ -17,7 +17,7 @@ struct Resistor {
   Rating rated_voltage_Vrms;  ///< limiting element voltage (r.m.s. or d.c.)
   Rating overload_voltage_V;
   Construction construction = Construction::film;
-  Rating pulse_energy_J;  ///< wirewound: joules; film: energy of a 1 ms pulse unless pulse_time given
+  Rating pulse_energy_J;  ///< wirewound: joules, however short; film: energy of a 1 ms pulse
   bool fusible = false;
   Rating opens_at;                    ///< multiple of rated power at which it opens safely
   Rating thermal_resistance_K_per_W;  ///< default (155 - 70)/rated_power
