@@ -14,9 +14,9 @@ namespace {
 
 constexpr auto kFlat = JsonWriter::Layout::flat;
 
-void write_provenance(JsonWriter& json, const Result& result, const std::string& version) {
+void write_provenance(JsonWriter& json, const Result& result) {
   json.begin_object();
-  json.member("version", version);
+  json.member("version", result.version);
   json.member("seed", result.seed);
   json.member("effort", result.effort);
   json.key("inputs");
@@ -124,7 +124,7 @@ void write_conflict(JsonWriter& json, const Result& result) {
 
 }  // namespace
 
-std::string candidates_json(const Result& result, const std::string& version) {
+std::string candidates_json(const Result& result) {
   const problem::Problem& problem = *result.problem;
   JsonWriter json;
   json.begin_object();
@@ -135,7 +135,7 @@ std::string candidates_json(const Result& result, const std::string& version) {
   json.key("problem");
   json.document(nlohmann::ordered_json::parse(problem.text, nullptr, true, true).dump(2));
   json.key("provenance");
-  write_provenance(json, result, version);
+  write_provenance(json, result);
   json.key("counts");
   write_counts(json, result);
   json.key("proof");

@@ -36,6 +36,11 @@ std::string rounded(const std::optional<double>& value, int decimals) {
   return text.find_first_not_of("-0.") == std::string::npos && text.front() == '-' ? text.substr(1) : text;
 }
 
+std::optional<double> thousandfold(const std::optional<double>& value) {
+  if (!value) return std::nullopt;
+  return 1000 * *value;
+}
+
 std::string percent(const std::optional<double>& share) {
   if (!share) return "-";
   const double value = 100 * *share;

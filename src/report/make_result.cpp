@@ -103,10 +103,11 @@ std::string_view ranked_name(scoring::Objective objective) {
 }
 
 Result make_result(const problem::BoundProblem& bound, const search::SearchOutcome& outcome,
-                   const search::SearchOptions& options) {
+                   const search::SearchOptions& options, const std::string& version) {
   const problem::Problem& problem = bound.problem();
   Result result;
   result.problem = &problem;
+  result.version = version;
   result.status = status_of(outcome);
   result.counts = outcome.counts;
   result.seed = options.seed;

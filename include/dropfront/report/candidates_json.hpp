@@ -8,8 +8,7 @@ namespace dropfront::report {
 
 /// candidates.json: format, title, name, status, problem, provenance, counts, proof, front, ranked, extras,
 /// evidence, near_misses, conflict, cautions. Same result, same bytes; no times, paths or thread counts.
-/// `version` is the program's.
-std::string candidates_json(const Result& result, const std::string& version);
+std::string candidates_json(const Result& result);
 
 /// {"problems": [...]}, one candidates document each, in order.
 std::string problems_json(const std::vector<std::string>& candidates_documents);

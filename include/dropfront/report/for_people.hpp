@@ -14,6 +14,9 @@ std::string with_unit(double value, std::string_view unit);
 /// Rounded plain number with `decimals`; "-" when absent.
 std::string rounded(const std::optional<double>& value, int decimals);
 
+/// 1000 times a value, for milliamperes and milliwatts.
+std::optional<double> thousandfold(const std::optional<double>& value);
+
 /// A headroom or share as whole percent ("12 %"), one decimal below 10; "-" when absent.
 std::string percent(const std::optional<double>& share);
 

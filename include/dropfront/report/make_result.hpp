@@ -9,7 +9,7 @@ namespace dropfront::report {
 /// the search ran with; its threads are used here too and never change the answer. The bound problem's
 /// Problem must outlive the result.
 Result make_result(const problem::BoundProblem& bound, const search::SearchOutcome& outcome,
-                   const search::SearchOptions& options);
+                   const search::SearchOptions& options, const std::string& version);
 
 /// The passed check with the least headroom; null where none has one.
 const scoring::Check* tightest_check(const scoring::Score& score);

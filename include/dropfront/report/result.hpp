@@ -36,6 +36,7 @@ struct RankedList {
 /// One finished search, ready for the writers. Pure data; `problem` outlives it.
 struct Result {
   const problem::Problem* problem = nullptr;
+  std::string version;  ///< of the program
   Status status = Status::done;
   search::SearchCounts counts;
   std::uint64_t seed = 1;

@@ -1,0 +1,77 @@
+#include "dropfront/report/ranked_table.hpp"
+
+#include <fmt/core.h>
+
+#include <array>
+
+#include "dropfront/report/design_slots.hpp"
+#include "dropfront/report/for_people.hpp"
+#include "dropfront/report/text_table.hpp"
+
+namespace dropfront::report {
+
+namespace {
+
+std::string tightest_words(const Entry& entry) {
+  if (entry.tightest_check.empty()) return "";
+  return fmt::format("; tightest {} {}", entry.tightest_check, percent(entry.tightest_headroom));
+}
+
+/// Arrangement, output stage, discharge chain and optional parts: what the columns leave out.
+std::string rest_of_design(const Entry& entry) {
+  std::string text(entry.design.arrangement ? entry.design.arrangement->name : std::string_view());
+  for (const SlotPart& part : design_slots(entry.design)) {
+    if (part.slot == "output_stage" || part.slot == "discharge") text += ", " + part.value;
+    if (part.slot == "varistor" || part.slot == "fuse" || part.slot == "thyristor")
+      text += fmt::format(", {}", part.slot);
+  }
+  return text + tightest_words(entry);
+}
+
+}  // namespace
+
+std::string design_table(const std::string& heading, const std::vector<std::string>& labels,
+                         const std::vector<const Entry*>& entries, const std::string& currency) {
+  TextTable table({heading, ">dropper", ">resistor", ">clamp", ">reservoir",
+                   fmt::format(">cost {}", currency), ">standby mW", ">area mm2", ">margin mA"},
+                  1);
+  for (std::size_t i = 0; i < entries.size(); ++i) {
+    const Entry& entry = *entries[i];
+    const auto& design = entry.design;
+    const auto& objectives = entry.objectives;
+    table.row({labels[i], design.dropper ? with_unit(design.dropper->capacitance_F, "F") : "-",
+               design.series_resistor ? short_value(*design.series_resistor) : "-",
+               design.clamp ? short_value(*design.clamp) : "-",
+               design.reservoir ? short_value(*design.reservoir) : "-", rounded(cost_units(objectives), 3),
+               rounded(thousandfold(objectives.standby_loss_W), 0), rounded(area_mm2(objectives), 0),
+               rounded(thousandfold(objectives.current_margin_A), 2)});
+    table.note(rest_of_design(entry), 6);
+  }
+  return table.text();
+}
+
+std::string ranked_table(const Result& result, const RankedList& list) {
+  std::vector<std::string> labels;
+  std::vector<const Entry*> entries;
+  for (const int number : list.numbers) {
+    const Entry* entry = find_entry(result, number);
+    if (entry == nullptr) continue;
+    entries.push_back(entry);
+    labels.push_back(std::to_string(number) + (entry->on_front ? "" : "*"));
+  }
+  return design_table(">no", labels, entries, result.problem->requirement.currency);
+}
+
+std::string ranked_heading(const std::string& name) {
+  static constexpr std::array<std::pair<std::string_view, std::string_view>, 5> kHeadings{
+      {{"cheapest", "Cheapest"},
+       {"lowest_standby", "Lowest standby loss"},
+       {"smallest", "Smallest board area"},
+       {"most_margin", "Most current margin"},
+       {"balanced", "Balanced (least worst regret)"}}};
+  for (const auto& [key, heading] : kHeadings)
+    if (key == name) return std::string(heading);
+  return name;
+}
+
+}  // namespace dropfront::report

@@ -1,0 +1,79 @@
+#include "dropfront/report/summary_text.hpp"
+
+#include <fmt/core.h>
+
+#include <algorithm>
+
+#include "dropfront/report/design_slots.hpp"
+#include "dropfront/report/for_people.hpp"
+#include "dropfront/report/ranked_table.hpp"
+#include "dropfront/report/text_table.hpp"
+
+namespace dropfront::report {
+
+namespace {
+
+std::string counts_text(const Result& result) {
+  const auto& counts = result.counts;
+  std::string text = counted(static_cast<double>(counts.looked)) + " designs looked at, " +
+                     counted(static_cast<double>(counts.scored)) + " scored in full, of " +
+                     counted(counts.space) + " possible";
+  if (result.exhaustive) text += " (all of them)";
+  return text + ".";
+}
+
+std::string nothing_found(const Result& result) {
+  std::string text = result.exhaustive ? "No design of this problem complies: every one was looked at.\n"
+                                       : "No compliant design was found.\n";
+  if (result.conflict.empty()) return text;
+  const auto& worst = result.conflict.front();
+  text += wrapped(
+      fmt::format("Failed most often: {}, by {} designs; the best of them missed its limit by {}.",
+                  worst.check, counted(static_cast<double>(worst.failed)), percent(worst.least_shortfall)));
+  TextTable table({"limit broken", ">designs", ">best missed by"});
+  for (const auto& conflict : result.conflict)
+    table.row(
+        {conflict.check, counted(static_cast<double>(conflict.failed)), percent(conflict.least_shortfall)});
+  text += '\n' + table.text();
+  if (result.near_misses.empty()) return text;
+  TextTable near({"one limit broken", ">missed by", ">dropper", ">resistor", ">clamp", ">reservoir"});
+  for (const auto& miss : result.near_misses) {
+    const auto& design = miss.design;
+    near.row({miss.check, percent(miss.shortfall), with_unit(design.dropper->capacitance_F, "F"),
+              short_value(*design.series_resistor), short_value(*design.clamp),
+              short_value(*design.reservoir)});
+  }
+  return text + '\n' + near.text();
+}
+
+}  // namespace
+
+std::string cautions_text(const std::vector<std::string>& cautions) {
+  std::string text = "Cautions\n";
+  for (const auto& caution : cautions) text += wrapped(caution, "  - ");
+  return text;
+}
+
+std::string summary_body(const Result& result) {
+  std::string text = wrapped(result.problem->title);
+  text += std::string(std::min(kTextWidth, display_width(result.problem->title)), '-') + "\n";
+  if (result.status == Status::cut_short)
+    text += "Cut short: better designs may exist among those not looked at.\n";
+  text += wrapped(counts_text(result));
+  if (result.front.empty()) return text + nothing_found(result);
+  text += wrapped(counted(static_cast<double>(result.front.size())) +
+                  " on the front: no other design found is at least as good in every objective.");
+  for (const auto& list : result.ranked)
+    text += '\n' + ranked_heading(list.name) + '\n' + ranked_table(result, list);
+  if (!result.extras.empty()) text += "  * complies, not on the front\n";
+  return text + "\n" +
+         wrapped(
+             "Margin: output current to spare in the worst case at the end of life. Standby: nominal "
+             "mains, worst new parts. Tightest: the check with the least headroom left.");
+}
+
+std::string summary_text(const Result& result) {
+  return summary_body(result) + '\n' + cautions_text(result.cautions);
+}
+
+}  // namespace dropfront::report
