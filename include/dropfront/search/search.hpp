@@ -21,6 +21,11 @@ struct SearchOptions {
   std::optional<double> time_s;                          ///< the only clock that may decide anything
   const std::atomic<bool>* stop = nullptr;               ///< set by a signal handler
   std::function<void(const struct Progress&)> progress;  ///< called from one thread
+  struct Switches {         ///< to measure what each piece earns; all on in earnest use
+    bool enumerate = true;  ///< enumerate small spaces
+    bool relax = true;      ///< stage relax and what snap makes of it
+    bool predict = true;    ///< order the closing by local models of the objectives not yet known
+  } switches;
 };
 
 struct Progress {
@@ -62,8 +67,9 @@ struct SearchCounts {
 };
 
 struct SearchOutcome {
-  bool cut_short = false;
-  bool exhaustive = false;  ///< every design of the space was looked at
+  bool cut_short = false;   ///< ended by the stop flag, the time or the budget given in the options
+  bool exhaustive = false;  ///< every design of the space was looked at, none left out but by exact reasoning
+  bool closed = false;      ///< exhaustive, or no one-part change of a front member was left untried
   SearchCounts counts;
   std::vector<Candidate> front;       ///< sorted by objectives in order, then choice
   std::vector<RankedSet> ranked;      ///< one an objective, then balanced

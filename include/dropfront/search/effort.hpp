@@ -1,0 +1,29 @@
+#pragma once
+#include <cstdint>
+
+#include "dropfront/search/search.hpp"
+
+namespace dropfront::search {
+
+/// What an effort may spend. A look costs microseconds, an evaluation up to about a millisecond, a relaxed
+/// evaluation about as much as a full one.
+struct EffortPlan {
+  std::int64_t looks;             ///< most designs looked at
+  std::int64_t evaluations;       ///< most evaluations begun, at most 5 % of the looks when heuristic
+  std::int64_t relaxed;           ///< most relaxed evaluations
+  std::int64_t exhaustive_limit;  ///< spaces up to this size are enumerated
+  int aims;                       ///< weight vectors, at least
+  int most_regions;               ///< combinations of category options relaxed, at most
+  int pair_window;                ///< two-part changes: distinct neighbours on either side of each axis
+  double reach;                   ///< designs predicted to miss the front by more than this share of its
+                                  ///< extent are left out of the closing
+};
+
+/// quick / normal / deep; `options.budget` replaces the looks.
+EffortPlan plan_for(const SearchOptions& options);
+
+/// Fixed batch sizes: part of the answer, since a batch sees the front as it was before.
+constexpr int evaluation_batch = 192;
+constexpr int members_a_round = 8;
+
+}  // namespace dropfront::search

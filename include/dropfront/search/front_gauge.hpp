@@ -1,0 +1,26 @@
+#pragma once
+#include <vector>
+
+#include "dropfront/search/pareto.hpp"
+
+namespace dropfront::search {
+
+/// Measures how far a vector lies before or behind a front, as a share of the front's extent.
+class FrontGauge {
+ public:
+  explicit FrontGauge(const ParetoArchive& front);
+
+  /// min over members of max over objectives of (member - point) / extent. Positive: the point improves on
+  /// every member in some objective by at least so much. Negative: how much it must improve to do so. 1 for
+  /// an empty front. Stops early, with a value <= `enough`, once the answer is known not to exceed `enough`.
+  double gain(const std::vector<double>& point, double enough) const;
+
+  const std::vector<double>& extent() const { return extent_; }
+
+ private:
+  std::size_t objectives_;
+  std::vector<double> members_;  ///< scaled by the extent, one after the other
+  std::vector<double> extent_;
+};
+
+}  // namespace dropfront::search

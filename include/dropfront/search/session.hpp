@@ -1,0 +1,82 @@
+#pragma once
+#include <atomic>
+#include <chrono>
+#include <string>
+#include <vector>
+
+#include "dropfront/search/axis.hpp"
+#include "dropfront/search/choice_codec.hpp"
+#include "dropfront/search/effort.hpp"
+#include "dropfront/search/ledger.hpp"
+#include "dropfront/search/local_model.hpp"
+#include "dropfront/search/option_record.hpp"
+#include "dropfront/search/parallel.hpp"
+
+namespace dropfront::search {
+
+/// A design that passed its look and may reach the front.
+struct Looked {
+  Choice choice;
+  std::vector<double> objectives;  ///< NaN where a look does not tell
+  std::size_t origin = 0;          ///< index of its choice in the list that was looked at
+};
+
+/// An evaluation's mark on the ledger.
+struct Merged {
+  Choice choice;
+  Entered entered;
+};
+
+/// What the stages of one search share: the memo of designs, the ledger, the limits, the threads.
+class Session {
+ public:
+  Session(const Evaluator& evaluator, const SearchOptions& options);
+
+  const Evaluator& evaluator;
+  const Space& space;
+  const SearchOptions& options;
+  EffortPlan plan;
+  std::vector<Axis> axes;
+  ChoiceCodec codec;
+  Workers workers;
+  Ledger ledger;
+  LocalModel model;
+  OptionRecord record;
+
+  /// Looks at the choices not seen before, as far as the budget goes, and returns those that stay in play.
+  std::vector<Looked> look_new(const std::vector<Choice>& choices);
+
+  /// Evaluates in batches; the front that an evaluation may stop at is the one before its batch. Keeps to the
+  /// effort's limit of evaluations and stops between batches when the search ends.
+  std::vector<Merged> evaluate(const std::vector<Choice>& choices);
+
+  /// Evaluates to the end without stopping; nothing is merged.
+  std::vector<Evaluation> evaluate_fully(const std::vector<Choice>& choices);
+
+  /// True once the stop flag is set or the given time is over. Asks the clock only when a time was given.
+  bool ended();
+  const std::atomic<bool>& halted() const { return halted_; }
+  bool may_look() const { return ledger.counts().looked < plan.looks; }
+  bool may_evaluate() const { return evaluations_ < plan.evaluations; }
+  std::int64_t evaluations() const { return evaluations_; }
+  void lift_evaluation_limit();  ///< for enumeration
+  void report(const std::string& stage, double fraction);
+
+  /// Positions on the axes of a choice.
+  std::vector<double> position_of(const Choice& choice) const;
+  /// Number of the choice's combination of category options.
+  std::int64_t region_of(const Choice& choice) const;
+
+  bool looks_refused = false;  ///< the budget kept a design from being looked at
+
+ private:
+  void learn(const Choice& choice, const Evaluation& evaluation);
+
+  ChoiceSet seen_;
+  std::vector<int> categories_;
+  std::int64_t evaluations_ = 0;
+  std::atomic<bool> halted_{false};
+  std::chrono::steady_clock::time_point deadline_;
+};
+
+}  // namespace dropfront::search

@@ -1,0 +1,132 @@
+#include "dropfront/search/close.hpp"
+
+#include <algorithm>
+#include <limits>
+#include <set>
+
+#include "dropfront/search/neighbours.hpp"
+#include "dropfront/search/prospect.hpp"
+#include "dropfront/search/spread_order.hpp"
+
+namespace dropfront::search {
+namespace {
+
+class Closer {
+ public:
+  Closer(Session& session, CandidateQueue& queue)
+      : session_(session),
+        queue_(queue),
+        singles_(session.evaluator.objective_count()),
+        pairs_(session.evaluator.objective_count()) {
+    for (const auto& member : session.ledger.front().entries())
+      if (member.alive) join(member.tag);
+  }
+
+  bool run() {
+    while (!session_.ended() && session_.may_evaluate()) {
+      while (queue_.promising() < evaluation_batch && take_up_singles()) {
+      }
+      if (queue_.promising() == 0 && !take_up_pairs() && queue_.empty()) break;
+      evaluate_batch();
+      session_.report("close", progress());
+    }
+    return !session_.ended() && queue_.empty() && queue_.left_out() == 0 && !session_.looks_refused &&
+           singles_.empty();
+  }
+
+ private:
+  void join(std::int64_t tag) {
+    const auto& objectives = session_.ledger.compliant()[tag].evaluation.objectives;
+    singles_.add(tag, objectives);
+    if (!session_.space.coupled.empty()) pairs_.add(tag, objectives);
+  }
+
+  void evaluate_batch() {
+    const auto choices = queue_.pop(evaluation_batch, session_.ledger.front(), session_.plan.reach);
+    for (const auto& rejected : queue_.take_rejected())
+      session_.ledger.pass_over(rejected.choice, rejected.objectives);
+    for (const Merged& merged : session_.evaluate(choices)) {
+      for (std::int64_t tag : merged.entered.removed) {
+        singles_.remove(tag);
+        pairs_.remove(tag);
+      }
+      // A newcomer may have been displaced by a later one of its own batch: add, then remove, in order.
+      if (merged.entered.front) join(merged.entered.tag);
+    }
+  }
+
+  std::vector<Parent> members(SpreadOrder& order) {
+    std::vector<Parent> parents;
+    for (int n = 0; n < members_a_round; ++n) {
+      const std::int64_t tag = order.pick();
+      if (tag < 0) break;
+      const Candidate& member = session_.ledger.compliant()[tag];
+      parents.push_back(Parent{member.choice, member.evaluation.objectives, 0});
+    }
+    return parents;
+  }
+
+  // While nothing complies: the designs closest to complying.
+  std::vector<Parent> broken() {
+    std::vector<Parent> parents;
+    const std::size_t m = static_cast<std::size_t>(session_.evaluator.objective_count());
+    for (const auto& entry : session_.ledger.nearest_broken().entries()) {
+      if (parents.size() == members_a_round) break;
+      if (!broken_taken_.insert(entry.second).second) continue;
+      parents.push_back(Parent{entry.second, std::vector<double>(m, std::numeric_limits<double>::quiet_NaN()),
+                               entry.first[0]});
+    }
+    return parents;
+  }
+
+  bool take_up_singles() {
+    if (session_.ended() || !session_.may_look()) {
+      if (!singles_.empty()) session_.looks_refused = true;
+      return false;
+    }
+    std::vector<Parent> parents = members(singles_);
+    if (parents.empty() && session_.ledger.front().size() == 0) parents = broken();
+    return take_up(parents, [this](const Parent& p) { return one_part_changes(session_.space, p.choice); });
+  }
+
+  bool take_up_pairs() {
+    // One-part changes come first: a quarter of the looks stays theirs.
+    if (session_.ended() || 4 * session_.ledger.counts().looked > 3 * session_.plan.looks) return false;
+    return take_up(members(pairs_), [this](const Parent& p) {
+      return two_part_changes(session_.space, session_.axes, p.choice, session_.plan.pair_window);
+    });
+  }
+
+  template <class Changes>
+  bool take_up(const std::vector<Parent>& parents, const Changes& changes) {
+    std::vector<Choice> choices;
+    std::vector<std::size_t> made_from;
+    for (std::size_t p = 0; p < parents.size(); ++p)
+      for (Choice& choice : changes(parents[p])) {
+        choices.push_back(std::move(choice));
+        made_from.push_back(p);
+      }
+    prospect(session_, queue_, parents, choices, made_from);
+    return !parents.empty();
+  }
+
+  double progress() const {
+    const auto share = [](std::int64_t part, std::int64_t whole) {
+      return static_cast<double>(part) / static_cast<double>(whole);
+    };
+    const double looks = share(session_.ledger.counts().looked, session_.plan.looks);
+    const double scores = share(session_.evaluations(), session_.plan.evaluations);
+    return std::max(looks, scores);
+  }
+
+  Session& session_;
+  CandidateQueue& queue_;
+  SpreadOrder singles_, pairs_;
+  std::set<Choice> broken_taken_;
+};
+
+}  // namespace
+
+bool close(Session& session, CandidateQueue& queue) { return Closer(session, queue).run(); }
+
+}  // namespace dropfront::search

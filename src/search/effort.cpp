@@ -1,0 +1,24 @@
+#include "dropfront/search/effort.hpp"
+
+#include <algorithm>
+
+namespace dropfront::search {
+
+EffortPlan plan_for(const SearchOptions& options) {
+  EffortPlan plan{};
+  switch (options.effort) {
+    case Effort::quick:
+      plan = {200'000, 6'000, 1'500, 5'000, 10, 24, 2, 0.0};
+      break;
+    case Effort::normal:
+      plan = {1'000'000, 30'000, 5'000, 20'000, 20, 64, 3, 0.05};
+      break;
+    case Effort::deep:
+      plan = {2'000'000, 100'000, 20'000, 60'000, 40, 128, 6, 1e9};
+      break;
+  }
+  if (options.budget) plan.looks = std::max<std::int64_t>(1, *options.budget);
+  return plan;
+}
+
+}  // namespace dropfront::search

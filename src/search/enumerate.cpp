@@ -1,0 +1,64 @@
+#include "dropfront/search/enumerate.hpp"
+
+#include <algorithm>
+#include <cmath>
+
+namespace dropfront::search {
+namespace {
+
+// Smallest known values first, in the problem's order of objectives; unknown ones after known ones.
+bool cheaper(const Looked& a, const Looked& b) {
+  for (std::size_t k = 0; k < a.objectives.size(); ++k) {
+    const bool a_known = !std::isnan(a.objectives[k]);
+    const bool b_known = !std::isnan(b.objectives[k]);
+    if (a_known != b_known) return a_known;
+    if (a_known && a.objectives[k] != b.objectives[k]) return a.objectives[k] < b.objectives[k];
+  }
+  return a.choice < b.choice;
+}
+
+// Steps to the next choice, last slot fastest; false after the last one.
+bool advance(Choice& choice, const Space& space) {
+  for (std::size_t s = choice.size(); s-- > 0;) {
+    if (++choice[s] < space.slots[s].size) return true;
+    choice[s] = 0;
+  }
+  return false;
+}
+
+}  // namespace
+
+bool worth_enumerating(const Session& session) {
+  const double size = session.space.size();
+  return session.options.switches.enumerate && size <= static_cast<double>(session.plan.exhaustive_limit) &&
+         size <= static_cast<double>(session.plan.looks);
+}
+
+bool enumerate(Session& session) {
+  for (const Slot& slot : session.space.slots)
+    if (slot.size < 1) return true;  // a slot that offers nothing: an empty space
+  std::vector<Choice> all;
+  Choice choice(session.space.slots.size(), 0);
+  do {
+    all.push_back(choice);
+  } while (advance(choice, session.space));
+  std::vector<Looked> waiting = session.look_new(all);
+  std::sort(waiting.begin(), waiting.end(), cheaper);
+  session.lift_evaluation_limit();
+  std::vector<Choice> batch;
+  for (std::size_t next = 0; next < waiting.size() && !session.ended();) {
+    batch.clear();
+    for (; next < waiting.size() && batch.size() < evaluation_batch; ++next) {
+      const Looked& design = waiting[next];
+      if (session.ledger.front().rejects(design.objectives, design.choice))
+        session.ledger.pass_over(design.choice, design.objectives);
+      else
+        batch.push_back(design.choice);
+    }
+    session.evaluate(batch);
+    session.report("close", static_cast<double>(next) / static_cast<double>(waiting.size()));
+  }
+  return !session.ended();
+}
+
+}  // namespace dropfront::search

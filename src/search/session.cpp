@@ -1,0 +1,118 @@
+#include "dropfront/search/session.hpp"
+
+#include <algorithm>
+
+namespace dropfront::search {
+
+Session::Session(const Evaluator& the_evaluator, const SearchOptions& the_options)
+    : evaluator(the_evaluator),
+      space(the_evaluator.space()),
+      options(the_options),
+      plan(plan_for(the_options)),
+      axes(axes_of(space)),
+      codec(space),
+      workers(the_options.threads),
+      ledger(the_evaluator),
+      model(static_cast<int>(axes.size()), the_evaluator.objective_count()),
+      record(space),
+      seen_(codec),
+      categories_(category_slots(space)) {
+  if (options.time_s) {
+    using Clock = std::chrono::steady_clock;
+    deadline_ = Clock::now() +
+                std::chrono::duration_cast<Clock::duration>(std::chrono::duration<double>(*options.time_s));
+  }
+}
+
+bool Session::ended() {
+  if (halted_.load(std::memory_order_relaxed)) return true;
+  const bool stop = options.stop && options.stop->load(std::memory_order_relaxed);
+  const bool late = options.time_s && std::chrono::steady_clock::now() >= deadline_;
+  if (stop || late) halted_.store(true, std::memory_order_relaxed);
+  return stop || late;
+}
+
+void Session::lift_evaluation_limit() { plan.evaluations = evaluations_ + (std::int64_t{1} << 60); }
+
+std::vector<Looked> Session::look_new(const std::vector<Choice>& choices) {
+  std::vector<std::size_t> fresh;
+  const std::int64_t left = plan.looks - ledger.counts().looked;
+  for (std::size_t i = 0; i < choices.size(); ++i) {
+    if (static_cast<std::int64_t>(fresh.size()) >= left) {
+      looks_refused = true;
+      break;
+    }
+    if (seen_.insert(choices[i])) fresh.push_back(i);
+  }
+  std::vector<Evaluation> looks(fresh.size());
+  workers.for_each(fresh.size(), 64, [&](std::size_t i) { looks[i] = evaluator.look(choices[fresh[i]]); });
+  std::vector<Looked> alive;
+  for (std::size_t i = 0; i < fresh.size(); ++i) {
+    const Choice& choice = choices[fresh[i]];
+    if (!ledger.look(choice, looks[i])) continue;
+    alive.push_back(Looked{choice, std::move(looks[i].objectives), fresh[i]});
+  }
+  return alive;
+}
+
+void Session::learn(const Choice& choice, const Evaluation& evaluation) {
+  record.note(choice, evaluation.outcome == Outcome::breaks_limits);
+  model.add(region_of(choice), position_of(choice), evaluation.objectives);
+}
+
+std::vector<Merged> Session::evaluate(const std::vector<Choice>& choices) {
+  std::vector<Merged> merged;
+  for (std::size_t start = 0; start < choices.size() && may_evaluate() && !ended();) {
+    const std::int64_t left = plan.evaluations - evaluations_;
+    const std::size_t count = static_cast<std::size_t>(
+        std::min<std::int64_t>({evaluation_batch, static_cast<std::int64_t>(choices.size() - start), left}));
+    std::vector<Evaluation> results(count);
+    const ParetoArchive& front = ledger.front();
+    workers.for_each(count, 1, [&](std::size_t i) {
+      const Choice& choice = choices[start + i];
+      results[i] = evaluator.evaluate(choice, [&front, &choice](const std::vector<double>& objectives) {
+        return front.rejects(objectives, choice);
+      });
+    });
+    for (std::size_t i = 0; i < count; ++i) {
+      const Choice& choice = choices[start + i];
+      learn(choice, results[i]);
+      merged.push_back(Merged{choice, ledger.merge(choice, results[i])});
+    }
+    evaluations_ += static_cast<std::int64_t>(count);
+    start += count;
+  }
+  return merged;
+}
+
+std::vector<Evaluation> Session::evaluate_fully(const std::vector<Choice>& choices) {
+  std::vector<Evaluation> results(choices.size());
+  workers.for_each(choices.size(), 1,
+                   [&](std::size_t i) { results[i] = evaluator.evaluate(choices[i], Dominated{}); });
+  return results;
+}
+
+void Session::report(const std::string& stage, double fraction) {
+  if (!options.progress) return;
+  Progress progress;
+  progress.stage = stage;
+  progress.fraction = std::clamp(fraction, 0.0, 1.0);
+  progress.looked = ledger.counts().looked;
+  progress.scored = ledger.counts().scored;
+  progress.front = ledger.front().size();
+  options.progress(progress);
+}
+
+std::vector<double> Session::position_of(const Choice& choice) const {
+  std::vector<double> position(axes.size());
+  for (std::size_t a = 0; a < axes.size(); ++a) position[a] = axes[a].position_of[choice[axes[a].slot]];
+  return position;
+}
+
+std::int64_t Session::region_of(const Choice& choice) const {
+  std::int64_t region = 0;
+  for (int slot : categories_) region = region * space.slots[slot].size + choice[slot];
+  return region;
+}
+
+}  // namespace dropfront::search
