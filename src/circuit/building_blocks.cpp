@@ -38,14 +38,16 @@ void add_rectifier(Network& network, Node anode, Node cathode, const Curve& curv
 BridgeNodes add_bridge(Network& network, Node line_side, const ElementValues& values) {
   const Node positive = network.add_node();
   const Node negative = network.add_node();
-  add_rectifier(network, line_side, positive, values.rectifier);
-  add_rectifier(network, 0, positive, values.rectifier);
-  add_rectifier(network, negative, line_side, values.rectifier);
-  add_rectifier(network, negative, 0, values.rectifier);
-  for (const Node ac : {line_side, Node{0}}) {
-    network.resistors.push_back({ac, positive, kBridgeLeak_ohm, Owner::leak});
-    network.resistors.push_back({negative, ac, kBridgeLeak_ohm, Owner::leak});
-  }
+  // Branches already there come in mirrored halves (clamps ahead of the bridge), or there are none.
+  const int before = static_cast<int>(network.branches.size());
+  for (int b = 0; b < before; ++b) network.half_period_partner.push_back((b + before / 2) % before);
+  for (const int partner : {1, 0}) network.half_period_partner.push_back(before + partner);
+  // Diodes that conduct together share their current to the last electron, so each pair is one branch.
+  const double threshold_V = 2 * values.rectifier.threshold_V;
+  const double slope_ohm = 2 * values.rectifier.slope_ohm;
+  network.branches.push_back({line_side, positive, threshold_V, slope_ohm, Owner::rectifier, negative, 0});
+  network.branches.push_back({0, positive, threshold_V, slope_ohm, Owner::rectifier, negative, line_side});
+  network.resistors.push_back({negative, 0, kBridgeLeak_ohm, Owner::leak});
   if (values.mains.odd_only()) network.half_period_signs = {-1, 1};
   return {positive, negative};
 }

@@ -16,7 +16,7 @@ void add_clamp(Network& network, Node cathode, Node anode, const ClampCurve& cla
 /// One rectifier diode.
 void add_rectifier(Network& network, Node anode, Node cathode, const Curve& curve);
 
-/// Four diodes between the a.c. nodes `line_side` and the neutral, their leaks, and the half-period symmetry.
+/// Four diodes between the a.c. nodes `line_side` and the neutral, the leak, and the half-period symmetry.
 /// Returns the positive and negative rail nodes.
 struct BridgeNodes {
   Node positive, negative;

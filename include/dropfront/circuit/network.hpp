@@ -39,11 +39,16 @@ struct CapacitorElement {
   double start_V = 0;  ///< analytic guess of its voltage at mains phase zero in the steady state
 };
 /// Piecewise-linear one-way branch: no current below threshold_V, (v - threshold_V)/slope_ohm above, a to b.
+/// A second leg (a2 to b2) is in series with the first although it lies elsewhere: the same current flows in
+/// both, v is the sum of both voltages, threshold and slope are those of both legs together. The two diodes
+/// of a bridge that conduct together are one such branch.
 struct BranchElement {
   Node a, b;
   double threshold_V;
   double slope_ohm;
   Owner owner;
+  Node a2 = 0, b2 = 0;  ///< both 0: no second leg
+  bool paired() const { return a2 != b2; }
 };
 /// Constant current a to b for v >= cutoff_V; current_A·v/cutoff_V below (continuous and passive).
 struct LoadElement {
@@ -71,6 +76,8 @@ struct Network {
   /// One sign a capacitor, set where shifting by half a period and applying the signs gives the same network
   /// (bridges, odd harmonics only): the solver then needs half a period. Empty: no such symmetry.
   std::vector<int> half_period_signs;
+  /// With the symmetry: the branch that half a period later does what this one does now.
+  std::vector<int> half_period_partner;
 
   Node add_node() { return node_count++; }
 };

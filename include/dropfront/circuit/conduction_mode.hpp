@@ -1,0 +1,57 @@
+#pragma once
+#include <vector>
+
+#include "dropfront/circuit/topology.hpp"
+
+namespace dropfront::circuit {
+
+/// A quantity in modal coordinates: sum w_i·z_i + u·v_mains(t) + one.
+struct ModalRow {
+  std::array<double, kMaxStates> z{};
+  double u = 0;
+  double one = 0;
+};
+
+/// A quantity along one conduction mode apart from its own transient: the sinusoidal answer to every tone
+/// and the constant. With it a guard costs one dot product and no look at the tones' modal parts.
+struct ForcedRow {
+  std::vector<double> cosine, sine;  ///< one a tone
+  double constant = 0;
+  double curvature = 0;  ///< bound of the tones' second derivative: sum (k·w)^2·amplitude
+  double jerk = 0;       ///< bound of their third derivative
+};
+
+/// The linear network while a given set of branches conducts: x' = A·x + b·u + c, diagonalised.
+/// A is similar to a symmetric matrix (capacitances and reciprocal conductances), so the eigenvalues are
+/// real and the modal basis is orthonormal in the energy norm.
+struct ConductionMode {
+  ConductionMask mask = 0;
+  bool solvable = false;
+  int states = 0;
+  std::array<double, kMaxStates> lambda{};    ///< 1/s, <= 0 for passive networks
+  std::array<bool, kMaxStates> slow{};        ///< |lambda|·period below 1e-4: the constant is kept apart
+  std::array<double, kMaxStates> source{};    ///< b in modal coordinates
+  std::array<double, kMaxStates> constant{};  ///< c in modal coordinates
+  std::array<std::array<double, kMaxStates>, kMaxStates> to_state{};  ///< x = to_state·z
+  std::array<std::array<double, kMaxStates>, kMaxStates> to_modal{};  ///< z = to_modal·x
+  std::vector<double> forced_cosine, forced_sine;  ///< [state·tones + tone]: steady answer of each mode
+
+  std::vector<ModalRow> element_V;  ///< voltage across each element, topology order
+  std::vector<ModalRow> guard;      ///< per mask bit: v - threshold (branches), v - cut-off (loads)
+  std::vector<ForcedRow> guard_forced;
+  ModalRow rail;
+  ForcedRow rail_forced;
+  std::array<Row, kMaxStates> capacitor_A{};  ///< current in each capacitor, in (x, u, 1)
+  Row source_A{};                             ///< current drawn from the line, in (x, u, 1)
+};
+
+/// Modified nodal analysis of one mode. `solvable` is false where a group of nodes hangs on nothing.
+ConductionMode derive_mode(const Network& network, const Topology& topology, ConductionMask mask);
+
+/// Turns a row in (x, u, 1) into modal coordinates.
+ModalRow to_modal_row(const ConductionMode& mode, const Row& row);
+
+/// Adds the steady sinusoidal answers and constants of the modes to a row's own.
+ForcedRow forced_part(const ConductionMode& mode, const Waveform& mains, const ModalRow& row);
+
+}  // namespace dropfront::circuit

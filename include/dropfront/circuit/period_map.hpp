@@ -1,0 +1,40 @@
+#pragma once
+#include <string>
+#include <vector>
+
+#include "dropfront/circuit/walker.hpp"
+
+namespace dropfront::circuit {
+
+/// The map from the capacitor voltages at mains phase zero to those one period later; with the network's
+/// half-period symmetry, to those half a period later with the signs turned back.
+class PeriodMap {
+ public:
+  explicit PeriodMap(const Network& network);
+
+  const std::string& fault() const { return walker_.fault(); }
+  const Walker& walker() const { return walker_; }
+  int states() const { return walker_.topology().states; }
+  bool halved() const { return halved_; }
+  const std::vector<Segment>& segments() const { return segments_; }  ///< of the last apply()
+  const StateVector& raw_end() const { return raw_end_; }             ///< its end, signs not turned back
+
+  /// mapped = map(x); `jacobian`, if wanted, is its derivative. False: see fault().
+  bool apply(const StateVector& x, StateVector& mapped, SmallMatrix* jacobian);
+  /// step with (1 - J)·step = mapped - x; false where 1 - J is singular.
+  bool newton_step(const StateVector& x, const StateVector& mapped, const SmallMatrix& jacobian,
+                   StateVector& step) const;
+  /// Greatest |mapped - x|.
+  double distance(const StateVector& x, const StateVector& mapped) const;
+  /// Greatest |eigenvalue| of the full-period Jacobian.
+  double greatest_multiplier(const SmallMatrix& jacobian) const;
+
+ private:
+  Walker walker_;
+  bool halved_ = false;
+  double span_s_ = 0;
+  std::vector<Segment> segments_;
+  StateVector raw_end_{};
+};
+
+}  // namespace dropfront::circuit

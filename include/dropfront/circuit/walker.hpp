@@ -1,0 +1,44 @@
+#pragma once
+#include <memory>
+#include <string>
+#include <vector>
+
+#include "dropfront/circuit/segment.hpp"
+#include "dropfront/circuit/symmetric_eigen.hpp"
+
+namespace dropfront::circuit {
+
+/// Carries the capacitor voltages of one network through time, conduction mode by conduction mode, each in
+/// closed form. Modes are derived when first met and kept.
+class Walker {
+ public:
+  /// `network` must outlive the walker. Check fault() first.
+  explicit Walker(const Network& network);
+
+  const std::string& fault() const { return fault_; }
+  const Network& network() const { return network_; }
+  const Topology& topology() const { return topology_; }
+
+  /// Advances `x` from time `from_s` to `to_s`. Appends the segments to `segments` (cleared first).
+  /// False: no consistent mode or too many crossings; fault() says which.
+  bool walk(double from_s, double to_s, StateVector& x, std::vector<Segment>& segments);
+
+  /// d x(end) / d x(start) along `segments`: the field is continuous across crossings, so this is the plain
+  /// product of the segments' own exponentials.
+  SmallMatrix sensitivity(const std::vector<Segment>& segments) const;
+
+ private:
+  const ConductionMode& mode(ConductionMask mask);
+  /// The conduction mode that fits these capacitor voltages at this time.
+  bool find_mode(double time_s, const StateVector& x, ConductionMask& mask);
+  double worst_violation_V(const ConductionMode& mode, double time_s, const StateVector& x, int& bit);
+
+  const Network& network_;
+  Topology topology_;
+  std::string fault_;
+  std::vector<std::unique_ptr<ConductionMode>> modes_;
+  ConductionMask last_start_ = 0;
+  TonePhase phase_;
+};
+
+}  // namespace dropfront::circuit

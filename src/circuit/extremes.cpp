@@ -1,0 +1,55 @@
+#include "dropfront/circuit/extremes.hpp"
+
+#include <cmath>
+
+#include "dropfront/circuit/safe_step.hpp"
+
+namespace dropfront::circuit {
+
+void Extremes::include(double value, double time_s) {
+  if (empty || value < low) {
+    low = value;
+    low_at_s = time_s;
+  }
+  if (empty || value > high) {
+    high = value;
+    high_at_s = time_s;
+  }
+  empty = false;
+}
+
+void include_extremes(const Segment& segment, const Waveform& mains, const ModalRow& row,
+                      const ForcedRow& forced, TonePhase& phase, Extremes& extremes) {
+  const auto& mode = *segment.mode;
+  // An error of this much in the place of a flat point moves the value by its square: nothing.
+  const double resolution_s = 1e-7 * mains.period_s();
+  double s = 0;
+  double side = 0;  // sign of the slope being followed
+  for (int evaluation = 0; evaluation < 5000; ++evaluation) {
+    phase.set(mains, segment.start_s + s);
+    const ModalMoment moment = modal_moment(segment, s);
+    const double slope = slope_at(row, forced, moment, phase, mains);
+    const double turn = curvature_at(segment, row, forced, moment, phase, mains);
+    if (s == 0) extremes.include(value_at(row, forced, moment, phase), segment.start_s);
+    if (side == 0 || side * slope < 0) {
+      if (s > 0) extremes.include(value_at(row, forced, moment, phase), segment.start_s + s);
+      side = slope < 0 ? -1 : 1;
+    }
+    double bound = forced.jerk;
+    for (int i = 0; i < mode.states; ++i) {
+      bound += std::abs(row.z[i] * mode.lambda[i] * mode.lambda[i] * moment.slope[i]);
+    }
+    double step = safe_step(std::abs(slope), side * turn, bound);
+    if (step < resolution_s) {
+      extremes.include(value_at(row, forced, moment, phase), segment.start_s + s);
+      step = resolution_s;
+    }
+    s += step;
+    if (!(s < segment.length_s)) break;
+  }
+  phase.set(mains, segment.start_s + segment.length_s);
+  const ModalMoment last = modal_moment(segment, segment.length_s);
+  extremes.include(value_at(row, forced, last, phase), segment.start_s + segment.length_s);
+}
+
+}  // namespace dropfront::circuit

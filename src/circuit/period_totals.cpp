@@ -1,0 +1,220 @@
+#include "dropfront/circuit/period_totals.hpp"
+
+#include <cmath>
+#include <numeric>
+
+namespace dropfront::circuit {
+
+namespace {
+
+constexpr int kMostTones = 24;
+constexpr int kMostBasis = kMaxStates + 2 + 2 * kMostTones;
+
+/// The functions a segment's quantities are made of, in this order: one per state (e^(lambda s), or s where
+/// the mode is slow), then 1, then cos and sin of each tone.
+struct Basis {
+  int states = 0;
+  int tones = 0;
+  int size() const { return states + 1 + 2 * tones; }
+  int one() const { return states; }
+  int cosine(int h) const { return states + 1 + 2 * h; }
+  int sine(int h) const { return states + 2 + 2 * h; }
+};
+
+using Coefficients = std::array<double, kMostBasis>;
+struct Gram {
+  double m[kMostBasis][kMostBasis];  // only [i][j], i <= j, is filled
+  double mean[kMostBasis];           // integral of each function
+};
+
+/// A row's coefficients in the basis. Slow modes: alpha + (lambda·alpha + drift)·s.
+Coefficients expand(const Segment& segment, const Basis& basis, const ModalRow& row,
+                    const ForcedRow& forced) {
+  Coefficients c{};
+  const auto& mode = *segment.mode;
+  c[basis.one()] = forced.constant;
+  for (int i = 0; i < basis.states; ++i) {
+    if (mode.slow[i]) {
+      c[basis.one()] += row.z[i] * segment.alpha[i];
+      c[i] = row.z[i] * (mode.lambda[i] * segment.alpha[i] + segment.drift[i]);
+    } else {
+      c[i] = row.z[i] * segment.alpha[i];
+    }
+  }
+  for (int h = 0; h < basis.tones; ++h) {
+    c[basis.cosine(h)] = forced.cosine[h];
+    c[basis.sine(h)] = forced.sine[h];
+  }
+  return c;
+}
+
+/// Integral of cos(a·t) and sin(a·t) from t0 to t1; a = 0 gives the length and zero.
+struct TrigIntegral {
+  double cosine, sine;
+};
+TrigIntegral trig_integral(double a, double t0, double t1) {
+  if (a == 0) return {t1 - t0, 0};
+  return {(std::sin(a * t1) - std::sin(a * t0)) / a, (std::cos(a * t0) - std::cos(a * t1)) / a};
+}
+
+/// Products of state functions with everything but tones.
+void fill_states(const Segment& segment, const Basis& basis, Gram& gram) {
+  const auto& mode = *segment.mode;
+  const double length = segment.length_s;
+  for (int i = 0; i < basis.states; ++i) {
+    const double li = mode.lambda[i];
+    gram.mean[i] = mode.slow[i] ? length * length / 2 : std::expm1(li * length) / li;
+    gram.m[i][basis.one()] = gram.mean[i];
+    for (int k = i; k < basis.states; ++k) {
+      const double lk = mode.lambda[k];
+      if (mode.slow[i] && mode.slow[k]) {
+        gram.m[i][k] = length * length * length / 3;
+      } else if (!mode.slow[i] && !mode.slow[k]) {
+        gram.m[i][k] = std::expm1((li + lk) * length) / (li + lk);
+      } else {
+        const double l = mode.slow[i] ? lk : li;  // integral of s·e^(l·s)
+        gram.m[i][k] = (std::exp(l * length) * (l * length - 1) + 1) / (l * l);
+      }
+    }
+  }
+  gram.m[basis.one()][basis.one()] = gram.mean[basis.one()] = length;
+}
+
+/// Products of each state function with each tone.
+void fill_mixed(const Segment& segment, const Basis& basis, const Waveform& mains, Gram& gram) {
+  const auto& mode = *segment.mode;
+  const double length = segment.length_s;
+  const double t0 = segment.start_s;
+  const double t1 = t0 + length;
+  for (int h = 0; h < basis.tones; ++h) {
+    const double w = mains.tones()[h].order * mains.omega();
+    const double c0 = std::cos(w * t0), s0 = std::sin(w * t0);
+    const double c1 = std::cos(w * t1), s1 = std::sin(w * t1);
+    const int jc = basis.cosine(h), js = basis.sine(h);
+    gram.mean[jc] = gram.m[basis.one()][jc] = (s1 - s0) / w;
+    gram.mean[js] = gram.m[basis.one()][js] = (c0 - c1) / w;
+    for (int i = 0; i < basis.states; ++i) {
+      if (mode.slow[i]) {
+        gram.m[i][jc] = length * s1 / w + (c1 - c0) / (w * w);
+        gram.m[i][js] = -length * c1 / w + (s1 - s0) / (w * w);
+      } else {
+        const double l = mode.lambda[i];
+        const double decay = l * length > -60 ? std::exp(l * length) : 0;
+        const double scale = 1 / (l * l + w * w);
+        gram.m[i][jc] = (decay * (l * c1 + w * s1) - (l * c0 + w * s0)) * scale;
+        gram.m[i][js] = (decay * (l * s1 - w * c1) - (l * s0 - w * c0)) * scale;
+      }
+    }
+  }
+}
+
+/// Products of tones with tones, by sums and differences of their angles.
+void fill_tones(const Segment& segment, const Basis& basis, const Waveform& mains, Gram& gram) {
+  const double t0 = segment.start_s;
+  const double t1 = t0 + segment.length_s;
+  for (int h = 0; h < basis.tones; ++h) {
+    for (int k = h; k < basis.tones; ++k) {
+      const double a = mains.tones()[h].order * mains.omega();
+      const double b = mains.tones()[k].order * mains.omega();
+      const auto sum = trig_integral(a + b, t0, t1);
+      const auto difference = trig_integral(h == k ? 0 : a - b, t0, t1);
+      gram.m[basis.cosine(h)][basis.cosine(k)] = (difference.cosine + sum.cosine) / 2;
+      gram.m[basis.sine(h)][basis.sine(k)] = (difference.cosine - sum.cosine) / 2;
+      gram.m[basis.cosine(h)][basis.sine(k)] = (sum.sine - difference.sine) / 2;
+      if (k > h) gram.m[basis.sine(h)][basis.cosine(k)] = (sum.sine + difference.sine) / 2;
+    }
+  }
+}
+
+double product(const Gram& gram, int size, const Coefficients& a, const Coefficients& b) {
+  double total = 0;
+  for (int i = 0; i < size; ++i) {
+    double row = a[i] * b[i] * gram.m[i][i];
+    for (int k = i + 1; k < size; ++k) row += gram.m[i][k] * (a[i] * b[k] + a[k] * b[i]);
+    total += row;
+  }
+  return total;
+}
+
+double mean_of(const Gram& gram, int size, const Coefficients& a) {
+  double total = 0;
+  for (int i = 0; i < size; ++i) total += a[i] * gram.mean[i];
+  return total;
+}
+
+}  // namespace
+
+double WalkTotals::dissipated_J() const { return std::accumulate(element_J.begin(), element_J.end(), 0.0); }
+
+WalkTotals integrate(const Walker& walker, const std::vector<Segment>& segments) {
+  const auto& network = walker.network();
+  const auto& mains = network.source.waveform;
+  const std::size_t resistors = network.resistors.size();
+  const std::size_t branches = network.branches.size();
+  WalkTotals totals;
+  totals.element_J.assign(resistors + branches + network.loads.size(), 0);
+  totals.element_As.assign(totals.element_J.size(), 0);
+  totals.capacitor_A2s.assign(network.capacitors.size(), 0);
+  const Basis basis{walker.topology().states, static_cast<int>(mains.tones().size())};
+  const int size = basis.size();
+  Gram gram;
+  for (const auto& segment : segments) {
+    const auto& mode = *segment.mode;
+    fill_states(segment, basis, gram);
+    fill_mixed(segment, basis, mains, gram);
+    fill_tones(segment, basis, mains, gram);
+    const auto expand_row = [&](const ModalRow& row) {
+      return expand(segment, basis, row, forced_part(mode, mains, row));
+    };
+    totals.duration_s += segment.length_s;
+    totals.rail_Vs += mean_of(gram, size, expand(segment, basis, mode.rail, mode.rail_forced));
+    for (std::size_t e = 0; e < totals.element_J.size(); ++e) {
+      if (e >= resistors && e < resistors + branches && !((mode.mask >> (e - resistors)) & 1u)) continue;
+      Coefficients v = expand_row(mode.element_V[e]);
+      if (e < resistors) {
+        const double g = 1 / network.resistors[e].resistance_ohm;
+        totals.element_J[e] += g * product(gram, size, v, v);
+        totals.element_As[e] += g * mean_of(gram, size, v);
+      } else if (e < resistors + branches) {
+        const auto& branch = network.branches[e - resistors];
+        Coefficients over = v;
+        over[basis.one()] -= branch.threshold_V;
+        totals.element_J[e] += product(gram, size, v, over) / branch.slope_ohm;
+        totals.element_As[e] += mean_of(gram, size, over) / branch.slope_ohm;
+      } else {
+        const auto& load = network.loads[e - resistors - branches];
+        const bool above = (mode.mask >> (e - resistors)) & 1u;
+        const double g = load.current_A / load.cutoff_V;
+        totals.element_J[e] +=
+            above ? load.current_A * mean_of(gram, size, v) : g * product(gram, size, v, v);
+        totals.element_As[e] += above ? load.current_A * segment.length_s : g * mean_of(gram, size, v);
+      }
+    }
+    for (std::size_t k = 0; k < network.capacitors.size(); ++k) {
+      const Coefficients i = expand_row(to_modal_row(mode, mode.capacitor_A[k]));
+      totals.capacitor_A2s[k] += product(gram, size, i, i);
+    }
+    const Coefficients line_A = expand_row(to_modal_row(mode, mode.source_A));
+    ModalRow source_row;
+    source_row.u = 1;
+    ForcedRow source_forced;  // the mains itself: no modes, no constant
+    for (const auto& tone : mains.tones()) {
+      source_forced.cosine.push_back(tone.amplitude_V * std::sin(tone.phase_rad));
+      source_forced.sine.push_back(tone.amplitude_V * std::cos(tone.phase_rad));
+    }
+    const Coefficients line_V = expand(segment, basis, source_row, source_forced);
+    totals.input_J += product(gram, size, line_A, line_V);
+    totals.input_A2s += product(gram, size, line_A, line_A);
+  }
+  return totals;
+}
+
+double stored_J(const Network& network, const StateVector& x) {
+  double sum = 0;
+  for (std::size_t k = 0; k < network.capacitors.size(); ++k) {
+    sum += 0.5 * network.capacitors[k].capacitance_F * x[k] * x[k];
+  }
+  return sum;
+}
+
+}  // namespace dropfront::circuit
