@@ -11,7 +11,8 @@ namespace dropfront::scoring {
 /// What a check costs, so that cheap ones run first.
 enum class Tier { list, lean, standby, steady, transient };
 
-/// One check. Adding a check is one small file in scoring/checks/ and one line in check_table.cpp.
+/// One check. Adding a check is one small file in scoring/checks/, its line in
+/// scoring/checks/checks.hpp and its line in check_table.cpp.
 struct CheckRule {
   std::string_view id;  ///< physics name, e.g. "clamp.power"
   Tier tier = Tier::list;

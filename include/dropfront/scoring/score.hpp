@@ -51,7 +51,7 @@ enum class Depth {
 
 struct Score {
   Verdict verdict = Verdict::undefined;
-  bool complete = false;  ///< false: stopped early, objectives or checks may be missing
+  bool complete = false;  ///< every check and objective was worked out (never at depth cheap and screen)
   Objectives objectives;
   std::optional<double> current_margin_new_A;  ///< the margin with new parts
   std::vector<Check> checks;                   ///< in the fixed order of the check table
@@ -60,10 +60,13 @@ struct Score {
   /// Graded, finite measure of broken limits: sum over failed checks of the relative shortfall, at least 1
   /// per undefined check. 0 when compliant. For the relaxation only.
   double violation = 0;
+  int steady_states = 0;  ///< what it cost: steady states and transients run, searches included
+  int transients = 0;
 };
 
-/// Called once cost and area are known, and again once all four objectives are: true stops the score there
-/// (complete = false). It must depend on its argument only for the same bits on any thread.
+/// Called once cost and area are known, again with the standby loss, again with all four objectives: true
+/// stops the score there (complete = false). It must depend on its argument only for the same bits on any
+/// thread.
 using Stop = std::function<bool(const Objectives& known)>;
 
 /// Scores designs against one requirement. What depends on the requirement alone is worked out once.

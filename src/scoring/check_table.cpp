@@ -1,0 +1,43 @@
+#include "dropfront/scoring/check_table.hpp"
+
+#include "dropfront/scoring/checks/checks.hpp"
+
+namespace dropfront::scoring {
+
+const std::vector<CheckRule>& check_table() {
+  static const std::vector<CheckRule> table{
+      {"supply.margin", Tier::lean, supply_margin},
+      {"supply.start", Tier::lean, supply_start},
+      {"rail.max", Tier::steady, rail_max},
+      {"rail.transient", Tier::transient, rail_transient},
+      {"output.band", Tier::steady, output_band},
+      {"standby.power", Tier::standby, standby_power},
+      {"dropper.voltage", Tier::list, dropper_voltage},
+      {"dropper.class", Tier::list, dropper_class},
+      {"dropper.series_rated", Tier::list, dropper_series_rated},
+      {"dropper.slew", Tier::list, dropper_slew},
+      {"resistor.power", Tier::steady, resistor_power},
+      {"resistor.voltage", Tier::steady, resistor_voltage},
+      {"resistor.pulse", Tier::transient, resistor_pulse},
+      {"resistor.pulse_voltage", Tier::list, resistor_pulse_voltage},
+      {"resistor.opens", Tier::list, resistor_opens},
+      {"clamp.power", Tier::steady, clamp_power},
+      {"clamp.junction", Tier::steady, clamp_junction},
+      {"clamp.pulse", Tier::transient, clamp_pulse},
+      {"rectifier.reverse", Tier::list, rectifier_reverse},
+      {"rectifier.surge", Tier::transient, rectifier_surge},
+      {"reservoir.voltage", Tier::steady, reservoir_voltage},
+      {"reservoir.ripple", Tier::steady, reservoir_ripple},
+      {"reservoir.life", Tier::steady, reservoir_life},
+      {"reservoir.leakage", Tier::lean, reservoir_leakage},
+      {"discharge.voltage", Tier::list, discharge_voltage},
+      {"discharge.power", Tier::steady, discharge_power},
+      {"discharge.working_voltage", Tier::steady, discharge_working_voltage},
+      {"output_stage.junction", Tier::steady, output_stage_junction},
+      {"output_stage.input", Tier::steady, output_stage_input},
+      {"board.height", Tier::list, board_height},
+  };
+  return table;
+}
+
+}  // namespace dropfront::scoring

@@ -1,0 +1,101 @@
+// What an Evidence holds, shared by its source files.
+#pragma once
+#include <array>
+#include <memory>
+#include <optional>
+#include <utility>
+#include <vector>
+
+#include "dropfront/scoring/evidence.hpp"
+#include "dropfront/scoring/lean_search.hpp"
+#include "dropfront/scoring/point_solver.hpp"
+#include "dropfront/scoring/recipes.hpp"
+
+namespace dropfront::scoring {
+
+struct Evidence::Impl {
+  Impl(const Design& d, const Requirement& r, const Supply& s, const MainsShapes* m)
+      : own_shapes(m == nullptr ? std::make_unique<MainsShapes>(mains_shapes(s)) : nullptr),
+        design(d),
+        requirement(&r),
+        supply(&s),
+        shapes(m == nullptr ? own_shapes.get() : m),
+        loads(load_profile(r.output)),
+        required(scoring::required_rail_V(*d.output_stage, r.output, loads)),
+        points(design, r, required.value_or(0)),
+        lean_search(points, shapes->lean, overhead_A(Quiescent::data), true) {}
+
+  double overhead_A(Quiescent quiescent) const {
+    return quiescent_A(*design.output_stage, quiescent) + design.reservoir->leakage_A +
+           loads.heaviest_rail_A();
+  }
+
+  /// Loads of the corners. Rich corners take nothing that may be missing: no leakage, least Iq.
+  LoadCase heaviest(bool at_trough) const {
+    return {loads.heaviest_name, loads.heaviest_output_A(),
+            design.reservoir->leakage_A + loads.heaviest_rail_A(), Quiescent::data, at_trough};
+  }
+  LoadCase asleep() const {
+    return {loads.standby_name, loads.standby_A, design.reservoir->leakage_A + loads.rail_A, Quiescent::data,
+            false};
+  }
+  LoadCase rich_share(double share, const char* name) const {
+    const double beside_A = loads.rail_A + share * loads.burst_mean_rail_A;
+    return {name, share * loads.heaviest_output_A(), beside_A, Quiescent::least, false};
+  }
+
+  double ambient_degC(bool hot) const {
+    const auto& ambient = requirement->surroundings.ambient_degC;
+    return hot ? ambient.high : ambient.low;
+  }
+  bool one_ambient() const { return ambient_degC(false) == ambient_degC(true); }
+
+  const OperatingPoint& lean_point(bool hot) {
+    auto& point = lean_points[hot ? 1 : 0];
+    if (point) return *point;
+    const auto& found = lean_search.at(hot);
+    OperatingPoint warm;
+    warm.ambient_degC = found.ambient_degC;
+    warm.local_degC = found.rises.over(found.ambient_degC).local_degC;
+    warm.clamp_junction_degC = found.rises.over(found.ambient_degC).clamp_junction_degC;
+    warm.state.start = found.state;
+    warm.state.rail_mean_V = found.best_rail_V;
+    point = points.solve(hot ? "lean_hot" : "lean_cold", lean_search.recipe(found.ends), heaviest(true),
+                         ambient_degC(hot), found.usable ? &warm : nullptr);
+    point->ends = ends_text(found.ends);
+    return *point;
+  }
+
+  const OperatingPoint& rest(bool hot) {
+    auto& point = rests[hot ? 1 : 0];
+    if (point) return *point;
+    const OperatingPoint* warm = hot ? nullptr : &rest(true);
+    if (!hot && one_ambient()) {
+      point = *warm;
+    } else {
+      point = points.solve("rich_empty", rich_recipe(*shapes), rich_share(0, "none"), ambient_degC(hot),
+                           warm != nullptr && warm->state.usable() ? warm : nullptr);
+      point->ends = kRichEnds;
+    }
+    return *point;
+  }
+
+  std::unique_ptr<MainsShapes> own_shapes;
+  Design design;
+  const Requirement* requirement;
+  const Supply* supply;
+  const MainsShapes* shapes;
+  LoadProfile loads;
+  std::optional<double> required;
+  PointSolver points;
+  LeanSearch lean_search;
+  std::optional<LeanAnswer> lean;
+  std::array<std::optional<OperatingPoint>, 2> lean_points, rests;
+  std::optional<OperatingPoint> nominal, standby, standby_worst;
+  std::vector<OperatingPoint> rich_loads;
+  std::optional<PlugInAnswer> plug_in;
+  std::optional<std::optional<double>> margin_new;
+  int transients = 0;
+};
+
+}  // namespace dropfront::scoring

@@ -1,0 +1,41 @@
+#include "dropfront/scoring/recipes.hpp"
+
+namespace dropfront::scoring {
+
+Recipe rich_recipe(const MainsShapes& shapes) {
+  Recipe recipe;
+  recipe.mains = &shapes.rich;
+  recipe.dropper = End::high;
+  recipe.series_resistor = End::high;
+  recipe.discharge = End::low;
+  recipe.clamp = ZenerCurve::high;
+  recipe.reservoir = End::low;
+  recipe.esr = End::high;
+  recipe.drops = Drops::least;
+  recipe.aged = true;
+  recipe.temperature = true;
+  return recipe;
+}
+
+Recipe nominal_recipe(const MainsShapes& shapes) {
+  Recipe recipe;
+  recipe.mains = &shapes.nominal;
+  return recipe;
+}
+
+Recipe production_recipe(const MainsShapes& shapes, End series_resistor) {
+  Recipe recipe;
+  recipe.mains = &shapes.nominal;
+  recipe.dropper = End::high;
+  recipe.series_resistor = series_resistor;
+  recipe.discharge = End::low;
+  recipe.clamp = ZenerCurve::high;
+  return recipe;
+}
+
+const char* production_ends(End series_resistor) {
+  return series_resistor == End::low ? "dropper high, series_resistor low, discharge low, clamp high"
+                                     : "dropper high, series_resistor high, discharge low, clamp high";
+}
+
+}  // namespace dropfront::scoring

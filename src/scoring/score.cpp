@@ -1,0 +1,160 @@
+#include "dropfront/scoring/score.hpp"
+
+#include <algorithm>
+#include <array>
+#include <cmath>
+#include <memory>
+
+#include "dropfront/scoring/board_area.hpp"
+#include "dropfront/scoring/check_table.hpp"
+#include "dropfront/scoring/checks/make_check.hpp"
+#include "dropfront/scoring/cost.hpp"
+#include "dropfront/scoring/evidence.hpp"
+#include "dropfront/scoring/operations.hpp"
+#include "dropfront/scoring/verdict.hpp"
+
+namespace dropfront::scoring {
+
+namespace {
+
+using Evidences = std::vector<std::unique_ptr<Evidence>>;
+
+const char* missing_slot(const Design& design) {
+  if (design.arrangement == nullptr || design.arrangement->build == nullptr) return "arrangement";
+  if (design.output_stage == nullptr) return "output_stage";
+  if (design.dropper == nullptr) return "dropper";
+  if (design.series_resistor == nullptr) return "series_resistor";
+  if (design.clamp == nullptr) return "clamp";
+  if (design.reservoir == nullptr) return "reservoir";
+  if (design.rectifier == nullptr) return "rectifier";
+  return nullptr;
+}
+
+/// A figure that is not a number is no figure.
+void keep_finite(std::optional<double>& figure) {
+  if (figure && !std::isfinite(*figure)) figure.reset();
+}
+
+/// Worst of one rule over all supplies; absent where it applies to none.
+std::optional<Check> judge(const CheckRule& rule, const Evidences& evidences) {
+  std::optional<Check> worst;
+  for (const auto& evidence : evidences) {
+    auto check = rule.evaluate(*evidence);
+    if (!check) continue;
+    check->id = rule.id;
+    check->at.supply = evidence->supply().name;
+    keep_finite(check->value);
+    keep_finite(check->limit);
+    worst = worst ? worse(std::move(*worst), std::move(*check)) : std::move(check);
+  }
+  return worst;
+}
+
+std::optional<double> greatest_standby_W(const Evidences& evidences) {
+  std::optional<double> greatest;
+  for (const auto& evidence : evidences) {
+    const auto& point = evidence->standby_worst();
+    if (!point.state.usable()) return std::nullopt;
+    greatest = std::max(greatest.value_or(0), point.state.input_power_W);
+  }
+  keep_finite(greatest);
+  return greatest;
+}
+
+std::optional<double> least_margin_A(const Evidences& evidences) {
+  std::optional<double> least;
+  for (const auto& evidence : evidences) {
+    const auto& lean = evidence->lean();
+    if (!lean.usable) return std::nullopt;
+    least = least ? std::min(*least, lean.margin_A) : lean.margin_A;
+  }
+  keep_finite(least);
+  return least;
+}
+
+std::optional<double> least_margin_new_A(const Evidences& evidences) {
+  std::optional<double> least;
+  for (const auto& evidence : evidences) {
+    const auto margin = evidence->margin_new_A();
+    if (!margin) return std::nullopt;
+    least = least ? std::min(*least, *margin) : *margin;
+  }
+  keep_finite(least);
+  return least;
+}
+
+/// Runs the checks of one tier; false: one failed and `stop_at_failure`.
+bool run_tier(Tier tier, const Evidences& evidences, bool stop_at_failure,
+              std::vector<std::optional<Check>>& found) {
+  const auto& table = check_table();
+  for (std::size_t i = 0; i < table.size(); ++i) {
+    if (table[i].tier != tier) continue;
+    found[i] = judge(table[i], evidences);
+    if (stop_at_failure && found[i] && found[i]->pass && !*found[i]->pass) return false;
+  }
+  return true;
+}
+
+/// Tiers by cost, and the objective that becomes known with each; false when the score stops there.
+bool run_stages(Score& score, Depth depth, const Stop& stop, const Evidences& evidences,
+                std::vector<std::optional<Check>>& found) {
+  const bool stop_at_failure = depth == Depth::compliant;
+  const auto stopped = [&] { return stop && stop(score.objectives); };
+  if (stopped() || !run_tier(Tier::list, evidences, stop_at_failure, found)) return false;
+  if (depth == Depth::cheap) return false;
+  score.objectives.standby_loss_W = greatest_standby_W(evidences);
+  if (!run_tier(Tier::standby, evidences, stop_at_failure, found) || stopped()) return false;
+  score.objectives.current_margin_A = least_margin_A(evidences);
+  if (!run_tier(Tier::lean, evidences, stop_at_failure, found) || stopped()) return false;
+  if (depth == Depth::screen) return false;
+  return run_tier(Tier::steady, evidences, stop_at_failure, found) &&
+         run_tier(Tier::transient, evidences, stop_at_failure, found);
+}
+
+}  // namespace
+
+Scorer::Scorer(const Requirement& requirement) : requirement_(&requirement) {
+  shapes_.reserve(requirement.supplies.size());
+  for (const auto& supply : requirement.supplies) shapes_.push_back(mains_shapes(supply));
+}
+
+Score Scorer::score(const Design& design, Depth depth, const Stop& stop) const {
+  Score score;
+  score.objectives.cost_micro = cost_micro(design, *requirement_);
+  score.objectives.board_area_um2 = board_area_um2(design, *requirement_);
+  if (const char* slot = missing_slot(design)) {
+    score.cautions.push_back(std::string("the design has no ") + slot);
+    score.violation = violation_of(score, *requirement_);
+    return score;
+  }
+  Evidences evidences;
+  for (std::size_t i = 0; i < requirement_->supplies.size(); ++i) {
+    evidences.push_back(
+        std::make_unique<Evidence>(design, *requirement_, requirement_->supplies[i], shapes_[i]));
+  }
+  std::vector<std::optional<Check>> found(check_table().size());
+  score.complete = run_stages(score, depth, stop, evidences, found);
+  for (auto& check : found) {
+    if (check) score.checks.push_back(std::move(*check));
+  }
+  if (depth == Depth::full && score.complete) {
+    score.current_margin_new_A = least_margin_new_A(evidences);
+    for (const auto& evidence : evidences) score.operations.push_back(operations_of(*evidence));
+  }
+  score.verdict = verdict_of(score, *requirement_);
+  score.violation = violation_of(score, *requirement_);
+  for (const auto& evidence : evidences) {
+    score.steady_states += evidence->steady_states();
+    score.transients += evidence->transients();
+  }
+  if (depth == Depth::compliant || depth == Depth::full) {
+    score.cautions = cautions_of(design, score, *requirement_);
+  }
+  return score;
+}
+
+Score score(const Design& design, const Requirement& requirement, Depth depth) {
+  return Scorer(requirement).score(design, depth);
+}
+
+}  // namespace dropfront::scoring
