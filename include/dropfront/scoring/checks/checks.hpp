@@ -1,0 +1,44 @@
+#pragma once
+#include <optional>
+
+#include "dropfront/scoring/check.hpp"
+#include "dropfront/scoring/evidence.hpp"
+
+namespace dropfront::scoring {
+
+/// One function a check, each in a file of its name in src/scoring/checks/, listed in check_table.cpp.
+/// Meanings and limits stand beside each. nullopt: does not apply.
+using CheckFunction = std::optional<Check>(Evidence& evidence);
+
+CheckFunction supply_margin;
+CheckFunction supply_start;
+CheckFunction rail_max;
+CheckFunction rail_transient;
+CheckFunction output_band;
+CheckFunction standby_power;
+CheckFunction dropper_voltage;
+CheckFunction dropper_class;
+CheckFunction dropper_series_rated;
+CheckFunction dropper_slew;
+CheckFunction resistor_power;
+CheckFunction resistor_voltage;
+CheckFunction resistor_pulse;
+CheckFunction resistor_pulse_voltage;
+CheckFunction resistor_opens;
+CheckFunction clamp_power;
+CheckFunction clamp_junction;
+CheckFunction clamp_pulse;
+CheckFunction rectifier_reverse;
+CheckFunction rectifier_surge;
+CheckFunction reservoir_voltage;
+CheckFunction reservoir_ripple;
+CheckFunction reservoir_life;
+CheckFunction reservoir_leakage;
+CheckFunction discharge_voltage;
+CheckFunction discharge_power;
+CheckFunction discharge_working_voltage;
+CheckFunction output_stage_junction;
+CheckFunction output_stage_input;
+CheckFunction board_height;
+
+}  // namespace dropfront::scoring

@@ -1,0 +1,29 @@
+#include "dropfront/circuit/pulse.hpp"
+#include "dropfront/scoring/checks/checks.hpp"
+#include "dropfront/scoring/checks/make_check.hpp"
+
+namespace dropfront::scoring {
+namespace {
+
+/// Published surge curves of zeners follow t^(-1/2) down to about 10 us and stop there (from memory): a
+/// shorter spike counts as that long.
+constexpr double kShortestPulse_s = 10e-6;
+
+}  // namespace
+
+std::optional<Check> clamp_pulse(Evidence& evidence) {
+  const parts::Clamp& clamp = *evidence.design().clamp;
+  if (!clamp.pulse_power_W || !clamp.pulse_time_s) {
+    return at_most("clamp.pulse", std::nullopt, std::nullopt, "", at_corner("plug_in"),
+                   "pulse_power or pulse_time is not given");
+  }
+  const PlugInAnswer& plug_in = evidence.plug_in();
+  const circuit::PulseRating rating{*clamp.pulse_power_W, *clamp.pulse_time_s, clamp.max_junction_degC};
+  const double stress = circuit::pulse_stress_W_sqrt_s(plug_in.clamp_trace, kShortestPulse_s);
+  const Check check = at_most("clamp.pulse", circuit::pulse_use(stress, rating, plug_in.clamp_junction_degC),
+                              1.0, "", at_plug_in(plug_in.clamp),
+                              "share of the single-pulse rating by heat diffusion, from the warm junction");
+  return plug_in.usable ? check : unsolved(check, plug_in.reason);
+}
+
+}  // namespace dropfront::scoring

@@ -1,0 +1,26 @@
+#include "dropfront/circuit/derating.hpp"
+#include "dropfront/circuit/discharge.hpp"
+#include "dropfront/scoring/checks/checks.hpp"
+#include "dropfront/scoring/checks/make_check.hpp"
+#include "dropfront/scoring/checks/stress.hpp"
+
+namespace dropfront::scoring {
+
+std::optional<Check> discharge_power(Evidence& evidence) {
+  const Design& design = evidence.design();
+  if (!design.discharge || design.discharge_count < 1) return std::nullopt;
+  const parts::Resistor& part = *design.discharge;
+  const double share = evidence.requirement().derating.resistor_power;
+  const auto judge = [&](const OperatingPoint& point) {
+    const double power = circuit::greatest_element_power_W(
+        discharge_chain_Vrms(point), design.discharge_count, part.resistance_ohm, part.tolerance);
+    std::optional<double> limit;
+    if (part.rated_power_W)
+      limit = *part.rated_power_W * circuit::resistor_power_share(point.local_degC) * share;
+    return at_most("discharge.power", power, limit, "W", at_point(point),
+                   "worst element of the chain; rating x ambient line x derating");
+  };
+  return worst_over(hot_points(evidence), judge);
+}
+
+}  // namespace dropfront::scoring

@@ -1,0 +1,25 @@
+#include "dropfront/circuit/discharge.hpp"
+#include "dropfront/scoring/checks/checks.hpp"
+#include "dropfront/scoring/checks/make_check.hpp"
+#include "dropfront/scoring/corners.hpp"
+
+namespace dropfront::scoring {
+
+/// The whole crest is taken to stand on the dropper at the moment of unplugging, and nothing but the chain to
+/// discharge it.
+std::optional<Check> discharge_voltage(Evidence& evidence) {
+  const auto& rule = evidence.requirement().limits.discharge;
+  const Design& design = evidence.design();
+  if (!rule) return std::nullopt;
+  const double greatest_F = design.dropper->capacitance_F * (1 + design.dropper->tolerance);
+  if (greatest_F <= rule->not_below_F) return std::nullopt;
+  const double cold_degC = evidence.requirement().surroundings.ambient_degC.low;
+  const double left =
+      circuit::discharged_voltage_V(evidence.shapes().rich.crest_V(), discharge_ohm(design, End::high),
+                                    dropper_F(*design.dropper, End::high, false, cold_degC), rule->after_s);
+  return at_most("discharge.voltage", left, rule->voltage_V, "V",
+                 at_corner("unplug", cold_degC, "dropper high, discharge high"),
+                 "Vcrest·exp(-t/(Rb·C)) at the asked time; " + rule->basis);
+}
+
+}  // namespace dropfront::scoring

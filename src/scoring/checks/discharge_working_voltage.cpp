@@ -1,0 +1,20 @@
+#include "dropfront/circuit/discharge.hpp"
+#include "dropfront/scoring/checks/checks.hpp"
+#include "dropfront/scoring/checks/make_check.hpp"
+#include "dropfront/scoring/checks/stress.hpp"
+
+namespace dropfront::scoring {
+
+std::optional<Check> discharge_working_voltage(Evidence& evidence) {
+  const Design& design = evidence.design();
+  if (!design.discharge || design.discharge_count < 1) return std::nullopt;
+  const parts::Resistor& part = *design.discharge;
+  const double share = circuit::greatest_voltage_share(design.discharge_count, part.tolerance);
+  const auto judge = [&](const OperatingPoint& point) {
+    return at_most("discharge.working_voltage", discharge_chain_Vrms(point) * share, part.rated_voltage_Vrms,
+                   "V", at_point(point), "share R_max/(R_max + sum of R_min) of the chain's r.m.s. voltage");
+  };
+  return worst_over(hot_points(evidence), judge);
+}
+
+}  // namespace dropfront::scoring

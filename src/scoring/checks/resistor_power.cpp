@@ -1,0 +1,24 @@
+#include "dropfront/circuit/derating.hpp"
+#include "dropfront/scoring/checks/checks.hpp"
+#include "dropfront/scoring/checks/make_check.hpp"
+#include "dropfront/scoring/checks/stress.hpp"
+
+namespace dropfront::scoring {
+
+std::optional<Check> resistor_power(Evidence& evidence) {
+  const parts::Resistor& part = *evidence.design().series_resistor;
+  const double share = evidence.requirement().derating.resistor_power;
+  const double heating = evidence.supply().harmonics_given ? 1 : kUnstatedHarmonicsHeating;
+  const auto judge = [&](const OperatingPoint& point) {
+    const double loss = point.state.loss_W[static_cast<std::size_t>(circuit::Owner::series_resistor)];
+    std::optional<double> limit;
+    if (part.rated_power_W)
+      limit = *part.rated_power_W * circuit::resistor_power_share(point.local_degC) * share;
+    return at_most("resistor.power", loss * heating, limit, "W", at_point(point),
+                   heating > 1 ? "loss x 1.15 for harmonics not stated; rating x ambient line x derating"
+                               : "loss; rating x ambient line x derating");
+  };
+  return worst_over(hot_points(evidence), judge);
+}
+
+}  // namespace dropfront::scoring
