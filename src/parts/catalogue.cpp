@@ -30,7 +30,7 @@ void check_header(const CsvRow& header, Kind kind, const std::string& file) {
       refuse("the header holds a semicolon: cells are separated by commas");
     }
     if (std::find(known.begin(), known.end(), head.text) == known.end()) {
-      refuse(fmt::format("a {} has no column '{}'{}", kind_phrase(kind), head.text,
+      refuse(fmt::format("{} has no column '{}'{}", kind_with_article(kind), head.text,
                          values::did_you_mean(head.text, known)));
     }
     const auto same = [&](const CsvCell& other) { return other.text == head.text; };

@@ -61,6 +61,10 @@ std::string kind_phrase(Kind kind) {
   return phrase;
 }
 
+std::string kind_with_article(Kind kind) {
+  return (kind == Kind::output_stage ? "an " : "a ") + kind_phrase(kind);
+}
+
 const std::vector<Column>& columns_of(Kind kind) {
   static const std::array<std::vector<Column>, all_kinds.size()> tables = {
       columns_for<Dropper>(),   columns_for<Resistor>(),    columns_for<Clamp>(),    columns_for<Reservoir>(),

@@ -68,7 +68,7 @@ void refuse_unknown_columns(const FieldSource& source, Kind kind, bool inline_pa
   if (inline_part) known.push_back("price");
   for (const std::string& name : source.names()) {
     if (std::find(known.begin(), known.end(), name) != known.end()) continue;
-    throw source.error(name, fmt::format("a {} has no column '{}'{}", kind_phrase(kind), name,
+    throw source.error(name, fmt::format("{} has no column '{}'{}", kind_with_article(kind), name,
                                          values::did_you_mean(name, known)));
   }
 }
