@@ -4,6 +4,7 @@
 
 #include <algorithm>
 #include <cmath>
+#include <sstream>
 
 #include "dropfront/problem/scalars.hpp"
 #include "dropfront/values/quantity.hpp"
@@ -48,6 +49,16 @@ Condition read_condition(const Cursor& cursor, const parts::Column& column) {
   return condition;
 }
 
+/// A column of several words says each of them.
+bool says(const parts::Column& column, const std::string& value, const std::string& word) {
+  if (!column.several_words) return value == word;
+  std::istringstream words(value);
+  for (std::string one; words >> one;) {
+    if (one == word) return true;
+  }
+  return false;
+}
+
 }  // namespace
 
 std::vector<Condition> read_where(const Cursor& where, parts::Kind kind) {
@@ -73,7 +84,8 @@ bool meets(const Condition& condition, const std::optional<parts::ColumnValue>& 
   if (condition.truth)
     return std::holds_alternative<bool>(*value) && std::get<bool>(*value) == *condition.truth;
   if (condition.word) {
-    return std::holds_alternative<std::string>(*value) && std::get<std::string>(*value) == *condition.word;
+    return std::holds_alternative<std::string>(*value) &&
+           says(*condition.column, std::get<std::string>(*value), *condition.word);
   }
   if (!std::holds_alternative<double>(*value)) return false;
   const double number = std::get<double>(*value);

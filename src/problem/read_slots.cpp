@@ -117,15 +117,13 @@ void read_discharges(ObjectReader& slots, Problem& problem) {
   }
 }
 
-/// A stage is offered when the whole of its output band lies inside the wanted band. A direct stage has no
-/// output of its own: there the clamp is the output and output.band checks it.
+/// A stage is offered when the whole of its output band lies inside the wanted band.
 void keep_stages_in_band(const Cursor& slots, Problem& problem) {
   auto& stages = problem.offers.output_stages;
   const scoring::OutputNeed& need = problem.requirement.output;
   const auto low = need.voltage_V * (1 - need.tolerance), high = need.voltage_V * (1 + need.tolerance);
   std::set<double> seen;
   const auto outside = [&](const parts::OutputStage* stage) {
-    if (stage->kind == parts::StageKind::direct && !(stage->output_voltage_V > 0)) return false;
     seen.insert(stage->output_voltage_V);
     const double slack = 1e-9 * stage->output_voltage_V;  // a decimal sum may miss its end by a rounding
     return !(stage->output_voltage_V * (1 - stage->tolerance) >= low - slack) ||

@@ -15,6 +15,7 @@ struct KindTraits {
   std::vector<Part> parts::Catalogue::*rows;
   std::deque<Part> DerivedParts::*derived;
   Part (*read)(const parts::FieldSource&, bool inline_part);
+  const char* value_column = "";  ///< what a family varies; empty: the kind has no families
 };
 
 template <class Part>
@@ -22,16 +23,19 @@ inline constexpr KindTraits<Part> kTraits{};
 
 template <>
 inline constexpr KindTraits<parts::Dropper> kTraits<parts::Dropper>{
-    parts::Kind::dropper, &parts::Catalogue::droppers, &DerivedParts::droppers, parts::read_dropper};
+    parts::Kind::dropper, &parts::Catalogue::droppers, &DerivedParts::droppers, parts::read_dropper,
+    "capacitance"};
 template <>
 inline constexpr KindTraits<parts::Resistor> kTraits<parts::Resistor>{
-    parts::Kind::resistor, &parts::Catalogue::resistors, &DerivedParts::resistors, parts::read_resistor};
+    parts::Kind::resistor, &parts::Catalogue::resistors, &DerivedParts::resistors, parts::read_resistor,
+    "resistance"};
 template <>
-inline constexpr KindTraits<parts::Clamp> kTraits<parts::Clamp>{parts::Kind::clamp, &parts::Catalogue::clamps,
-                                                                &DerivedParts::clamps, parts::read_clamp};
+inline constexpr KindTraits<parts::Clamp> kTraits<parts::Clamp>{
+    parts::Kind::clamp, &parts::Catalogue::clamps, &DerivedParts::clamps, parts::read_clamp, "voltage"};
 template <>
 inline constexpr KindTraits<parts::Reservoir> kTraits<parts::Reservoir>{
-    parts::Kind::reservoir, &parts::Catalogue::reservoirs, &DerivedParts::reservoirs, parts::read_reservoir};
+    parts::Kind::reservoir, &parts::Catalogue::reservoirs, &DerivedParts::reservoirs, parts::read_reservoir,
+    "capacitance"};
 template <>
 inline constexpr KindTraits<parts::Rectifier> kTraits<parts::Rectifier>{
     parts::Kind::rectifier, &parts::Catalogue::rectifiers, &DerivedParts::rectifiers, parts::read_rectifier};

@@ -35,7 +35,7 @@ std::vector<const Part*> read_family(ObjectReader& reader, Problem& problem, boo
     throw reader.object().error("a family needs \"series\", \"from\", \"to\" and \"like\" together");
   }
   const auto which = values::series_named(values::series_names()[read_word(*series, values::series_names())]);
-  const values::Unit unit = parts::columns_of(kTraits<Part>.kind).at(1).unit;  // the value follows the name
+  const values::Unit unit = parts::find_column(kTraits<Part>.kind, kTraits<Part>.value_column)->unit;
   const double low = read_quantity(*from, unit, kPositive), high = read_quantity(*to, unit, kPositive);
   if (!(low <= high)) throw to->error(fmt::format("found less than \"from\"; allowed: from <= to"));
   if (!(high <= low * 1e9)) throw to->error("found more than 1e9 times \"from\"");
