@@ -150,8 +150,6 @@ ForcedRow forced_part(const ConductionMode& mode, const Waveform& mains, const M
   const auto& tones = mains.tones();
   const auto count = tones.size();
   ForcedRow forced;
-  forced.cosine.resize(count);
-  forced.sine.resize(count);
   forced.constant = row.one;
   for (int i = 0; i < mode.states; ++i) {
     if (!mode.slow[i]) forced.constant -= row.z[i] * mode.constant[i] / mode.lambda[i];

@@ -1,6 +1,7 @@
 #include "dropfront/circuit/extremes.hpp"
 
 #include <cmath>
+#include <numbers>
 
 #include "dropfront/circuit/safe_step.hpp"
 
@@ -18,18 +19,18 @@ void Extremes::include(double value, double time_s) {
   empty = false;
 }
 
-void include_extremes(const Segment& segment, const Waveform& mains, const ModalRow& row,
-                      const ForcedRow& forced, TonePhase& phase, Extremes& extremes) {
+void include_extremes(const Segment& segment, const ModalRow& row, const ForcedRow& forced, TonePhase& phase,
+                      Extremes& extremes) {
   const auto& mode = *segment.mode;
   // An error of this much in the place of a flat point moves the value by its square: nothing.
-  const double resolution_s = 1e-7 * mains.period_s();
+  const double resolution_s = 1e-7 * 2 * std::numbers::pi / phase.omega[0];
   double s = 0;
   double side = 0;  // sign of the slope being followed
   for (int evaluation = 0; evaluation < 5000; ++evaluation) {
-    phase.set(mains, segment.start_s + s);
+    phase.set(segment.start_s + s);
     const ModalMoment moment = modal_moment(segment, s);
-    const double slope = slope_at(row, forced, moment, phase, mains);
-    const double turn = curvature_at(segment, row, forced, moment, phase, mains);
+    const double slope = slope_at(row, forced, moment, phase);
+    const double turn = curvature_at(segment, row, forced, moment, phase);
     if (s == 0) extremes.include(value_at(row, forced, moment, phase), segment.start_s);
     if (side == 0 || side * slope < 0) {
       if (s > 0) extremes.include(value_at(row, forced, moment, phase), segment.start_s + s);
@@ -47,7 +48,7 @@ void include_extremes(const Segment& segment, const Waveform& mains, const Modal
     s += step;
     if (!(s < segment.length_s)) break;
   }
-  phase.set(mains, segment.start_s + segment.length_s);
+  phase.set(segment.start_s + segment.length_s);
   const ModalMoment last = modal_moment(segment, segment.length_s);
   extremes.include(value_at(row, forced, last, phase), segment.start_s + segment.length_s);
 }

@@ -7,7 +7,6 @@ namespace dropfront::circuit {
 
 namespace {
 
-constexpr int kMostTones = 24;
 constexpr int kMostBasis = kMaxStates + 2 + 2 * kMostTones;
 
 /// The functions a segment's quantities are made of, in this order: one per state (e^(lambda s), or s where
@@ -198,9 +197,10 @@ WalkTotals integrate(const Walker& walker, const std::vector<Segment>& segments)
     ModalRow source_row;
     source_row.u = 1;
     ForcedRow source_forced;  // the mains itself: no modes, no constant
-    for (const auto& tone : mains.tones()) {
-      source_forced.cosine.push_back(tone.amplitude_V * std::sin(tone.phase_rad));
-      source_forced.sine.push_back(tone.amplitude_V * std::cos(tone.phase_rad));
+    for (int h = 0; h < basis.tones; ++h) {
+      const auto& tone = mains.tones()[h];
+      source_forced.cosine[h] = tone.amplitude_V * std::sin(tone.phase_rad);
+      source_forced.sine[h] = tone.amplitude_V * std::cos(tone.phase_rad);
     }
     const Coefficients line_V = expand(segment, basis, source_row, source_forced);
     totals.input_J += product(gram, size, line_A, line_V);

@@ -70,11 +70,10 @@ bool converge(PeriodMap& map, const SteadyOptions& options, SteadyState& answer)
 }
 
 void collect_rail(PeriodMap& map, SteadyState& answer) {
-  TonePhase phase;
+  TonePhase phase(map.walker().network().source.waveform);
   Extremes rail;
-  const auto& mains = map.walker().network().source.waveform;
   for (const auto& segment : map.segments()) {
-    include_extremes(segment, mains, segment.mode->rail, segment.mode->rail_forced, phase, rail);
+    include_extremes(segment, segment.mode->rail, segment.mode->rail_forced, phase, rail);
   }
   answer.rail_min_V = rail.low;
   answer.rail_max_V = rail.high;
@@ -87,13 +86,13 @@ void collect_branches(PeriodMap& map, const WalkTotals& totals, SteadyState& ans
   const std::size_t resistors = network.resistors.size();
   std::vector<double> peak(network.branches.size(), 0);
   std::vector<double> mean(network.branches.size(), 0);
-  TonePhase phase;
+  TonePhase phase(mains);
   for (std::size_t b = 0; b < network.branches.size(); ++b) {
     mean[b] = totals.element_As[resistors + b] / totals.duration_s;
     for (const auto& segment : map.segments()) {
       if (!((segment.mode->mask >> b) & 1u)) continue;
       Extremes over;
-      include_extremes(segment, mains, segment.mode->guard[b], segment.mode->guard_forced[b], phase, over);
+      include_extremes(segment, segment.mode->guard[b], segment.mode->guard_forced[b], phase, over);
       peak[b] = std::max(peak[b], over.high / network.branches[b].slope_ohm);
     }
   }
@@ -146,11 +145,7 @@ SteadyState solve_steady_state(const Network& network, const SteadyOptions& opti
     answer.start[k] = guess ? (*guess)[k] : network.capacitors[k].start_V;
   }
   if (!converge(map, options, answer)) return answer;
-  StateVector end{};
-  if (!map.apply(answer.start, end, nullptr)) {
-    fail(answer, map.fault());
-    return answer;
-  }
+  // The last walk of converge() began at the answer: its segments are the solution.
   collect_rail(map, answer);
   if (options.powers && !collect_powers(map, map.raw_end(), answer)) return answer;
   if (options.multipliers && !(answer.greatest_multiplier < 1)) {

@@ -104,7 +104,7 @@ std::string unusable(const Network& network) {
   for (const auto& load : network.loads) {
     if (!(load.current_A >= 0) || !(load.cutoff_V > 0)) return "a load without a current or a cut-off";
   }
-  if (network.source.waveform.tones().size() > 24) return "more than 23 harmonics";
+  if (network.source.waveform.tones().size() > kMostTones) return "more than 23 harmonics";
   if (!(network.source.waveform.voltage_Vrms() > 0) || !(network.source.waveform.frequency_Hz() > 0)) {
     return "mains without voltage or frequency";
   }

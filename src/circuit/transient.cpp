@@ -14,13 +14,13 @@ namespace {
 template <typename RowOf>
 double greatest(const Walker& walker, const std::vector<Segment>& segments, RowOf row_of) {
   const auto& mains = walker.network().source.waveform;
-  TonePhase phase;
+  TonePhase phase(mains);
   double most = 0;
   for (const auto& segment : segments) {
     const ModalRow* row = row_of(*segment.mode);
     if (!row) continue;
     Extremes extremes;
-    include_extremes(segment, mains, *row, forced_part(*segment.mode, mains, *row), phase, extremes);
+    include_extremes(segment, *row, forced_part(*segment.mode, mains, *row), phase, extremes);
     most = std::max({most, std::abs(extremes.low), std::abs(extremes.high)});
   }
   return most;
@@ -46,7 +46,7 @@ void observe(const Walker& walker, const std::vector<Segment>& segments, const T
   std::vector<double> branch_A(network.branches.size());
   std::vector<double> branch_V(network.branches.size());
   std::vector<double> resistor_A(resistors);
-  TonePhase phase;
+  TonePhase phase(mains);
   for (const auto& segment : segments) {
     const auto& mode = *segment.mode;
     const ModalRow source = to_modal_row(mode, mode.source_A);
@@ -58,7 +58,7 @@ void observe(const Walker& walker, const std::vector<Segment>& segments, const T
     bool first = true;
     while (first || s < segment.length_s) {
       if (!first) s = next_sample(segment, s, mains.period_s());
-      phase.set(mains, segment.start_s + s);
+      phase.set(segment.start_s + s);
       const ModalMoment moment = modal_moment(segment, s);
       for (std::size_t r = 0; r < resistors; ++r) {
         resistor_A[r] =
@@ -97,10 +97,10 @@ Transient run_transient(const Network& network, const StateVector& start, const 
     return run;
   }
   const auto& mains = network.source.waveform;
-  TonePhase phase;
+  TonePhase phase(mains);
   Extremes rail;
   for (const auto& segment : segments) {
-    include_extremes(segment, mains, segment.mode->rail, segment.mode->rail_forced, phase, rail);
+    include_extremes(segment, segment.mode->rail, segment.mode->rail_forced, phase, rail);
   }
   run.rail_min_V = rail.low;
   run.rail_max_V = rail.high;

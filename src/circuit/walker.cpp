@@ -11,7 +11,8 @@ constexpr double kConsistent_V = 1e-7;  // a guard on the wrong side by less is 
 constexpr int kMostSegments = 20000;
 }  // namespace
 
-Walker::Walker(const Network& network) : network_(network), topology_(analyse(network)) {
+Walker::Walker(const Network& network)
+    : network_(network), topology_(analyse(network)), phase_(network.source.waveform) {
   fault_ = topology_.fault;
   modes_.reserve(16);
   // Loads usually stand above their cut-off.
@@ -28,8 +29,7 @@ const ConductionMode& Walker::mode(ConductionMask mask) {
 
 double Walker::worst_violation_V(const ConductionMode& candidate, double time_s, const StateVector& x,
                                  int& bit) {
-  const auto& mains = network_.source.waveform;
-  const Segment segment = begin_segment(candidate, mains, time_s, x, phase_);
+  const Segment segment = begin_segment(candidate, time_s, x, phase_);
   const ModalMoment moment = modal_moment(segment, 0);
   double worst = 0;
   bit = -1;
@@ -73,9 +73,7 @@ bool Walker::find_mode(double time_s, const StateVector& x, ConductionMask& mask
 bool Walker::walk(double from_s, double to_s, StateVector& x, std::vector<Segment>& segments) {
   segments.clear();
   if (!fault_.empty()) return false;
-  const auto& mains = network_.source.waveform;
-  const double period_s = mains.period_s();
-  const double resolution_s = kResolution * period_s;
+  const double resolution_s = kResolution * network_.source.waveform.period_s();
   ConductionMask mask = last_start_;
   if (!find_mode(from_s, x, mask)) {
     fault_ = "no conduction mode fits the start";
@@ -91,9 +89,9 @@ bool Walker::walk(double from_s, double to_s, StateVector& x, std::vector<Segmen
       fault_ = here.solvable ? "conduction changes without end" : "a node hangs on nothing";
       return false;
     }
-    Segment segment = begin_segment(here, mains, time_s, x, phase_);
+    Segment segment = begin_segment(here, time_s, x, phase_);
     const double limit_s = to_s - time_s;
-    auto crossing = first_crossing(segment, mains, limit_s, resolution_s, phase_);
+    auto crossing = first_crossing(segment, limit_s, resolution_s, phase_);
     if (crossing && crossing->bit < 0) {
       fault_ = "a crossing could not be placed";
       return false;
@@ -105,7 +103,7 @@ bool Walker::walk(double from_s, double to_s, StateVector& x, std::vector<Segmen
         fault_ = "no conduction mode fits a tie";
         return false;
       }
-      segment = begin_segment(mode(mask), mains, time_s, x, phase_);
+      segment = begin_segment(mode(mask), time_s, x, phase_);
       crossing = Crossing{std::min(1e3 * resolution_s, limit_s), -1};
       standing = 0;
     } else if (!crossing || crossing->s > resolution_s) {
@@ -113,7 +111,7 @@ bool Walker::walk(double from_s, double to_s, StateVector& x, std::vector<Segmen
     }
     segment.length_s = crossing ? crossing->s : limit_s;
     if (segment.length_s > 0) {
-      x = state_at(segment, mains, segment.length_s, phase_);
+      x = state_at(segment, segment.length_s, phase_);
       segments.push_back(segment);
     }
     if (!crossing) break;

@@ -15,7 +15,7 @@ struct ModalRow {
 /// A quantity along one conduction mode apart from its own transient: the sinusoidal answer to every tone
 /// and the constant. With it a guard costs one dot product and no look at the tones' modal parts.
 struct ForcedRow {
-  std::vector<double> cosine, sine;  ///< one a tone
+  std::array<double, kMostTones> cosine, sine;  ///< one a tone; only those of the mains are set
   double constant = 0;
   double curvature = 0;  ///< bound of the tones' second derivative: sum (k·w)^2·amplitude
   double jerk = 0;       ///< bound of their third derivative

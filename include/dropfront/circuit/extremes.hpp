@@ -15,7 +15,7 @@ struct Extremes {
 /// Least and greatest value of a row along one segment, its ends included. Stationary points are found like
 /// crossings, by stepping to the root of a lower bound of |slope|, so a hump between the ends is never
 /// missed.
-void include_extremes(const Segment& segment, const Waveform& mains, const ModalRow& row,
-                      const ForcedRow& forced, TonePhase& phase, Extremes& extremes);
+void include_extremes(const Segment& segment, const ModalRow& row, const ForcedRow& forced, TonePhase& phase,
+                      Extremes& extremes);
 
 }  // namespace dropfront::circuit

@@ -18,10 +18,17 @@ struct Segment {
   StateVector drift{};
 };
 
-/// cos and sin of every tone's angle at one time.
-struct TonePhase {
-  std::vector<double> cosine, sine;
-  void set(const Waveform& mains, double time_s);
+/// cos and sin of every tone's angle at one time. One sine-cosine a moment; the harmonics follow by turning.
+class TonePhase {
+ public:
+  explicit TonePhase(const Waveform& mains);
+  void set(double time_s);
+  int count = 0;
+  std::array<double, kMostTones> omega, cosine, sine;  ///< only the first `count` are set
+
+ private:
+  double fundamental_ = 0;
+  std::array<int, kMostTones> order_;
 };
 
 /// The transient part of every mode at s: value, and what its derivatives are made of.
@@ -32,18 +39,17 @@ struct ModalMoment {
 ModalMoment modal_moment(const Segment& segment, double s);
 
 /// Begins a segment at time `start_s` from capacitor voltages `x`.
-Segment begin_segment(const ConductionMode& mode, const Waveform& mains, double start_s, const StateVector& x,
-                      TonePhase& phase);
+Segment begin_segment(const ConductionMode& mode, double start_s, const StateVector& x, TonePhase& phase);
 
 /// Capacitor voltages at s.
-StateVector state_at(const Segment& segment, const Waveform& mains, double s, TonePhase& phase);
+StateVector state_at(const Segment& segment, double s, TonePhase& phase);
 
 double value_at(const ModalRow& row, const ForcedRow& forced, const ModalMoment& moment,
                 const TonePhase& phase);
 double slope_at(const ModalRow& row, const ForcedRow& forced, const ModalMoment& moment,
-                const TonePhase& phase, const Waveform& mains);
+                const TonePhase& phase);
 double curvature_at(const Segment& segment, const ModalRow& row, const ForcedRow& forced,
-                    const ModalMoment& moment, const TonePhase& phase, const Waveform& mains);
+                    const ModalMoment& moment, const TonePhase& phase);
 
 /// The first moment at which a branch or load changes side.
 struct Crossing {
@@ -54,7 +60,7 @@ struct Crossing {
 /// First crossing in (0, limit], found by stepping to the root of a lower bound: from a value h, slope h' and
 /// a bound M on |h''| ahead, h stays positive at least until h + h'·s - M·s^2/2 = 0. No crossing can be
 /// jumped over; near a simple root the steps converge quadratically. `resolution_s` ends the search.
-std::optional<Crossing> first_crossing(const Segment& segment, const Waveform& mains, double limit_s,
-                                       double resolution_s, TonePhase& phase);
+std::optional<Crossing> first_crossing(const Segment& segment, double limit_s, double resolution_s,
+                                       TonePhase& phase);
 
 }  // namespace dropfront::circuit

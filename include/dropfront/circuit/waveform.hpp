@@ -3,6 +3,8 @@
 
 namespace dropfront::circuit {
 
+inline constexpr int kMostTones = 24;  ///< fundamental included
+
 /// One harmonic relative to the fundamental: v adds share·V1·sqrt2·sin(order·wt + phase).
 struct Harmonic {
   int order = 3;
