@@ -58,7 +58,8 @@ std::string one_line(std::string text) {
 std::string_view name_of(circuit::Owner owner) { return kOwnerNames[static_cast<std::size_t>(owner)]; }
 std::string node(circuit::Node n) { return n == 0 ? "0" : fmt::format("n{}", n); }
 std::string across(circuit::Node a, circuit::Node b) {
-  return b == 0 ? fmt::format("V({})", node(a)) : fmt::format("V({},{})", node(a), node(b));
+  if (b == 0) return fmt::format("V({})", node(a));
+  return a == 0 ? fmt::format("(-V({}))", node(b)) : fmt::format("V({},{})", node(a), node(b));
 }
 
 void write_source(Deck& deck, const circuit::SourceElement& source, double start_time_s) {
@@ -77,25 +78,39 @@ void write_source(Deck& deck, const circuit::SourceElement& source, double start
   }
 }
 
+/// One diode of a branch; a paired branch is two alike, each with half the threshold and slope.
+struct Leg {
+  std::string name;
+  circuit::Node a, b;
+  double threshold_V, slope_ohm;
+};
+
+std::vector<Leg> legs_of(const circuit::BranchElement& branch, std::size_t index) {
+  const std::string name = fmt::format("{}", index + 1);
+  if (!branch.paired()) return {{name, branch.a, branch.b, branch.threshold_V, branch.slope_ohm}};
+  const double threshold_V = branch.threshold_V / 2, slope_ohm = branch.slope_ohm / 2;
+  return {{name, branch.a, branch.b, threshold_V, slope_ohm},
+          {name + "b", branch.a2, branch.b2, threshold_V, slope_ohm}};
+}
+
 void write_branches(Deck& deck, const std::vector<circuit::BranchElement>& branches, BranchForm form) {
   if (branches.empty()) return;
   deck.line("* One-way branches: open below the threshold, threshold + slope x current above");
   const double junction_V =
       kJunctionShare * kThermal_V * std::log(1 + kJunctionReference_A / kJunctionSaturation_A);
-  int number = 0;
-  for (const auto& branch : branches) {
-    ++number;
-    deck.line("* {}: {} V, {} ohm", name_of(branch.owner), branch.threshold_V, branch.slope_ohm);
-    if (form == BranchForm::piecewise) {
-      deck.line("B{} {} {} I=uramp({}-({}))/{}", number, node(branch.a), node(branch.b),
-                across(branch.a, branch.b), branch.threshold_V, branch.slope_ohm);
-    } else {
-      deck.line("VT{0} {1} d{0} DC {2}", number, node(branch.a), branch.threshold_V - junction_V);
-      deck.line("D{0} d{0} {1} DM{0}", number, node(branch.b));
-      deck.line(".model DM{} D(IS={} N={} RS={} CJO={})", number, kJunctionSaturation_A, kJunctionShare,
-                branch.slope_ohm, kJunctionCapacitance_F);
+  for (std::size_t i = 0; i < branches.size(); ++i)
+    for (const Leg& leg : legs_of(branches[i], i)) {
+      deck.line("* {}: {} V, {} ohm", name_of(branches[i].owner), leg.threshold_V, leg.slope_ohm);
+      if (form == BranchForm::piecewise) {
+        deck.line("B{} {} {} I=uramp({}-({}))/{}", leg.name, node(leg.a), node(leg.b), across(leg.a, leg.b),
+                  leg.threshold_V, leg.slope_ohm);
+      } else {
+        deck.line("VT{0} {1} d{0} DC {2}", leg.name, node(leg.a), leg.threshold_V - junction_V);
+        deck.line("D{0} d{0} {1} DM{0}", leg.name, node(leg.b));
+        deck.line(".model DM{} D(IS={} N={} RS={} CJO={})", leg.name, kJunctionSaturation_A, kJunctionShare,
+                  leg.slope_ohm, kJunctionCapacitance_F);
+      }
     }
-  }
 }
 
 void write_loads(Deck& deck, const std::vector<circuit::LoadElement>& loads) {
@@ -140,12 +155,15 @@ void write_probes(Deck& deck, const circuit::Network& network, const DeckOptions
     deck.line("BPR{0} pr{0} 0 V={1}*{1}/{2}", i + 1, across(r.a, r.b), r.resistance_ohm);
   }
   for (std::size_t i = 0; i < network.branches.size(); ++i) {
-    const auto& d = network.branches[i];
-    const std::string v = across(d.a, d.b);
-    if (options.branches == BranchForm::smooth)
-      deck.line("BPD{0} pd{0} 0 V={1}*I(VT{0})", i + 1, v);
-    else
-      deck.line("BPD{0} pd{0} 0 V={1}*uramp({1}-({2}))/{3}", i + 1, v, d.threshold_V, d.slope_ohm);
+    std::string power;
+    for (const Leg& leg : legs_of(network.branches[i], i)) {
+      const std::string v = across(leg.a, leg.b);
+      if (!power.empty()) power += '+';
+      power += options.branches == BranchForm::smooth
+                   ? fmt::format("{}*I(VT{})", v, leg.name)
+                   : fmt::format("{}*uramp({}-({}))/{}", v, v, leg.threshold_V, leg.slope_ohm);
+    }
+    deck.line("BPD{0} pd{0} 0 V={1}", i + 1, power);
   }
 }
 

@@ -87,7 +87,7 @@ ElementValues same_values() {
   return v;
 }
 
-TEST_CASE("each arrangement is wired as its hand-written ngspice deck", "[other]") {
+TEST_CASE("each arrangement is wired as its hand-written ngspice deck", "[wiring]") {
   for (const auto& entry : by_hand()) {
     INFO(entry.first);
     const Arrangement* arrangement = find_arrangement(entry.first);

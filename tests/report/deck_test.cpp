@@ -87,6 +87,16 @@ TEST_CASE("the piecewise form writes the exact curve and no junction") {
   CHECK_FALSE(holds(deck, ".model"));
 }
 
+TEST_CASE("a paired branch is two diodes that share its threshold and slope") {
+  Network n = one_of_each();
+  n.branches.push_back({1, 3, 1.5, 2, Owner::rectifier, 2, 0});
+  DeckOptions options;
+  options.branches = BranchForm::piecewise;
+  const std::string deck = make_deck(n, "t", options);
+  CHECK(holds(deck, "B3 n1 n3 I=uramp(V(n1,n3)-(0.75))/1\n"));
+  CHECK(holds(deck, "B3b n2 0 I=uramp(V(n2)-(0.75))/1\n"));
+}
+
 TEST_CASE("the same network gives the same deck") {
   CHECK(make_deck(one_of_each(), "t") == make_deck(one_of_each(), "t"));
 }
