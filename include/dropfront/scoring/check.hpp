@@ -30,6 +30,8 @@ struct Check {
 
   /// 1 - value/limit for "<=", value/limit - 1 for ">="; null where the limit is 0 or anything is missing.
   std::optional<double> headroom() const;
+  /// A yes/no check: value and limit are 0 or 1, so its headroom says nothing about how close it is.
+  bool yes_or_no() const { return unit.empty() && !at_most; }
 };
 
 }  // namespace dropfront::scoring

@@ -10,7 +10,7 @@ std::optional<Check> dropper_voltage(Evidence& evidence) {
   const parts::Dropper& dropper = *evidence.design().dropper;
   return at_most("dropper.voltage", evidence.shapes().rich.voltage_Vrms(),
                  dropper.rated_voltage_Vrms * evidence.requirement().derating.dropper_voltage, "V",
-                 at_corner("rich"), "whole line r.m.s. at the high end, harmonics included");
+                 at_corner("rich_empty"), "whole line r.m.s. at the high end, harmonics included");
 }
 
 }  // namespace dropfront::scoring

@@ -83,6 +83,12 @@ At at_point(const OperatingPoint& point) {
   return at;
 }
 
+At at_lean(const LeanAnswer& lean, const std::string& load) {
+  At at = at_corner(lean.hot_decides ? "lean_hot" : "lean_cold", lean.ambient_degC, lean.ends);
+  at.load = load;
+  return at;
+}
+
 At at_plug_in(const PlugIn& run) {
   At at = at_corner("plug_in", run.ambient_degC, run.ends);
   at.load = "none";

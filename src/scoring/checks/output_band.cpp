@@ -25,7 +25,7 @@ std::optional<Check> output_band(Evidence& evidence) {
   if (stage.kind != parts::StageKind::direct) {
     const double distance = distance_V(need, stage.output_voltage_V * (1 - stage.tolerance),
                                        stage.output_voltage_V * (1 + stage.tolerance));
-    return at_most("output.band", distance, allowed, "V", at_corner("any"),
+    return at_most("output.band", distance, allowed, "V", at_corner(""),
                    "the stage's own tolerance against the asked band, in regulation");
   }
   // The rail is the output: least at the heaviest load in the lean corner, greatest unloaded.

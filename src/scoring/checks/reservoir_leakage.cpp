@@ -13,8 +13,7 @@ std::optional<Check> reservoir_leakage(Evidence& evidence) {
   double spare = lean.margin_A;
   if (stage.kind == parts::StageKind::step_down)
     spare *= stage.output_voltage_V / (stage.efficiency.value_or(1) * design.clamp->voltage_max_V);
-  At at = at_corner(lean.hot_decides ? "lean_hot" : "lean_cold", lean.ambient_degC, lean.ends);
-  at.load = evidence.loads().heaviest_name;
+  const At at = at_lean(lean, evidence.loads().heaviest_name);
   const double leakage = design.reservoir->leakage_A;
   const Check check = at_most("reservoir.leakage", leakage, leakage + spare, "A", at,
                               "data leakage against what the lean corner can spare for it");

@@ -5,8 +5,7 @@ namespace dropfront::scoring {
 
 std::optional<Check> supply_margin(Evidence& evidence) {
   const LeanAnswer& lean = evidence.lean();
-  At at = at_corner(lean.hot_decides ? "lean_hot" : "lean_cold", lean.ambient_degC, lean.ends);
-  at.load = evidence.loads().heaviest_name;
+  const At at = at_lean(lean, evidence.loads().heaviest_name);
   const double wanted = evidence.requirement().limits.current_margin * evidence.loads().heaviest_output_A();
   const Check check = at_least("supply.margin", lean.margin_A, wanted, "A", at,
                                "at the output, end of life: available less Iq, leakage and rail loads, less "

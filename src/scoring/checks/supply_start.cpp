@@ -11,8 +11,7 @@ namespace dropfront::scoring {
 std::optional<Check> supply_start(Evidence& evidence) {
   const parts::OutputStage& stage = *evidence.design().output_stage;
   const bool step_down = stage.kind == parts::StageKind::step_down;
-  At at = at_corner("lean", std::nullopt, evidence.lean().ends);
-  at.load = "start load";
+  const At at = at_lean(evidence.lean(), "start load");
   if (step_down && !stage.input_on_V) {
     return at_least("supply.start", std::nullopt, std::nullopt, "A", at,
                     "start not shown: input_on is not given");

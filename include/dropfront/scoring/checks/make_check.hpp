@@ -5,6 +5,7 @@
 #include <vector>
 
 #include "dropfront/scoring/check.hpp"
+#include "dropfront/scoring/lean.hpp"
 #include "dropfront/scoring/operating_point.hpp"
 #include "dropfront/scoring/plug_in.hpp"
 
@@ -32,9 +33,12 @@ Check at_most_each(std::string_view id, double value, const std::vector<std::opt
 
 /// Where an operating point was solved.
 At at_point(const OperatingPoint& point);
+/// The lean corner that decides.
+At at_lean(const LeanAnswer& lean, const std::string& load);
 /// Where a plug-in was run: closing on the crest.
 At at_plug_in(const PlugIn& run);
-/// A place without an operating point. `ends` and `ambient_degC` as far as they matter.
+/// A place without an operating point; empty where no corner decides. `ends` and `ambient_degC` as far as
+/// they matter.
 At at_corner(std::string corner, std::optional<double> ambient_degC = {}, std::string ends = {});
 
 /// The worse of two verdicts on the same check: failed before unsolved before not given before passed, then
