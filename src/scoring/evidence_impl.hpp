@@ -1,5 +1,6 @@
 // What an Evidence holds, shared by its source files.
 #pragma once
+#include <algorithm>
 #include <array>
 #include <memory>
 #include <optional>
@@ -39,9 +40,12 @@ struct Evidence::Impl {
     return {loads.standby_name, loads.standby_A, design.reservoir->leakage_A + loads.rail_A, Quiescent::data,
             false};
   }
+  /// An unloaded rail still feeds the reservoir's own leakage, at least a tenth of the data maximum: without
+  /// it a reservoir behind a diode would keep any charge, and the rail would have no steady state of its own.
   LoadCase rich_share(double share, const char* name) const {
-    const double beside_A = loads.rail_A + share * loads.burst_mean_rail_A;
-    return {name, share * loads.heaviest_output_A(), beside_A, Quiescent::least, false};
+    const double leakage_A = std::max(1e-7, 0.1 * design.reservoir->leakage_A);
+    return {name, share * loads.heaviest_output_A(),
+            leakage_A + loads.rail_A + share * loads.burst_mean_rail_A, Quiescent::least, false};
   }
 
   double ambient_degC(bool hot) const {
@@ -69,12 +73,10 @@ struct Evidence::Impl {
   const OperatingPoint& rest(bool hot) {
     auto& point = rests[hot ? 1 : 0];
     if (point) return *point;
-    const OperatingPoint* warm = hot ? nullptr : &rest(true);
     if (!hot && one_ambient()) {
-      point = *warm;
+      point = rest(true);
     } else {
-      point = points.solve("rich_empty", rich_recipe(*shapes), rich_share(0, "none"), ambient_degC(hot),
-                           warm != nullptr && warm->state.usable() ? warm : nullptr);
+      point = points.solve("rich_empty", rich_recipe(*shapes), rich_share(0, "none"), ambient_degC(hot));
       point->ends = kRichEnds;
     }
     return *point;
