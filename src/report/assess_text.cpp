@@ -38,8 +38,8 @@ std::string objectives_text(const scoring::Score& score, const std::string& curr
 }
 
 std::string operations_text(const scoring::SupplyOperations& supply, bool named) {
-  TextTable table({"corner", ">degC", ">load mA", ">rail V", ">to V", ">ripple V", ">input W", ">input mA",
-                   ">available mA"});
+  TextTable table({"corner", ">degC", ">load mA", ">rail min V", ">max V", ">ripple V", ">input W",
+                   ">input mA", ">available mA"});
   for (const auto& operation : supply.operations) {
     const auto& state = operation.state;
     const auto figure = [&state](double value) {
@@ -79,8 +79,13 @@ std::string checks_text(const scoring::Score& score, const AssessTextOptions& op
                         bool several_supplies) {
   TextTable table({"check", ">value", "", ">limit", ">headroom", "", "worst at"});
   for (const auto& check : score.checks) {
-    table.row({std::string(check.id), amount(check.value, check.unit),
-               check.at_most ? "<=" : ">=", amount(check.limit, check.unit), percent(check.headroom()),
+    const bool yes_no = is_yes_no(check);
+    table.row({std::string(check.id),
+               yes_no ? (*check.value > 0 ? "yes" : "no") : amount(check.value, check.unit),
+               yes_no          ? ""
+               : check.at_most ? "<="
+                               : ">=",
+               yes_no ? "yes" : amount(check.limit, check.unit), yes_no ? "" : percent(check.headroom()),
                result_word(check), check.at.corner});
     if (!options.explain) continue;
     const std::string place = place_text(check.at, several_supplies);

@@ -72,11 +72,9 @@ std::string asked_text(const scoring::Requirement& need) {
 
 std::string problem_text(const problem::Problem& problem, const search::Space& space) {
   std::string text = wrapped(problem.title) + asked_text(problem.requirement);
-  if (!problem.defaults.empty()) {
-    TextTable table({"filled in", "value", "reason"});
-    for (const auto& filled : problem.defaults) table.row({filled.key, filled.value, filled.reason});
-    text += '\n' + table.text();
-  }
+  if (!problem.defaults.empty()) text += "\n  filled in, and why\n";
+  for (const auto& filled : problem.defaults)
+    text += wrapped(fmt::format("{} = {}: {}", filled.key, filled.value, filled.reason), "    ");
   text += '\n' + slots_text(problem, space);
   return text + '\n' + cautions_text(with_standing_cautions(problem.cautions));
 }

@@ -28,38 +28,47 @@ std::string rest_of_design(const Entry& entry) {
   return text + tightest_words(entry);
 }
 
+std::string part_names(const Entry& entry) {
+  std::string text;
+  for (const SlotPart& part : design_slots(entry.design)) {
+    if (part.placed == 0) continue;
+    if (!text.empty()) text += ", ";
+    if (part.placed > 1) text += fmt::format("{} x ", part.placed);
+    text += part.info->name;
+  }
+  return text;
+}
+
 }  // namespace
 
-std::string design_table(const std::string& heading, const std::vector<std::string>& labels,
-                         const std::vector<const Entry*>& entries, const std::string& currency) {
+std::string design_table(const std::string& heading, const std::vector<Line>& lines,
+                         const std::string& currency) {
   TextTable table({heading, ">dropper", ">resistor", ">clamp", ">reservoir",
                    fmt::format(">cost {}", currency), ">standby mW", ">area mm2", ">margin mA"},
                   1);
-  for (std::size_t i = 0; i < entries.size(); ++i) {
-    const Entry& entry = *entries[i];
-    const auto& design = entry.design;
-    const auto& objectives = entry.objectives;
-    table.row({labels[i], design.dropper ? with_unit(design.dropper->capacitance_F, "F") : "-",
+  for (const Line& line : lines) {
+    const auto& design = line.entry->design;
+    const auto& objectives = line.entry->objectives;
+    table.row({line.label, design.dropper ? with_unit(design.dropper->capacitance_F, "F") : "-",
                design.series_resistor ? short_value(*design.series_resistor) : "-",
                design.clamp ? short_value(*design.clamp) : "-",
                design.reservoir ? short_value(*design.reservoir) : "-", rounded(cost_units(objectives), 3),
                rounded(thousandfold(objectives.standby_loss_W), 0), rounded(area_mm2(objectives), 0),
                rounded(thousandfold(objectives.current_margin_A), 2)});
-    table.note(rest_of_design(entry), 6);
+    if (!line.describe) continue;
+    table.note(rest_of_design(*line.entry), 6);
+    table.note(part_names(*line.entry), 6);
   }
   return table.text();
 }
 
-std::string ranked_table(const Result& result, const RankedList& list) {
-  std::vector<std::string> labels;
-  std::vector<const Entry*> entries;
-  for (const int number : list.numbers) {
-    const Entry* entry = find_entry(result, number);
-    if (entry == nullptr) continue;
-    entries.push_back(entry);
-    labels.push_back(std::to_string(number) + (entry->on_front ? "" : "*"));
-  }
-  return design_table(">no", labels, entries, result.problem->requirement.currency);
+std::string ranked_table(const Result& result, const RankedList& list, std::set<int>& described) {
+  std::vector<Line> lines;
+  for (const int number : list.numbers)
+    if (const Entry* entry = find_entry(result, number))
+      lines.push_back(
+          {std::to_string(number) + (entry->on_front ? "" : "*"), entry, described.insert(number).second});
+  return design_table(">no", lines, result.problem->requirement.currency);
 }
 
 std::string ranked_heading(const std::string& name) {

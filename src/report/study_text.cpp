@@ -41,20 +41,19 @@ std::string across_text(const Study& study) {
 
 /// The first design of the set `name` of each combination that has one.
 std::string first_designs(const Study& study, const std::string& name) {
-  std::vector<std::string> labels;
-  std::vector<const Entry*> entries;
+  std::vector<Line> lines;
   std::string currency;
   for (const auto& combination : study.combinations) {
     if (!combination.result) continue;
     for (const auto& list : combination.result->ranked) {
       if (list.name != name || list.numbers.empty()) continue;
-      labels.push_back(values_text(combination.values));
-      entries.push_back(find_entry(*combination.result, list.numbers.front()));
+      lines.push_back(
+          {values_text(combination.values), find_entry(*combination.result, list.numbers.front())});
       currency = combination.result->problem->requirement.currency;
     }
   }
-  if (entries.empty()) return "";
-  return '\n' + ranked_heading(name) + '\n' + design_table("", labels, entries, currency);
+  if (lines.empty()) return "";
+  return '\n' + ranked_heading(name) + '\n' + design_table("", lines, currency);
 }
 
 }  // namespace

@@ -3,6 +3,7 @@
 #include <fmt/core.h>
 
 #include <algorithm>
+#include <set>
 
 #include "dropfront/report/design_slots.hpp"
 #include "dropfront/report/for_people.hpp"
@@ -62,9 +63,10 @@ std::string summary_body(const Result& result) {
   text += wrapped(counts_text(result));
   if (result.front.empty()) return text + nothing_found(result);
   text += wrapped(counted(static_cast<double>(result.front.size())) +
-                  " on the front: no other design found is at least as good in every objective.");
+                  " on the front: no design found is as good in every objective and better in one.");
+  std::set<int> described;
   for (const auto& list : result.ranked)
-    text += '\n' + ranked_heading(list.name) + '\n' + ranked_table(result, list);
+    text += '\n' + ranked_heading(list.name) + '\n' + ranked_table(result, list, described);
   if (!result.extras.empty()) text += "  * complies, not on the front\n";
   return text + "\n" +
          wrapped(

@@ -11,7 +11,7 @@ namespace dropfront::report {
 Result make_result(const problem::BoundProblem& bound, const search::SearchOutcome& outcome,
                    const search::SearchOptions& options, const std::string& version);
 
-/// The passed check with the least headroom; null where none has one.
+/// The passed check with the least headroom, yes/no checks apart; null where none has one.
 const scoring::Check* tightest_check(const scoring::Score& score);
 
 /// quick, normal, deep.

@@ -1,4 +1,5 @@
 #pragma once
+#include <set>
 #include <string>
 #include <vector>
 
@@ -6,13 +7,18 @@
 
 namespace dropfront::report {
 
-/// Designs one under the other, values and objectives in columns, the rest of each design and its tightest
-/// check on a second line. `labels`: what stands in the first column, under `heading`.
-std::string design_table(const std::string& heading, const std::vector<std::string>& labels,
-                         const std::vector<const Entry*>& entries, const std::string& currency);
+/// Designs one under the other, values and objectives in columns.
+struct Line {
+  std::string label;
+  const Entry* entry = nullptr;
+  bool describe = true;  ///< the rest of the design, its tightest check and its part names on lines below
+};
+std::string design_table(const std::string& heading, const std::vector<Line>& lines,
+                         const std::string& currency);
 
-/// One ranked set by candidate numbers; '*' behind a number: not on the front.
-std::string ranked_table(const Result& result, const RankedList& list);
+/// One ranked set by candidate numbers; '*' behind a number: not on the front. Designs of `described` are not
+/// described again; the others are added to it.
+std::string ranked_table(const Result& result, const RankedList& list, std::set<int>& described);
 
 /// Heading of a ranked set: "Cheapest", "Lowest standby loss", ...
 std::string ranked_heading(const std::string& name);
