@@ -3,91 +3,80 @@
 #include <algorithm>
 #include <cmath>
 
+#include "dropfront/circuit/load_newton.hpp"
+#include "dropfront/circuit/orbit.hpp"
+
 namespace dropfront::circuit {
 
 namespace {
 
-struct Probe {
-  bool usable = false;
-  double headroom_V = 0;  ///< rail minimum above what is required
-  SteadyState state;
-};
+constexpr double kPassing_V = 1e-7;   // a rail this little below what is required counts as on it
+constexpr double kOnTarget_V = 1e-6;  // Newton's root against the independent steady state
 
-class Bracket {
+/// Steady states of one network at different loads, on one set of conduction modes.
+class LoadScan {
  public:
-  Bracket(Network (*build)(const ElementValues&), ElementValues values, double required_V)
-      : build_(build), values_(std::move(values)), required_V_(required_V) {}
-
-  Probe probe(double current_A, const StateVector* guess) {
-    values_.rail_current_A = current_A;
-    SteadyOptions options;
-    options.powers = false;
-    Probe result;
-    ++count;
-    result.state = solve_steady_state(build_(values_), options, guess);
-    result.usable = result.state.usable();
-    result.headroom_V = result.state.rail_min_V - required_V_;
-    return result;
+  LoadScan(const Network& network, double required_V) : map_(network), required_V_(required_V) {
+    for (std::size_t k = 0; k < network.capacitors.size(); ++k) cold_[k] = network.capacitors[k].start_V;
   }
 
-  int count = 0;
+  struct Probe {
+    bool usable = false;
+    std::string reason;
+    double headroom_V = 0;  ///< rail minimum above what is required
+    StateVector state{};
+  };
+
+  Probe at(double current_A, const StateVector& guess) {
+    map_.set_load(current_A);
+    ++solved;
+    Probe probe;
+    const Orbit orbit = find_orbit(map_, guess, SteadyOptions{});
+    probe.usable = orbit.found;
+    probe.reason = orbit.reason;
+    if (!orbit.found) return probe;
+    probe.state = orbit.start;
+    probe.headroom_V = rail_extremes(map_).low - required_V_;
+    return probe;
+  }
+
+  const StateVector& cold() const { return cold_; }
+  PeriodMap& map() { return map_; }
+  int solved = 0;
 
  private:
-  Network (*build_)(const ElementValues&);
-  ElementValues values_;
+  PeriodMap map_;
   double required_V_;
+  StateVector cold_{};
 };
 
-}  // namespace
+/// Everything that crosses the dropper in a period, were it all to reach the rail.
+double charge_ceiling_A(const ElementValues& values) {
+  return 2 * values.mains.frequency_Hz() * values.dropper_F * values.mains.sum_of_rises_V() +
+         2 * values.mains.crest_V() / values.discharge_ohm;
+}
 
-AvailableCurrent find_available_current(Network (*build)(const ElementValues&), ElementValues values,
-                                        double required_V, double ceiling_A) {
-  AvailableCurrent answer;
-  if (!(values.load_cutoff_V > 0)) values.load_cutoff_V = 0.5 * required_V;
-  Bracket bracket(build, values, required_V);
-  Probe low = bracket.probe(0, nullptr);
-  answer.steady_states = 1;
-  if (!low.usable) {
-    answer.reason = low.state.reason;
-    return answer;
-  }
-  answer.rail_min_V = low.state.rail_min_V;
-  answer.state = low.state.start;
-  answer.usable = true;
-  if (low.headroom_V < 0) {
-    answer.reason = "the unloaded rail stays below what is required";
-    return answer;
-  }
-  double low_A = 0;
-  // Everything that crosses the dropper in a period, were it all to reach the rail.
-  double high_A = ceiling_A > 0
-                      ? ceiling_A
-                      : 2 * values.mains.frequency_Hz() * values.dropper_F * values.mains.sum_of_rises_V() +
-                            2 * values.mains.crest_V() / values.discharge_ohm;
-  Probe high;
-  high.headroom_V = -required_V;
+/// Root of the rail minimum between a passing and a failing load: secant steps with halved memory, every
+/// third one a bisection, so that the bend at the knee cannot hold it up.
+LoadScan::Probe close_bracket(LoadScan& scan, double& low_A, LoadScan::Probe low, double high_A,
+                              double high_V) {
+  double low_weight = low.headroom_V;
+  double high_weight = high_V;
   int kept_low = 0;
   int kept_high = 0;
-  double low_weight = low.headroom_V;
-  double high_weight = high.headroom_V;
-  while (high_A - low_A > std::max(1e-9, 1e-6 * high_A) && bracket.count < 80) {
-    double trial_A = (low_A * -high_weight + high_A * low_weight) / (low_weight - high_weight);
+  for (int k = 0; k < 100 && high_A - low_A > std::max(1e-10, 1e-8 * high_A) && low.headroom_V > 1e-8; ++k) {
     const double width = high_A - low_A;
-    if (bracket.count % 3 == 2) trial_A = low_A + 0.5 * width;
+    double trial_A = low_A + width * low_weight / (low_weight - high_weight);
+    if (k % 3 == 2) trial_A = low_A + 0.5 * width;
     trial_A = std::clamp(trial_A, low_A + 1e-3 * width, high_A - 1e-3 * width);
-    const Probe probe = bracket.probe(trial_A, &low.state.start);
-    if (!probe.usable) {
-      answer.usable = false;
-      answer.reason = probe.state.reason;
-      break;
-    }
+    const auto probe = scan.at(trial_A, low.state);
+    if (!probe.usable) return probe;
     if (probe.headroom_V >= 0) {
       low_A = trial_A;
       low = probe;
       low_weight = probe.headroom_V;
       if (++kept_low > 1) high_weight /= 2;
       kept_high = 0;
-      if (probe.headroom_V < 1e-8) break;
     } else {
       high_A = trial_A;
       high_weight = probe.headroom_V;
@@ -95,11 +84,74 @@ AvailableCurrent find_available_current(Network (*build)(const ElementValues&), 
       kept_low = 0;
     }
   }
-  answer.steady_states = bracket.count;
-  answer.current_A = low_A;
-  answer.rail_min_V = low.state.rail_min_V;
-  answer.state = low.state.start;
-  return answer;
+  return low;
+}
+
+}  // namespace
+
+AvailableCurrent find_available_current(Network (*build)(const ElementValues&), ElementValues values,
+                                        double required_V, double ceiling_A) {
+  AvailableCurrent answer;
+  if (!(values.load_cutoff_V > 0)) values.load_cutoff_V = 0.5 * required_V;
+  const double most_A = ceiling_A > 0 ? ceiling_A : charge_ceiling_A(values);
+  values.rail_current_A = 0.4 * most_A;  // a load has to stand in the network; its size is set below
+  const Network network = build(values);
+  LoadScan scan(network, required_V);
+  if (!scan.map().fault().empty()) {
+    answer.reason = scan.map().fault();
+    return answer;
+  }
+
+  const auto finish = [&](const LoadScan::Probe& probe, double current_A) {
+    answer.usable = probe.usable;
+    answer.reason = probe.reason;
+    answer.current_A = probe.usable ? current_A : 0;
+    answer.rail_min_V = probe.headroom_V + required_V;
+    answer.state = probe.state;
+    answer.steady_states = scan.solved;
+    return answer;
+  };
+
+  const auto empty = scan.at(0, scan.cold());
+  if (!empty.usable) return finish(empty, 0);
+  if (!(empty.headroom_V >= 0)) {
+    finish(empty, 0);
+    answer.reason = "the unloaded rail stays below what is required";
+    return answer;
+  }
+
+  // One Newton in the capacitor voltages and the load together, then a steady state from cold at its answer:
+  // only that one is believed. Where bridges may not be monotone in the load, some lighter loads are scanned.
+  double low_A = 0;
+  LoadScan::Probe low = empty;
+  double high_A = most_A;
+  double high_V = -required_V;
+  const LoadRoot root = newton_load(scan.map(), empty.state, surplus_A(scan.map()), required_V);
+  if (root.found && root.current_A < high_A) {
+    const auto probe = scan.at(root.current_A, scan.cold());
+    if (probe.usable && probe.headroom_V >= 0 - kOnTarget_V && probe.headroom_V <= kOnTarget_V) {
+      bool lighter_pass = true;
+      if (scan.map().halved()) {
+        for (const double share : {0.9, 0.6, 0.3}) {
+          const auto lighter = scan.at(share * root.current_A, probe.state);
+          if (lighter.usable && lighter.headroom_V >= -kPassing_V) continue;
+          lighter_pass = false;
+          high_A = share * root.current_A;
+          high_V = lighter.usable ? lighter.headroom_V : -required_V;
+        }
+      }
+      if (lighter_pass && probe.headroom_V >= -kPassing_V) return finish(probe, root.current_A);
+    } else if (probe.usable && probe.headroom_V > 0) {
+      low_A = root.current_A;
+      low = probe;
+    } else if (probe.usable) {
+      high_A = root.current_A;
+      high_V = probe.headroom_V;
+    }
+  }
+  const auto closed = close_bracket(scan, low_A, low, high_A, high_V);
+  if (!closed.usable) return finish(closed, 0);
+  return finish(closed, low_A);
 }
 
 }  // namespace dropfront::circuit

@@ -13,6 +13,7 @@ struct Conducting {
   double conductance_S = 0;
   double threshold_V = 0;
   double constant_A = 0;
+  double per_A = 0;  ///< 1 for the first load above its cut-off
 };
 
 std::vector<Conducting> conducting_elements(const Network& network, ConductionMask mask) {
@@ -27,7 +28,7 @@ std::vector<Conducting> conducting_elements(const Network& network, ConductionMa
   for (const auto& load : network.loads) {
     const bool above = (mask >> bit++) & 1u;
     if (above) {
-      list.push_back({0, 0, load.current_A});
+      list.push_back({0, 0, load.current_A, &load == &network.loads.front() ? 1.0 : 0.0});
     } else {
       list.push_back({load.current_A / load.cutoff_V, 0, 0});
     }
@@ -45,13 +46,14 @@ bool solve_roots(const Topology& topology, const std::vector<Conducting>& conduc
   for (std::size_t e = 0; e < conducting.size(); ++e) {
     const auto& element = topology.elements[e];
     const auto& c = conducting[e];
-    if (c.conductance_S == 0 && c.constant_A == 0) continue;
+    if (c.conductance_S == 0 && c.constant_A == 0 && c.per_A == 0) continue;
     for (int m = 0; m < n; ++m) {
       if (element.roots[m] == 0) continue;
       const double weight = element.roots[m] * c.conductance_S;
       for (int k = 0; k < n; ++k) g[m][k] += weight * element.roots[k];
       for (int column = 0; column <= kSource; ++column) roots[m][column] -= weight * element.offset[column];
       roots[m][kOne] += weight * c.threshold_V - element.roots[m] * c.constant_A;
+      roots[m][kPerAmpere] -= element.roots[m] * c.per_A;
     }
   }
   for (int p = 0; p < n; ++p) {
@@ -110,6 +112,7 @@ void diagonalise(const Network& network, ConductionMode& mode) {
     for (int i = 0; i < n; ++i) {
       mode.source[k] += q[i][k] * mode.capacitor_A[i][kSource] / root_C[i];
       mode.constant[k] += q[i][k] * mode.capacitor_A[i][kOne] / root_C[i];
+      mode.constant_per_A[k] += q[i][k] * mode.capacitor_A[i][kPerAmpere] / root_C[i];
     }
   }
 }
@@ -143,6 +146,7 @@ ModalRow to_modal_row(const ConductionMode& mode, const Row& row) {
   }
   modal.u = row[kSource];
   modal.one = row[kOne];
+  modal.per_A = row[kPerAmpere];
   return modal;
 }
 
@@ -151,8 +155,11 @@ ForcedRow forced_part(const ConductionMode& mode, const Waveform& mains, const M
   const auto count = tones.size();
   ForcedRow forced;
   forced.constant = row.one;
+  forced.constant_per_A = row.per_A;
   for (int i = 0; i < mode.states; ++i) {
-    if (!mode.slow[i]) forced.constant -= row.z[i] * mode.constant[i] / mode.lambda[i];
+    if (mode.slow[i]) continue;
+    forced.constant -= row.z[i] * mode.constant[i] / mode.lambda[i];
+    forced.constant_per_A -= row.z[i] * mode.constant_per_A[i] / mode.lambda[i];
   }
   for (std::size_t h = 0; h < count; ++h) {
     double c = row.u * tones[h].amplitude_V * std::sin(tones[h].phase_rad);
@@ -169,6 +176,21 @@ ForcedRow forced_part(const ConductionMode& mode, const Waveform& mains, const M
     forced.jerk += w * w * w * amplitude;
   }
   return forced;
+}
+
+void shift_load(ConductionMode& mode, double more_A) {
+  const auto shift_row = [more_A](ModalRow& row) { row.one += more_A * row.per_A; };
+  const auto shift_forced = [more_A](ForcedRow& row) { row.constant += more_A * row.constant_per_A; };
+  for (int i = 0; i < mode.states; ++i) {
+    mode.constant[i] += more_A * mode.constant_per_A[i];
+    mode.capacitor_A[i][kOne] += more_A * mode.capacitor_A[i][kPerAmpere];
+  }
+  mode.source_A[kOne] += more_A * mode.source_A[kPerAmpere];
+  for (auto& row : mode.element_V) shift_row(row);
+  for (auto& row : mode.guard) shift_row(row);
+  for (auto& row : mode.guard_forced) shift_forced(row);
+  shift_row(mode.rail);
+  shift_forced(mode.rail_forced);
 }
 
 ConductionMode derive_mode(const Network& network, const Topology& topology, ConductionMask mask) {
@@ -188,6 +210,7 @@ ConductionMode derive_mode(const Network& network, const Topology& topology, Con
     Row current = element_rows[e];
     for (auto& entry : current) entry *= c.conductance_S;
     current[kOne] += c.constant_A - c.conductance_S * c.threshold_V;
+    current[kPerAmpere] += c.per_A;
     for (int k = 0; k < topology.states; ++k) {
       if (element.tree[k] == 0) continue;
       for (int column = 0; column < kColumns; ++column) {

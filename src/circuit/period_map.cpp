@@ -3,6 +3,7 @@
 #include <Eigen/Dense>
 #include <algorithm>
 #include <cmath>
+#include <utility>
 
 namespace dropfront::circuit {
 
@@ -18,10 +19,10 @@ Dynamic to_eigen(int n, const SmallMatrix& m) {
 }
 }  // namespace
 
-PeriodMap::PeriodMap(const Network& network)
-    : walker_(network),
-      halved_(!network.half_period_signs.empty()),
-      span_s_(network.source.waveform.period_s() * (halved_ ? 0.5 : 1.0)) {}
+PeriodMap::PeriodMap(Network network)
+    : walker_(std::move(network)),
+      halved_(!walker_.network().half_period_signs.empty()),
+      span_s_(walker_.network().source.waveform.period_s() * (halved_ ? 0.5 : 1.0)) {}
 
 bool PeriodMap::apply(const StateVector& x, StateVector& mapped, SmallMatrix* jacobian) {
   mapped = x;

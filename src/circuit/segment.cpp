@@ -136,6 +136,49 @@ double curvature_at(const Segment& segment, const ModalRow& row, const ForcedRow
   return v;
 }
 
+namespace {
+
+/// A guard's value, oriented so that it must stay positive, with its derivatives and bounds ahead.
+struct GuardMoment {
+  double value, slope, turn;  // and first and second derivative
+  double curvature, jerk;     // bounds on the second and third derivative from here on
+};
+
+GuardMoment guard_moment(const ConductionMode& mode, int bit, const ModalMoment& moment,
+                         const TonePhase& phase) {
+  const auto& row = mode.guard[bit];
+  const auto& forced = mode.guard_forced[bit];
+  GuardMoment g{forced.constant, 0, 0, forced.curvature, forced.jerk};
+  for (int i = 0; i < mode.states; ++i) {
+    const double lambda = mode.lambda[i];
+    const double moving = row.z[i] * moment.slope[i];
+    g.value += row.z[i] * moment.value[i];
+    g.slope += moving;
+    g.turn += moving * lambda;
+    g.curvature += std::abs(moving * lambda);
+    g.jerk += std::abs(moving) * lambda * lambda;
+  }
+  for (int k = 0; k < phase.count; ++k) {
+    const double in_phase = forced.cosine[k] * phase.cosine[k] + forced.sine[k] * phase.sine[k];
+    g.value += in_phase;
+    g.slope += phase.omega[k] * (forced.sine[k] * phase.cosine[k] - forced.cosine[k] * phase.sine[k]);
+    g.turn -= phase.omega[k] * phase.omega[k] * in_phase;
+  }
+  if (((mode.mask >> bit) & 1u) == 0) {
+    g.value = -g.value;
+    g.slope = -g.slope;
+    g.turn = -g.turn;
+  }
+  return g;
+}
+
+double safe_time(const GuardMoment& g) {
+  const double value = std::max(g.value, 0.0);
+  return std::max(safe_step(value, g.slope, g.curvature), safe_step_rising(value, g.slope, g.turn, g.jerk));
+}
+
+}  // namespace
+
 std::optional<Crossing> first_crossing(const Segment& segment, double limit_s, double resolution_s,
                                        TonePhase& phase) {
   const auto& mode = *segment.mode;
@@ -145,44 +188,37 @@ std::optional<Crossing> first_crossing(const Segment& segment, double limit_s, d
     phase.set(segment.start_s + s);
     const ModalMoment moment = modal_moment(segment, s);
     double step = std::numeric_limits<double>::infinity();
+    double others = step;  // safe time of all guards but the nearest
     int nearest = -1;
-    bool falling = false;
+    GuardMoment near{};
     for (int bit = 0; bit < bits; ++bit) {
-      const auto& row = mode.guard[bit];
-      const auto& forced = mode.guard_forced[bit];
-      double h = forced.constant;
-      double slope = 0;
-      double bound = forced.curvature;
-      for (int i = 0; i < mode.states; ++i) {
-        h += row.z[i] * moment.value[i];
-        const double moving = row.z[i] * moment.slope[i];
-        slope += moving;
-        bound += std::abs(moving * mode.lambda[i]);
-      }
-      for (int k = 0; k < phase.count; ++k) {
-        h += forced.cosine[k] * phase.cosine[k] + forced.sine[k] * phase.sine[k];
-        slope += phase.omega[k] * (forced.sine[k] * phase.cosine[k] - forced.cosine[k] * phase.sine[k]);
-      }
-      if (((mode.mask >> bit) & 1u) == 0) {
-        h = -h;
-        slope = -slope;
-      }
-      if (h < -kOnThreshold_V || (h <= kOnThreshold_V && s == 0 && slope < 0) || (h <= 0 && s > 0)) {
+      const GuardMoment g = guard_moment(mode, bit, moment, phase);
+      if (g.value < -kOnThreshold_V || (g.value <= kOnThreshold_V && s == 0 && g.slope < 0) ||
+          (g.value <= 0 && s > 0)) {
         return Crossing{s, bit};
       }
-      const double safe = safe_step(std::max(h, 0.0), slope, bound);
+      const double safe = safe_time(g);
       if (safe < step) {
+        others = step;
         step = safe;
         nearest = bit;
-        falling = slope < 0;
+        near = g;
+      } else {
+        others = std::min(others, safe);
       }
     }
     if (nearest < 0 || s + step >= limit_s) return std::nullopt;
-    if (step < resolution_s) {
-      if (falling) return Crossing{s + step, nearest};
-      step = resolution_s;
+    if (near.slope < 0) {
+      // The root of the second-order expansion is the crossing to within its third-order remainder.
+      const double square = near.slope * near.slope - 2 * near.value * near.turn;
+      if (square > 0.25 * near.slope * near.slope) {
+        const double root = 2 * near.value / (std::sqrt(square) - near.slope);
+        const double error = near.jerk * root * root * root / (6 * 0.5 * -near.slope);
+        if (error < resolution_s && root < others && s + root < limit_s) return Crossing{s + root, nearest};
+      }
+      if (step < resolution_s) return Crossing{s + step, nearest};
     }
-    s += step;
+    s += std::max(step, resolution_s);
   }
   return Crossing{s, -1};  // never reached in practice: the walker reports it
 }

@@ -3,8 +3,7 @@
 #include <algorithm>
 #include <cmath>
 
-#include "dropfront/circuit/extremes.hpp"
-#include "dropfront/circuit/period_map.hpp"
+#include "dropfront/circuit/orbit.hpp"
 #include "dropfront/circuit/period_totals.hpp"
 
 namespace dropfront::circuit {
@@ -20,67 +19,8 @@ bool fail(SteadyState& answer, std::string reason) {
   return false;
 }
 
-/// Newton on the period map: (J - 1)·dx = x - map(x). With the full step refused when it makes the residual
-/// grow (the map bends where crossings appear or vanish), half of it is tried, then one plain period.
-bool converge(PeriodMap& map, const SteadyOptions& options, SteadyState& answer) {
-  StateVector x = answer.start;
-  StateVector mapped{};
-  SmallMatrix jacobian{};
-  if (!map.apply(x, mapped, &jacobian)) return fail(answer, map.fault());
-  ++answer.passes;
-  double residual = map.distance(x, mapped);
-  int marched = 0;
-  for (int pass = 0; residual > options.state_tolerance_V; ++pass) {
-    if (pass >= options.max_newton_passes || marched > options.max_march_periods) {
-      return fail(answer, "no periodic steady state found");
-    }
-    StateVector step{};
-    bool improved = false;
-    if (map.newton_step(x, mapped, jacobian, step)) {
-      for (double share = 1; share > 0.2 && !improved; share /= 2) {
-        StateVector trial = x;
-        for (int i = 0; i < map.states(); ++i) trial[i] += share * step[i];
-        StateVector trial_mapped{};
-        SmallMatrix trial_jacobian{};
-        if (!map.apply(trial, trial_mapped, &trial_jacobian)) return fail(answer, map.fault());
-        ++answer.passes;
-        const double trial_residual = map.distance(trial, trial_mapped);
-        if (trial_residual < residual) {
-          x = trial;
-          mapped = trial_mapped;
-          jacobian = trial_jacobian;
-          residual = trial_residual;
-          improved = true;
-        }
-      }
-    }
-    if (improved) continue;
-    // Passive networks contract: plain periods always lead home, however slowly.
-    for (int k = 0; k < 16; ++k) {
-      x = mapped;
-      if (!map.apply(x, mapped, &jacobian)) return fail(answer, map.fault());
-      ++answer.passes;
-      ++marched;
-    }
-    residual = map.distance(x, mapped);
-  }
-  answer.start = x;
-  if (options.multipliers) answer.greatest_multiplier = map.greatest_multiplier(jacobian);
-  return true;
-}
-
-void collect_rail(PeriodMap& map, SteadyState& answer) {
-  TonePhase phase(map.walker().network().source.waveform);
-  Extremes rail;
-  for (const auto& segment : map.segments()) {
-    include_extremes(segment, segment.mode->rail, segment.mode->rail_forced, phase, rail);
-  }
-  answer.rail_min_V = rail.low;
-  answer.rail_max_V = rail.high;
-}
-
 /// Greatest current of each branch, and its mean, with the mirrored half period folded in.
-void collect_branches(PeriodMap& map, const WalkTotals& totals, SteadyState& answer) {
+void collect_branches(PeriodMap& map, const WalkTotals& totals, bool peaks, SteadyState& answer) {
   const auto& network = map.walker().network();
   const auto& mains = network.source.waveform;
   const std::size_t resistors = network.resistors.size();
@@ -89,6 +29,7 @@ void collect_branches(PeriodMap& map, const WalkTotals& totals, SteadyState& ans
   TonePhase phase(mains);
   for (std::size_t b = 0; b < network.branches.size(); ++b) {
     mean[b] = totals.element_As[resistors + b] / totals.duration_s;
+    if (!peaks) continue;
     for (const auto& segment : map.segments()) {
       if (!((segment.mode->mask >> b) & 1u)) continue;
       Extremes over;
@@ -106,7 +47,7 @@ void collect_branches(PeriodMap& map, const WalkTotals& totals, SteadyState& ans
   }
 }
 
-bool collect_powers(PeriodMap& map, const StateVector& end, SteadyState& answer) {
+bool collect_powers(PeriodMap& map, const StateVector& end, bool peaks, SteadyState& answer) {
   const auto& network = map.walker().network();
   const WalkTotals totals = integrate(map.walker(), map.segments());
   const double duration_s = totals.duration_s;
@@ -127,7 +68,7 @@ bool collect_powers(PeriodMap& map, const StateVector& end, SteadyState& answer)
   answer.energy_residual =
       std::abs(totals.input_J - totals.dissipated_J() - stored) / std::max(std::abs(totals.input_J), 1e-12);
   if (!(answer.energy_residual <= kEnergyLaw)) return fail(answer, "the energy law does not close");
-  collect_branches(map, totals, answer);
+  collect_branches(map, totals, peaks, answer);
   return true;
 }
 
@@ -144,14 +85,24 @@ SteadyState solve_steady_state(const Network& network, const SteadyOptions& opti
   for (std::size_t k = 0; k < network.capacitors.size(); ++k) {
     answer.start[k] = guess ? (*guess)[k] : network.capacitors[k].start_V;
   }
-  if (!converge(map, options, answer)) return answer;
-  // The last walk of converge() began at the answer: its segments are the solution.
-  collect_rail(map, answer);
-  if (options.powers && !collect_powers(map, map.raw_end(), answer)) return answer;
-  if (options.multipliers && !(answer.greatest_multiplier < 1)) {
-    fail(answer, "the periodic solution is not stable");
+  const Orbit orbit = find_orbit(map, answer.start, options);
+  answer.passes = orbit.passes;
+  if (!orbit.found) {
+    fail(answer, orbit.reason);
     return answer;
   }
+  answer.start = orbit.start;
+  if (options.multipliers) {
+    answer.greatest_multiplier = map.greatest_multiplier(orbit.jacobian);
+    if (!(answer.greatest_multiplier < 1)) {
+      fail(answer, "the periodic solution is not stable");
+      return answer;
+    }
+  }
+  const Extremes rail = rail_extremes(map);
+  answer.rail_min_V = rail.low;
+  answer.rail_max_V = rail.high;
+  if (options.powers && !collect_powers(map, map.raw_end(), options.peaks, answer)) return answer;
   answer.status = SteadyStatus::converged;
   return answer;
 }

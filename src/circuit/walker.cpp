@@ -2,6 +2,7 @@
 
 #include <algorithm>
 #include <cmath>
+#include <utility>
 
 namespace dropfront::circuit {
 
@@ -11,12 +12,12 @@ constexpr double kConsistent_V = 1e-7;  // a guard on the wrong side by less is 
 constexpr int kMostSegments = 20000;
 }  // namespace
 
-Walker::Walker(const Network& network)
-    : network_(network), topology_(analyse(network)), phase_(network.source.waveform) {
+Walker::Walker(Network network)
+    : network_(std::move(network)), topology_(analyse(network_)), phase_(network_.source.waveform) {
   fault_ = topology_.fault;
   modes_.reserve(16);
   // Loads usually stand above their cut-off.
-  for (std::size_t k = 0; k < network.loads.size(); ++k) last_start_ |= 1u << (network.branches.size() + k);
+  for (std::size_t k = 0; k < network_.loads.size(); ++k) last_start_ |= 1u << (network_.branches.size() + k);
 }
 
 const ConductionMode& Walker::mode(ConductionMask mask) {
@@ -122,25 +123,47 @@ bool Walker::walk(double from_s, double to_s, StateVector& x, std::vector<Segmen
 }
 
 SmallMatrix Walker::sensitivity(const std::vector<Segment>& segments) const {
-  const int n = topology_.states;
   SmallMatrix total{};
-  for (int i = 0; i < n; ++i) total[i][i] = 1;
-  for (const auto& segment : segments) {
-    const auto& m = *segment.mode;
-    StateVector decay{};
-    for (int k = 0; k < n; ++k) decay[k] = std::exp(m.lambda[k] * segment.length_s);
-    SmallMatrix next{};
-    for (int c = 0; c < n; ++c) {
-      for (int k = 0; k < n; ++k) {
-        double z = 0;
-        for (int i = 0; i < n; ++i) z += m.to_modal[k][i] * total[i][c];
-        z *= decay[k];
-        for (int i = 0; i < n; ++i) next[i][c] += m.to_state[i][k] * z;
-      }
-    }
-    total = next;
-  }
+  StateVector by_load{};
+  for (int i = 0; i < topology_.states; ++i) total[i][i] = 1;
+  for (const auto& segment : segments) carry(segment, segment.length_s, total, by_load);
   return total;
+}
+
+void Walker::carry(const Segment& segment, double length_s, SmallMatrix& by_start,
+                   StateVector& by_load) const {
+  const int n = topology_.states;
+  const auto& m = *segment.mode;
+  SmallMatrix next{};
+  StateVector next_by_load{};
+  for (int k = 0; k < n; ++k) {
+    const double grown = std::expm1(m.lambda[k] * length_s);
+    const double decay = 1 + grown;
+    const double reach_s = m.lambda[k] == 0 ? length_s : grown / m.lambda[k];
+    double z = m.constant_per_A[k] * reach_s;
+    for (int i = 0; i < n; ++i) z += decay * m.to_modal[k][i] * by_load[i];
+    for (int i = 0; i < n; ++i) next_by_load[i] += m.to_state[i][k] * z;
+    for (int c = 0; c < n; ++c) {
+      z = 0;
+      for (int i = 0; i < n; ++i) z += m.to_modal[k][i] * by_start[i][c];
+      z *= decay;
+      for (int i = 0; i < n; ++i) next[i][c] += m.to_state[i][k] * z;
+    }
+  }
+  by_start = next;
+  by_load = next_by_load;
+}
+
+void Walker::set_load(double current_A) {
+  if (network_.loads.empty()) return;
+  const double more_A = current_A - network_.loads.front().current_A;
+  network_.loads.front().current_A = current_A;
+  const auto load_bit = network_.branches.size();
+  // Below the cut-off the load is a conductance: such modes are derived again when met.
+  modes_.erase(std::remove_if(modes_.begin(), modes_.end(),
+                              [load_bit](const auto& m) { return ((m->mask >> load_bit) & 1u) == 0; }),
+               modes_.end());
+  for (auto& kept : modes_) shift_load(*kept, more_A);
 }
 
 }  // namespace dropfront::circuit

@@ -10,6 +10,7 @@ struct ModalRow {
   std::array<double, kMaxStates> z{};
   double u = 0;
   double one = 0;
+  double per_A = 0;  ///< growth of `one` with the first load's current
 };
 
 /// A quantity along one conduction mode apart from its own transient: the sinusoidal answer to every tone
@@ -17,6 +18,7 @@ struct ModalRow {
 struct ForcedRow {
   std::array<double, kMostTones> cosine, sine;  ///< one a tone; only those of the mains are set
   double constant = 0;
+  double constant_per_A = 0;
   double curvature = 0;  ///< bound of the tones' second derivative: sum (k·w)^2·amplitude
   double jerk = 0;       ///< bound of their third derivative
 };
@@ -32,6 +34,7 @@ struct ConductionMode {
   std::array<bool, kMaxStates> slow{};        ///< |lambda|·period below 1e-4: the constant is kept apart
   std::array<double, kMaxStates> source{};    ///< b in modal coordinates
   std::array<double, kMaxStates> constant{};  ///< c in modal coordinates
+  std::array<double, kMaxStates> constant_per_A{};
   std::array<std::array<double, kMaxStates>, kMaxStates> to_state{};  ///< x = to_state·z
   std::array<std::array<double, kMaxStates>, kMaxStates> to_modal{};  ///< z = to_modal·x
   std::vector<double> forced_cosine, forced_sine;  ///< [state·tones + tone]: steady answer of each mode
@@ -47,6 +50,10 @@ struct ConductionMode {
 
 /// Modified nodal analysis of one mode. `solvable` is false where a group of nodes hangs on nothing.
 ConductionMode derive_mode(const Network& network, const Topology& topology, ConductionMask mask);
+
+/// Moves the first load's current by `more_A`: only constants change, none of what was expensive. Valid while
+/// that load stands above its cut-off in `mode`.
+void shift_load(ConductionMode& mode, double more_A);
 
 /// Turns a row in (x, u, 1) into modal coordinates.
 ModalRow to_modal_row(const ConductionMode& mode, const Row& row);

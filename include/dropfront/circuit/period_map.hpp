@@ -10,10 +10,11 @@ namespace dropfront::circuit {
 /// half-period symmetry, to those half a period later with the signs turned back.
 class PeriodMap {
  public:
-  explicit PeriodMap(const Network& network);
+  explicit PeriodMap(Network network);
 
   const std::string& fault() const { return walker_.fault(); }
   const Walker& walker() const { return walker_; }
+  void set_load(double current_A) { walker_.set_load(current_A); }
   int states() const { return walker_.topology().states; }
   bool halved() const { return halved_; }
   const std::vector<Segment>& segments() const { return segments_; }  ///< of the last apply()

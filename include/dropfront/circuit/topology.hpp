@@ -14,12 +14,14 @@ using ConductionMask = std::uint32_t;
 
 inline constexpr int kMaxRoots = 12;     ///< groups of nodes tied together by capacitors and source
 inline constexpr int kMaxElements = 32;  ///< resistors + branches + loads; branches + loads share the mask
-inline constexpr int kColumns = kMaxStates + 2;  ///< capacitor voltages, source voltage, one
+inline constexpr int kColumns = kMaxStates + 3;  ///< capacitor voltages, source voltage, one, per ampere
 
-/// A row affine in (x_0 .. x_{n-1}, u, 1): states in their places, u at kSource, the constant at kOne.
+/// A row affine in (x_0 .. x_{n-1}, u, 1): states in their places, u at kSource, the constant at kOne, and at
+/// kPerAmpere how the constant grows with the first load's current while that load stands above its cut-off.
 using Row = std::array<double, kColumns>;
 inline constexpr int kSource = kMaxStates;
 inline constexpr int kOne = kMaxStates + 1;
+inline constexpr int kPerAmpere = kMaxStates + 2;
 
 /// What of a network does not depend on which branches conduct. Capacitors and the source form a forest of
 /// tied node groups; inside a group every node differs from the group's root by capacitor and source

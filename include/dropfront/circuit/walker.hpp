@@ -12,8 +12,8 @@ namespace dropfront::circuit {
 /// closed form. Modes are derived when first met and kept.
 class Walker {
  public:
-  /// `network` must outlive the walker. Check fault() first.
-  explicit Walker(const Network& network);
+  /// Check fault() first.
+  explicit Walker(Network network);
 
   const std::string& fault() const { return fault_; }
   const Network& network() const { return network_; }
@@ -27,13 +27,19 @@ class Walker {
   /// product of the segments' own exponentials.
   SmallMatrix sensitivity(const std::vector<Segment>& segments) const;
 
+  /// Advances d x / d x(start) and d x / d(load current) over a segment's first `length_s`.
+  void carry(const Segment& segment, double length_s, SmallMatrix& by_start, StateVector& by_load) const;
+
+  /// Changes the first load's current; the modes are kept and shifted.
+  void set_load(double current_A);
+
  private:
   const ConductionMode& mode(ConductionMask mask);
   /// The conduction mode that fits these capacitor voltages at this time.
   bool find_mode(double time_s, const StateVector& x, ConductionMask& mask);
   double worst_violation_V(const ConductionMode& mode, double time_s, const StateVector& x, int& bit);
 
-  const Network& network_;
+  Network network_;
   Topology topology_;
   std::string fault_;
   std::vector<std::unique_ptr<ConductionMode>> modes_;
