@@ -91,7 +91,11 @@ class Closer {
 
   bool take_up_pairs() {
     // One-part changes come first: a quarter of the looks stays theirs.
-    if (session_.ended() || 4 * session_.ledger.counts().looked > 3 * session_.plan.looks) return false;
+    if (session_.ended()) return false;
+    if (4 * session_.ledger.counts().looked > 3 * session_.plan.looks) {
+      session_.pairs_refused = session_.pairs_refused || !pairs_.empty();
+      return false;
+    }
     return take_up(members(pairs_), [this](const Parent& p) {
       return two_part_changes(session_.space, session_.axes, p.choice, session_.plan.pair_window);
     });

@@ -69,16 +69,13 @@ double volume(Points points, const std::vector<double>& reference) {
   return sum;
 }
 
-Points non_dominated(const Points& points) {
+// In lexicographic order nothing dominates an earlier point.
+Points non_dominated(Points points) {
+  std::sort(points.begin(), points.end());
   Points kept;
-  for (const auto& p : points) {
-    const bool useless =
-        std::any_of(kept.begin(), kept.end(), [&](const auto& q) { return q == p || dominates(q, p); });
-    if (useless) continue;
-    kept.erase(std::remove_if(kept.begin(), kept.end(), [&](const auto& q) { return dominates(p, q); }),
-               kept.end());
-    kept.push_back(p);
-  }
+  for (auto& p : points)
+    if (std::none_of(kept.begin(), kept.end(), [&](const auto& q) { return q == p || dominates(q, p); }))
+      kept.push_back(std::move(p));
   return kept;
 }
 
@@ -95,7 +92,7 @@ double exclusive(const Points& points, std::size_t i, const std::vector<double>&
     for (std::size_t k = 0; k < p.size(); ++k) limited.back()[k] = std::max(p[k], points[j][k]);
   }
   if (limited.empty()) return box;
-  return box - any_dimension(non_dominated(limited), reference);
+  return box - any_dimension(std::move(limited), reference);
 }
 
 double any_dimension(Points points, const std::vector<double>& reference) {
@@ -104,6 +101,7 @@ double any_dimension(Points points, const std::vector<double>& reference) {
   if (d == 1) return reference[0] - (*std::min_element(points.begin(), points.end()))[0];
   if (d == 2) return area(std::move(points), reference);
   if (d == 3) return volume(std::move(points), reference);
+  points = non_dominated(std::move(points));
   // Worst last value first: then every limited set is flat in that value and one dimension is saved.
   std::sort(points.begin(), points.end(),
             [](const auto& a, const auto& b) { return a.back() != b.back() ? a.back() > b.back() : a < b; });
@@ -128,7 +126,7 @@ double hypervolume(const std::vector<std::vector<double>>& points, const std::ve
     for (std::size_t k = 0; k < reference.size(); ++k) below = below && p[k] < reference[k];
     if (below) inside.push_back(p);
   }
-  return any_dimension(non_dominated(inside), reference);
+  return any_dimension(std::move(inside), reference);
 }
 
 }  // namespace dropfront::search

@@ -8,7 +8,7 @@
 namespace dropfront::search {
 namespace {
 
-constexpr std::size_t passed_over_kept = 256;
+constexpr std::size_t passed_over_kept = 2000;
 constexpr std::size_t broken_kept = 64;
 
 bool all_known(const std::vector<double>& objectives) {

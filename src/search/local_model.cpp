@@ -2,12 +2,14 @@
 
 #include <algorithm>
 #include <cmath>
+#include <utility>
 
 namespace dropfront::search {
 namespace {
 
 constexpr double widths[] = {0.15, 0.3, 0.6, 1.2};
-constexpr double least_weight = 1e-3;
+constexpr double farthest_square = 13.8;  // in widths: a weight of 1e-3
+constexpr std::size_t most_samples = 1500;
 constexpr double farthest = 3;  // in widths
 
 // Solves A x = b for every right-hand side by Cholesky; A symmetric (row-major n x n), overwritten.
@@ -62,38 +64,41 @@ void LocalModel::add(std::int64_t region, const std::vector<double>& position,
 
 bool LocalModel::fit_width(const Samples& samples, LocalFit& fit) const {
   const std::size_t count = samples.objectives.size() / objectives_;
-  std::vector<std::size_t> used;
-  std::vector<double> weights;
+  std::vector<std::pair<double, std::size_t>> near;  // squared distance in widths, sample
   for (std::size_t i = 0; i < count; ++i) {
+    const double* at = &samples.positions[i * axes_];
     double square = 0;
     for (int s = 0; s < axes_; ++s) {
-      const double z = (samples.positions[i * axes_ + s] - fit.centre_[s]) / fit.width_;
+      const double z = (at[s] - fit.centre_[s]) / fit.width_;
       square += z * z;
     }
-    const double weight = std::exp(-0.5 * square);
-    if (weight < least_weight) continue;
-    used.push_back(i);
-    weights.push_back(weight);
+    if (square < farthest_square) near.emplace_back(square, i);
   }
   const std::size_t linear = static_cast<std::size_t>(axes_) + 1;
-  if (used.size() < 2 * linear) return false;
-  fit.quadratic_ = used.size() >= 6 * linear;
+  if (near.size() < 2 * linear) return false;
+  if (near.size() > most_samples) {
+    std::nth_element(near.begin(), near.begin() + most_samples, near.end());
+    near.resize(most_samples);
+    std::sort(near.begin(), near.end());
+  }
+  fit.quadratic_ = near.size() >= 6 * linear;
   const std::size_t n = fit.quadratic_ ? 2 * linear - 1 : linear;
   std::vector<double> normal(n * n, 0.0);
   fit.coefficients_.assign(objectives_, std::vector<double>(n, 0.0));
   double total = 0;
   std::vector<std::vector<double>> rows;
   std::vector<double> place(axes_);
-  for (std::size_t u = 0; u < used.size(); ++u) {
-    std::copy_n(samples.positions.begin() + static_cast<std::ptrdiff_t>(used[u] * axes_), axes_,
+  for (const auto& sample : near) {
+    const double weight = std::exp(-0.5 * sample.first);
+    std::copy_n(samples.positions.begin() + static_cast<std::ptrdiff_t>(sample.second * axes_), axes_,
                 place.begin());
     rows.push_back(fit.features(place));
     const auto& f = rows.back();
-    total += weights[u];
+    total += weight;
     for (std::size_t i = 0; i < n; ++i)
-      for (std::size_t j = 0; j <= i; ++j) normal[i * n + j] += weights[u] * f[i] * f[j];
+      for (std::size_t j = 0; j <= i; ++j) normal[i * n + j] += weight * f[i] * f[j];
     for (int k = 0; k < objectives_; ++k) {
-      const double y = weights[u] * samples.objectives[used[u] * objectives_ + k];
+      const double y = weight * samples.objectives[sample.second * objectives_ + k];
       for (std::size_t i = 0; i < n; ++i) fit.coefficients_[k][i] += y * f[i];
     }
   }
@@ -101,11 +106,11 @@ bool LocalModel::fit_width(const Samples& samples, LocalFit& fit) const {
   for (std::size_t i = 1; i < n; ++i) normal[i * n + i] += 1e-3 * total;
   if (!solve(normal, n, fit.coefficients_)) return false;
   fit.spread_.assign(objectives_, 0.0);
-  for (std::size_t u = 0; u < used.size(); ++u)
+  for (std::size_t u = 0; u < near.size(); ++u)
     for (int k = 0; k < objectives_; ++k) {
-      double r = samples.objectives[used[u] * objectives_ + k];
+      double r = samples.objectives[near[u].second * objectives_ + k];
       for (std::size_t i = 0; i < n; ++i) r -= rows[u][i] * fit.coefficients_[k][i];
-      fit.spread_[k] += weights[u] / total * r * r;
+      fit.spread_[k] += std::exp(-0.5 * near[u].first) / total * r * r;
     }
   for (double& s : fit.spread_) s = std::sqrt(s);
   return true;

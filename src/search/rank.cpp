@@ -79,6 +79,7 @@ std::vector<Candidate> fillers_for(Session& session, int top) {
   if (session.ledger.front().size() == 0 || missing() <= 0) return fillers;
   // Each set wants the next designs by its own objective, so each list is gone through until it gave enough.
   // All list members are dominated: scoring them cannot change the front.
+  const Dominated until_broken = [](const std::vector<double>&) { return false; };
   std::set<Choice> tried;
   for (const Shortlist& list : session.ledger.passed_over()) {
     std::vector<Choice> waiting;
@@ -91,7 +92,7 @@ std::vector<Candidate> fillers_for(Session& session, int top) {
           batch.push_back(waiting[next]);
         else
           ++found;
-      const std::vector<Evaluation> results = session.evaluate_fully(batch);
+      const std::vector<Evaluation> results = session.evaluate_apart(batch, until_broken);
       for (std::size_t i = 0; i < batch.size(); ++i)
         if (session.ledger.merge(batch[i], results[i]).tag >= 0) ++found;
     }
@@ -126,7 +127,7 @@ void settle_near_misses(Session& session) {
     std::sort(open.begin(), open.end());
     open.erase(std::unique(open.begin(), open.end()), open.end());
     if (open.empty()) return;
-    const std::vector<Evaluation> results = session.evaluate_fully(open);
+    const std::vector<Evaluation> results = session.evaluate_apart(open, Dominated{});
     for (std::size_t i = 0; i < open.size(); ++i) misses.settle(open[i], results[i]);
     spent += static_cast<std::int64_t>(open.size());
   }

@@ -67,7 +67,9 @@ class Relaxer {
     for (const Log& log : logs_)
       for (const RelaxedDesign& design : log) {
         ++session_.ledger.counts().relaxed;
-        session_.model.add(session_.region_of(design.categories), design.position, design.objectives);
+        // Far outside the limits objectives may be stand-ins.
+        if (design.violation < 1)
+          session_.model.add(session_.region_of(design.categories), design.position, design.objectives);
       }
     measure();
     result.range = range_;

@@ -86,7 +86,9 @@ SearchOutcome run_search(const Evaluator& evaluator, const SearchOptions& option
   outcome.near_misses = session.ledger.near_misses().result();
   outcome.tallies = session.ledger.tallies();
   outcome.counts = session.ledger.counts();
-  outcome.cut_short = session.ended() || (options.budget && session.looks_refused);
+  const bool budget_spent =
+      options.budget && (session.looks_refused || session.pairs_refused || !session.may_look());
+  outcome.cut_short = session.ended() || (budget_spent && !outcome.exhaustive);
   session.report("rank", 1);
   return outcome;
 }

@@ -85,10 +85,11 @@ std::vector<Merged> Session::evaluate(const std::vector<Choice>& choices) {
   return merged;
 }
 
-std::vector<Evaluation> Session::evaluate_fully(const std::vector<Choice>& choices) {
+std::vector<Evaluation> Session::evaluate_apart(const std::vector<Choice>& choices,
+                                                const Dominated& dominated) {
   std::vector<Evaluation> results(choices.size());
   workers.for_each(choices.size(), 1,
-                   [&](std::size_t i) { results[i] = evaluator.evaluate(choices[i], Dominated{}); });
+                   [&](std::size_t i) { results[i] = evaluator.evaluate(choices[i], dominated); });
   return results;
 }
 

@@ -35,7 +35,8 @@ class LocalModel {
   void add(std::int64_t region, const std::vector<double>& position, const std::vector<double>& objectives);
 
   /// Weighted least squares about `centre` (Gaussian weights; the width grows from 0.15 of the axes until
-  /// enough samples count), slopes slightly damped. Not usable with fewer samples than coefficients.
+  /// enough samples count; of those the nearest 1,500), slopes slightly damped. Not usable with fewer samples
+  /// than coefficients.
   LocalFit fit(std::int64_t region, const std::vector<double>& centre) const;
 
  private:

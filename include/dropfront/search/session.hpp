@@ -50,8 +50,8 @@ class Session {
   /// effort's limit of evaluations and stops between batches when the search ends.
   std::vector<Merged> evaluate(const std::vector<Choice>& choices);
 
-  /// Evaluates to the end without stopping; nothing is merged.
-  std::vector<Evaluation> evaluate_fully(const std::vector<Choice>& choices);
+  /// Evaluates without merging anything.
+  std::vector<Evaluation> evaluate_apart(const std::vector<Choice>& choices, const Dominated& dominated);
 
   /// True once the stop flag is set or the given time is over. Asks the clock only when a time was given.
   bool ended();
@@ -68,6 +68,7 @@ class Session {
   std::int64_t region_of(const Choice& choice) const;
 
   bool looks_refused = false;  ///< the budget kept a design from being looked at
+  bool pairs_refused = false;  ///< the budget kept two-part changes from being made
 
  private:
   void learn(const Choice& choice, const Evaluation& evaluation);
