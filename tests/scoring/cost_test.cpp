@@ -61,7 +61,7 @@ TEST_CASE("Board area by hand: mains-side parts keep half the creepage, the othe
   const double by_hand_mm2 = (26.5 + 3.2) * (8.5 + 3.2) + (12 + 3.2) * (5 + 3.2) +
                              2 * (3.1 + 3.2) * (1.55 + 3.2) + (5.2 + 1) * (2.7 + 1) + 9.0 * 9.0 +
                              (5.2 + 1) * (2.7 + 1);
-  const auto area = *board_area_um2(example.design(), example.requirement);
+  const double area = static_cast<double>(*board_area_um2(example.design(), example.requirement));
   REQUIRE_THAT(area * 1e-6, Catch::Matchers::WithinRel(by_hand_mm2, 1e-12));  // rounding of the hand sum
 }
 
