@@ -2,10 +2,12 @@
 
 #include <algorithm>
 
+#include "dropfront/problem/scalars.hpp"
+
 namespace dropfront::problem {
 
-InlinePart::InlinePart(const Cursor& object, std::vector<std::string> hidden)
-    : object_(object), hidden_(std::move(hidden)) {
+InlinePart::InlinePart(const Cursor& object, parts::Kind kind, std::vector<std::string> hidden)
+    : object_(object), kind_(kind), hidden_(std::move(hidden)) {
   if (object.node().kind != Node::Kind::object) throw object.wrong("a part as an object {} of columns");
 }
 
@@ -23,21 +25,13 @@ std::optional<parts::RawField> InlinePart::find(std::string_view column) const {
   if (!index) return std::nullopt;
   const Cursor value = object_.member(*index);
   const Node& node = value.node();
-  switch (node.kind) {
-    case Node::Kind::text:
-      if (node.text.empty())
-        throw value.error("found an empty text; leave the key out if the figure is not known");
-      return parts::RawField{node.text, false};
-    case Node::Kind::number:
-      return parts::RawField{node.text, true};
-    case Node::Kind::boolean:
-      return parts::RawField{node.boolean ? "true" : "false", false};
-    case Node::Kind::null:
-    case Node::Kind::list:
-    case Node::Kind::object:
-      break;
-  }
-  throw value.wrong("a number, a text with unit, true or false");
+  const parts::Column* known = parts::find_column(kind_, column);
+  const parts::ColumnType type = known ? known->type : parts::ColumnType::number;  // `price` is no column
+  if (type == parts::ColumnType::truth) return parts::RawField{read_truth(value) ? "true" : "false", false};
+  if (type == parts::ColumnType::word) return parts::RawField{read_text(value), false};
+  if (node.kind == Node::Kind::number) return parts::RawField{node.text, true};
+  if (node.kind == Node::Kind::text && !node.text.empty()) return parts::RawField{node.text, false};
+  throw value.wrong("a number or a text with unit");
 }
 
 std::vector<std::string> InlinePart::names() const {

@@ -41,7 +41,7 @@ const Part* read_part(const Cursor& cursor, Problem& problem, const std::vector<
   if (node.kind == Node::Kind::text) return require_part<Part>(cursor, node.text, problem);
   if (node.kind != Node::Kind::object) throw cursor.wrong("a part's name or an object {} of columns");
   auto& store = (*problem.derived).*kTraits<Part>.derived;
-  store.push_back(kTraits<Part>.read(InlinePart(cursor, hidden), true));
+  store.push_back(kTraits<Part>.read(InlinePart(cursor, kTraits<Part>.kind, hidden), true));
   std::string& name = store.back().info.name;
   if (name.empty()) name = fmt::format("inline {} {}", parts::kind_name(kTraits<Part>.kind), store.size());
   return &store.back();
