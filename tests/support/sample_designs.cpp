@@ -34,10 +34,9 @@ ElementValues ordinary(double line_Vrms, double frequency_Hz, double dropper_F, 
 /// beside the main one.
 ClampCurve rounded_5V1() { return {Curve{4.53, 7.0}, Curve{3.45, 550.0}}; }
 
-/// Mean rail current that charge balance grants, ideal parts (closed form): loads are set as a share of it.
-double charge_balance_A(const circuit::Arrangement& arrangement, const ElementValues& v) {
+/// Mean rail current that charge balance grants at a rail, ideal parts (closed form): loads are shares of it.
+double charge_balance_A(const circuit::Arrangement& arrangement, const ElementValues& v, double rail_V) {
   const double peak_V = std::numbers::sqrt2 * v.mains.voltage_Vrms();
-  const double rail_V = v.clamp.main.threshold_V;
   const double per_cycle_V = arrangement.full_wave ? 4 * (peak_V - rail_V - 2 * v.rectifier.threshold_V)
                                                    : 2 * peak_V - rail_V - 2 * v.rectifier.threshold_V;
   return v.mains.frequency_Hz() * v.dropper_F * per_cycle_V;
@@ -48,7 +47,7 @@ double charge_balance_A(const circuit::Arrangement& arrangement, const ElementVa
 std::vector<SampleDesign> sample_designs(const circuit::Arrangement& arrangement) {
   std::vector<SampleDesign> sample;
   const auto add = [&](const std::string& purpose, ElementValues values, double load_share) {
-    values.rail_current_A = load_share * charge_balance_A(arrangement, values);
+    values.rail_current_A = load_share * charge_balance_A(arrangement, values, values.clamp.main.threshold_V);
     // Slowest fall: the load alone discharges the reservoir; ten times 0.2 V of it.
     const double fall_s = 2.0 * values.reservoir_F / values.rail_current_A;
     const double periods = std::clamp(std::ceil(fall_s * values.mains.frequency_Hz()), 24.0, 250.0);
@@ -65,7 +64,15 @@ std::vector<SampleDesign> sample_designs(const circuit::Arrangement& arrangement
   add("light load on a big reservoir, 22 ohm", light, 0.01);
 
   ElementValues heavy = ordinary(230, 50, 0.33e-6 * scale, 150);
-  add("load beyond what the line delivers: the rail hangs below its clamp", heavy, 1.03);
+  add("load beyond what the line delivers: the rail falls into the cut-off", heavy, 1.03);
+
+  // Between clamp and cut-off nothing but the dropper's slope f·C holds the rail: it settles over Cr/C
+  // periods.
+  ElementValues hanging = heavy;
+  hanging.reservoir_F = 47e-6;
+  hanging.rail_current_A =
+      charge_balance_A(arrangement, hanging, 0.75 * hanging.clamp.main.threshold_V) - 20e-6;
+  sample.push_back({"rail hanging between clamp and cut-off", &arrangement, hanging, 300});
 
   ElementValues small = ordinary(120, 60, 1.5e-6 * scale, 100);
   small.reservoir_F = 47e-6;
