@@ -10,6 +10,7 @@ namespace dropfront::circuit {
 
 namespace {
 
+constexpr double kLightest = 1e-4;    // of the charge ceiling: stands for an unloaded rail
 constexpr double kPassing_V = 1e-7;   // a rail this little below what is required counts as on it
 constexpr double kOnTarget_V = 1e-6;  // Newton's root against the independent steady state
 
@@ -112,7 +113,9 @@ AvailableCurrent find_available_current(Network (*build)(const ElementValues&), 
     return answer;
   };
 
-  const auto empty = scan.at(0, scan.cold());
+  // Not quite without load: an unloaded rail has no isolated periodic state.
+  const double lightest_A = kLightest * most_A;
+  const auto empty = scan.at(lightest_A, scan.cold());
   if (!empty.usable) return finish(empty, 0);
   if (!(empty.headroom_V >= 0)) {
     finish(empty, 0);
@@ -122,7 +125,7 @@ AvailableCurrent find_available_current(Network (*build)(const ElementValues&), 
 
   // One Newton in the capacitor voltages and the load together, then a steady state from cold at its answer:
   // only that one is believed. Where bridges may not be monotone in the load, some lighter loads are scanned.
-  double low_A = 0;
+  double low_A = lightest_A;
   LoadScan::Probe low = empty;
   double high_A = most_A;
   double high_V = -required_V;

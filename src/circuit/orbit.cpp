@@ -1,8 +1,22 @@
 #include "dropfront/circuit/orbit.hpp"
 
+#include <algorithm>
+#include <cmath>
+
 namespace dropfront::circuit {
 
 namespace {
+
+constexpr double kRounding_V = 1e-12;  // a residual this small is rounding of volts
+// A rail without any load has no isolated orbit: it creeps up to its peak for ever. Where Newton no longer
+// helps, this residual ends the climb.
+constexpr double kSettled_V = 1e-9;
+
+double greatest(const StateVector& v, int n) {
+  double worst = 0;
+  for (int i = 0; i < n; ++i) worst = std::max(worst, std::abs(v[i]));
+  return worst;
+}
 
 struct Point {
   StateVector x{};
@@ -29,24 +43,28 @@ Orbit find_orbit(PeriodMap& map, const StateVector& start, const SteadyOptions& 
   here.x = start;
   if (!evaluate(map, here, orbit)) return orbit;
   int marched = 0;
-  for (int pass = 0; !(here.residual <= options.state_tolerance_V); ++pass) {
+  for (int pass = 0;; ++pass) {
+    StateVector step{};
+    const bool solved = map.newton_step(here.x, here.mapped, here.jacobian, step);
+    // The step, not the residual, is the distance to the orbit: a lightly loaded rail contracts by a few
+    // thousandths a period, and its residual is that much smaller than its error.
+    if (solved && greatest(step, map.states()) <= options.state_tolerance_V) break;
     if (pass >= options.max_newton_passes || marched > options.max_march_periods) {
       orbit.reason = "no periodic steady state found";
       return orbit;
     }
-    StateVector step{};
     bool improved = false;
-    if (map.newton_step(here.x, here.mapped, here.jacobian, step)) {
-      for (double share = 1; share > 0.2 && !improved; share /= 2) {
-        Point trial;
-        for (int i = 0; i < map.states(); ++i) trial.x[i] = here.x[i] + share * step[i];
-        if (!evaluate(map, trial, orbit)) return orbit;
-        if (trial.residual < here.residual) {
-          here = trial;
-          improved = true;
-        }
+    for (double share = 1; solved && share > 0.2 && !improved; share /= 2) {
+      Point trial;
+      for (int i = 0; i < map.states(); ++i) trial.x[i] = here.x[i] + share * step[i];
+      if (!evaluate(map, trial, orbit)) return orbit;
+      if (trial.residual < here.residual || trial.residual <= kRounding_V) {
+        here = trial;
+        improved = true;
       }
     }
+    if (improved && here.residual <= kRounding_V) break;
+    if (!improved && here.residual <= kSettled_V) break;
     for (int k = 0; !improved && k < 16; ++k, ++marched) {
       here.x = here.mapped;
       if (!evaluate(map, here, orbit)) return orbit;

@@ -55,9 +55,14 @@ bool PeriodMap::newton_step(const StateVector& x, const StateVector& mapped, con
 }
 
 double PeriodMap::distance(const StateVector& x, const StateVector& mapped) const {
-  double worst = 0;
-  for (int i = 0; i < states(); ++i) worst = std::max(worst, std::abs(mapped[i] - x[i]));
-  return worst;
+  const auto& capacitors = walker_.network().capacitors;
+  double energy = 0;
+  double greatest_F = 0;
+  for (int i = 0; i < states(); ++i) {
+    energy += capacitors[i].capacitance_F * (mapped[i] - x[i]) * (mapped[i] - x[i]);
+    greatest_F = std::max(greatest_F, capacitors[i].capacitance_F);
+  }
+  return std::sqrt(energy / greatest_F);
 }
 
 double PeriodMap::greatest_multiplier(const SmallMatrix& jacobian) const {

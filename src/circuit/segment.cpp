@@ -9,9 +9,9 @@
 namespace dropfront::circuit {
 
 namespace {
-/// Guards closer to their threshold than this are on it: far below any voltage that matters, far above
-/// rounding of the node solution in a floating bridge.
-constexpr double kOnThreshold_V = 1e-9;
+/// A guard this far on the wrong side as a segment begins is rounding of the node solution, not a crossing,
+/// as long as it is on its way back.
+constexpr double kRounding_V = 1e-9;
 }  // namespace
 
 TonePhase::TonePhase(const Waveform& mains)
@@ -193,8 +193,7 @@ std::optional<Crossing> first_crossing(const Segment& segment, double limit_s, d
     GuardMoment near{};
     for (int bit = 0; bit < bits; ++bit) {
       const GuardMoment g = guard_moment(mode, bit, moment, phase);
-      if (g.value < -kOnThreshold_V || (g.value <= kOnThreshold_V && s == 0 && g.slope < 0) ||
-          (g.value <= 0 && s > 0)) {
+      if (g.value < -kRounding_V || (g.value <= 0 && (s > 0 || g.slope < 0))) {
         return Crossing{s, bit};
       }
       const double safe = safe_time(g);

@@ -25,7 +25,8 @@ class PeriodMap {
   /// step with (1 - J)·step = mapped - x; false where 1 - J is singular.
   bool newton_step(const StateVector& x, const StateVector& mapped, const SmallMatrix& jacobian,
                    StateVector& step) const;
-  /// Greatest |mapped - x|.
+  /// |mapped - x| in the energy norm, as volts on the largest capacitor. In this norm the map of a passive
+  /// network never expands, so it is the right measure of progress.
   double distance(const StateVector& x, const StateVector& mapped) const;
   /// Greatest |eigenvalue| of the full-period Jacobian.
   double greatest_multiplier(const SmallMatrix& jacobian) const;

@@ -15,7 +15,7 @@ enum class SteadyStatus { converged, alternating, failed };
 struct SteadyOptions {
   int max_newton_passes = 40;       ///< one pass is one period (half a period with symmetry)
   int max_march_periods = 4000;     ///< fallback marching before giving up
-  double state_tolerance_V = 1e-8;  ///< stop: greatest |x(T) - x(0)| after the last Newton step
+  double state_tolerance_V = 1e-8;  ///< stop: greatest correction of the next Newton step
   bool powers = true;               ///< losses, currents, energy law; false: rail extremes only
   bool peaks = true;                ///< with powers: the peak current of every branch
   bool multipliers = true;          ///< check that every multiplier lies inside the unit circle
