@@ -65,7 +65,10 @@ Tried try_plug_in(const PointSolver& points, const Recipe& recipe, const Operati
   const auto& wiring = *points.design().arrangement;
   const bool for_clamp = recipe.clamp == ZenerCurve::low_slope;
   const Rises rises{rest.local_degC - rest.ambient_degC, rest.clamp_junction_degC - rest.local_degC};
-  const auto values = points.values(recipe, rises, rest.ambient_degC);
+  auto values = points.values(recipe, rises, rest.ambient_degC);
+  // The film's series resistance follows tan(delta)/(omega·C): at the microseconds of a plug-in it is a
+  // thousandth of the series resistor, and none is the worse case.
+  values.dropper_esr_ohm = 0;
   const auto network = wiring.build(values);
   const double full_V = for_clamp ? values.clamp.main.threshold_V : rest.rail_greatest_V;
   const bool back_to_back = wiring.clamp_ahead && wiring.full_wave;

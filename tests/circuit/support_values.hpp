@@ -1,0 +1,27 @@
+#pragma once
+#include <cmath>
+#include <numbers>
+
+#include "dropfront/circuit/arrangement.hpp"
+#include "dropfront/circuit/element_values.hpp"
+
+namespace dropfront::circuit {
+
+/// A plain, ordinary supply: 230 V, 50 Hz, 0.68 uF, 47 ohm, 12 V clamp, 220 uF.
+inline ElementValues ordinary_values() {
+  ElementValues v;
+  v.mains = Waveform(230, 50);
+  v.series_resistor_ohm = 47;
+  v.dropper_F = 0.68e-6;
+  v.dropper_esr_ohm = 0.001 / (2 * std::numbers::pi * 50 * v.dropper_F);
+  v.discharge_ohm = 1e6;
+  v.rectifier = {0.67, 0.67};
+  v.clamp.main = {12 - 9 * 0.021, 9};
+  v.reservoir_F = 220e-6;
+  v.reservoir_esr_ohm = 0.8;
+  v.rail_current_A = 5e-3;
+  v.load_cutoff_V = 4;
+  return v;
+}
+
+}  // namespace dropfront::circuit
