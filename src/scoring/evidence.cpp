@@ -38,12 +38,12 @@ const LeanAnswer& Evidence::lean() {
   const auto& found = impl_->lean_search.least();
   lean->usable = found.usable;
   lean->reason = found.reason;
-  lean->ambient_degC = found.ambient_degC;
-  lean->hot_decides = found.ambient_degC == impl_->ambient_degC(true);
-  lean->ends = ends_text(found.ends);
+  lean->ambient_degC = found.where.ambient_degC;
+  lean->hot_decides = found.where.ambient_degC == impl_->ambient_degC(true);
+  lean->ends = ends_text(found.where.ends);
   lean->available_A = found.available_A;
   if (!found.usable) return *lean;
-  lean->capability_A = impl_->lean_search.capability_A(found);
+  lean->capability_A = impl_->lean_search.solver().capability_A(found);
   lean->margin_A = lean->capability_A - impl_->loads.heaviest_output_A();
   return *lean;
 }
@@ -55,7 +55,7 @@ std::optional<double> Evidence::margin_new_A() {
   if (!impl_->required) return *margin;
   LeanSearch fresh(impl_->points, impl_->shapes->lean, impl_->overhead_A(Quiescent::data), false);
   const auto& found = fresh.least();
-  if (found.usable) *margin = fresh.capability_A(found) - impl_->loads.heaviest_output_A();
+  if (found.usable) *margin = fresh.solver().capability_A(found) - impl_->loads.heaviest_output_A();
   return *margin;
 }
 

@@ -58,15 +58,9 @@ struct Evidence::Impl {
     auto& point = lean_points[hot ? 1 : 0];
     if (point) return *point;
     const auto& found = lean_search.at(hot);
-    OperatingPoint warm;
-    warm.ambient_degC = found.ambient_degC;
-    warm.local_degC = found.rises.over(found.ambient_degC).local_degC;
-    warm.clamp_junction_degC = found.rises.over(found.ambient_degC).clamp_junction_degC;
-    warm.state.start = found.state;
-    warm.state.rail_mean_V = found.best_rail_V;
-    point = points.solve(hot ? "lean_hot" : "lean_cold", lean_search.recipe(found.ends), heaviest(true),
-                         ambient_degC(hot), found.usable ? &warm : nullptr);
-    point->ends = ends_text(found.ends);
+    point = points.solve(hot ? "lean_hot" : "lean_cold", lean_search.solver().recipe(found.where.ends),
+                         heaviest(true), ambient_degC(hot));
+    point->ends = ends_text(found.where.ends);
     return *point;
   }
 

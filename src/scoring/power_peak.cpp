@@ -21,19 +21,18 @@ double vertex(const Peak& a, const Peak& b, const Peak& c, double otherwise) {
 
 Peak find_peak(const std::function<double(double)>& f, double low, double high, double tolerance,
                int most_calls) {
-  const double least_step = tolerance * (high - low);
   Peak a{low, f(low)};
   Peak c{high, f(high)};
   Peak b{low + kGolden * (high - low), 0};
   b.value = f(b.x);
   int calls = 3;
-  while (calls < most_calls && c.x - a.x > least_step) {
+  while (calls < most_calls && c.x - a.x > tolerance) {
     const bool wider_right = c.x - b.x > b.x - a.x;
     const double golden = wider_right ? b.x + kGolden * (c.x - b.x) : b.x - kGolden * (b.x - a.x);
     double x = golden;
     if (b.value >= a.value && b.value >= c.value && calls % 3 != 0) {
       x = vertex(a, b, c, golden);  // every third step is golden, so that both sides shrink
-      if (std::abs(x - b.x) < 0.25 * least_step) x = b.x + (wider_right ? 0.25 : -0.25) * least_step;
+      if (std::abs(x - b.x) < 0.25 * tolerance) x = b.x + (wider_right ? 0.25 : -0.25) * tolerance;
       if (!(x > a.x && x < c.x)) x = golden;
     }
     const Peak tried{x, f(x)};

@@ -10,7 +10,7 @@ struct Peak {
 };
 
 /// Greatest of a unimodal f on [low, high] by golden section with parabolic steps; stops when the bracket is
-/// shorter than `tolerance`·(high - low) or after `most_calls` calls. The value is one f returned, so it
+/// shorter than `tolerance` or after `most_calls` calls. The value is one f returned, so it
 /// never exceeds the true maximum. The ends are tried too.
 Peak find_peak(const std::function<double(double)>& f, double low, double high, double tolerance,
                int most_calls);
