@@ -1,19 +1,17 @@
 #include "dropfront/circuit/load_newton.hpp"
 
-#include <Eigen/Dense>
 #include <algorithm>
 #include <cmath>
 
 #include "dropfront/circuit/orbit.hpp"
 #include "dropfront/circuit/period_totals.hpp"
+#include "dropfront/circuit/small_solve.hpp"
 
 namespace dropfront::circuit {
 
 namespace {
 
 constexpr int kUnknowns = kMaxStates + 1;
-using Square = Eigen::Matrix<double, Eigen::Dynamic, Eigen::Dynamic, 0, kUnknowns, kUnknowns>;
-using Column = Eigen::Matrix<double, Eigen::Dynamic, 1, 0, kUnknowns, 1>;
 
 /// A modal row's derivative by the capacitor voltages, and the row's own growth with the load, at one place
 /// of a walk where the voltages themselves have moved by `by_start`, `by_load`.
@@ -123,21 +121,20 @@ LoadRoot newton_load(PeriodMap& map, const StateVector& start, double start_A, d
       root.found = true;
       return root;
     }
-    Square m(n + 1, n + 1);
-    Column rhs(n + 1);
+    std::array<std::array<double, kUnknowns>, kUnknowns> m{};
+    std::array<double, kUnknowns> step{};
     for (int i = 0; i < n; ++i) {
-      for (int c = 0; c < n; ++c) m(i, c) = (i == c ? 1.0 : 0.0) - walked.by_start[i][c];
-      m(i, n) = -walked.by_load[i];
-      m(n, i) = walked.min_by_start[i];
-      rhs(i) = mapped[i] - root.state[i];
+      for (int c = 0; c < n; ++c) m[i][c] = (i == c ? 1.0 : 0.0) - walked.by_start[i][c];
+      m[i][n] = -walked.by_load[i];
+      m[n][i] = walked.min_by_start[i];
+      step[i] = mapped[i] - root.state[i];
     }
-    m(n, n) = walked.min_by_load;
-    rhs(n) = short_V;
-    const Column step = m.fullPivLu().solve(rhs);
-    if (!step.allFinite()) return root;
-    for (int i = 0; i < n; ++i) root.state[i] += std::clamp(step(i), -1e4, 1e4);
+    m[n][n] = walked.min_by_load;
+    step[n] = short_V;
+    if (!solve_small<kUnknowns>(n + 1, m, step)) return root;
+    for (int i = 0; i < n; ++i) root.state[i] += std::clamp(step[i], -1e4, 1e4);
     // The load stays positive and never more than halves or doubles at once.
-    root.current_A = std::clamp(root.current_A + step(n), 0.5 * root.current_A, 2 * root.current_A);
+    root.current_A = std::clamp(root.current_A + step[n], 0.5 * root.current_A, 2 * root.current_A);
     if (root.current_A > most_A) return root;
   }
   return root;

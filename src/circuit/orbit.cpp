@@ -42,19 +42,22 @@ Orbit find_orbit(PeriodMap& map, const StateVector& start, const SteadyOptions& 
   Point here;
   here.x = start;
   if (!evaluate(map, here, orbit)) return orbit;
-  int marched = 0;
   for (int pass = 0;; ++pass) {
     StateVector step{};
     const bool solved = map.newton_step(here.x, here.mapped, here.jacobian, step);
     // The step, not the residual, is the distance to the orbit: a lightly loaded rail contracts by a few
     // thousandths a period, and its residual is that much smaller than its error.
-    if (solved && greatest(step, map.states()) <= options.state_tolerance_V) break;
-    if (pass >= options.max_newton_passes || marched > options.max_march_periods) {
+    if (solved && here.residual <= options.state_tolerance_V &&
+        greatest(step, map.states()) <= options.state_tolerance_V) {
+      break;
+    }
+    if (pass >= options.max_rounds) {
       orbit.reason = "no periodic steady state found";
       return orbit;
     }
+    // Newton's direction lowers the residual at its foot; where the map bends ahead, a shorter step does.
     bool improved = false;
-    for (double share = 1; solved && share > 0.2 && !improved; share /= 2) {
+    for (double share = 1; solved && share > 1e-3 && !improved; share /= 2) {
       Point trial;
       for (int i = 0; i < map.states(); ++i) trial.x[i] = here.x[i] + share * step[i];
       if (!evaluate(map, trial, orbit)) return orbit;
@@ -64,10 +67,15 @@ Orbit find_orbit(PeriodMap& map, const StateVector& start, const SteadyOptions& 
       }
     }
     if (improved && here.residual <= kRounding_V) break;
-    if (!improved && here.residual <= kSettled_V) break;
-    for (int k = 0; !improved && k < 16; ++k, ++marched) {
-      here.x = here.mapped;
-      if (!evaluate(map, here, orbit)) return orbit;
+    if (improved) continue;
+    if (here.residual <= kSettled_V) break;
+    // A drifting rail moves alike period after period: take many at once, at least one (which never expands).
+    for (double periods = 256; !improved; periods /= 4) {
+      Point trial;
+      for (int i = 0; i < map.states(); ++i) trial.x[i] = here.x[i] + periods * (here.mapped[i] - here.x[i]);
+      if (!evaluate(map, trial, orbit)) return orbit;
+      improved = periods <= 1 || trial.residual <= here.residual;
+      if (improved) here = trial;
     }
   }
   orbit.start = here.x;

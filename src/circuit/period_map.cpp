@@ -5,19 +5,9 @@
 #include <cmath>
 #include <utility>
 
+#include "dropfront/circuit/small_solve.hpp"
+
 namespace dropfront::circuit {
-
-namespace {
-using Dynamic = Eigen::Matrix<double, Eigen::Dynamic, Eigen::Dynamic, 0, kMaxStates, kMaxStates>;
-
-Dynamic to_eigen(int n, const SmallMatrix& m) {
-  Dynamic matrix(n, n);
-  for (int i = 0; i < n; ++i) {
-    for (int k = 0; k < n; ++k) matrix(i, k) = m[i][k];
-  }
-  return matrix;
-}
-}  // namespace
 
 PeriodMap::PeriodMap(Network network)
     : walker_(std::move(network)),
@@ -42,16 +32,14 @@ bool PeriodMap::apply(const StateVector& x, StateVector& mapped, SmallMatrix* ja
 bool PeriodMap::newton_step(const StateVector& x, const StateVector& mapped, const SmallMatrix& jacobian,
                             StateVector& step) const {
   const int n = states();
-  Dynamic m = Dynamic::Identity(n, n) - to_eigen(n, jacobian);
-  Eigen::Matrix<double, Eigen::Dynamic, 1, 0, kMaxStates, 1> rhs(n);
-  for (int i = 0; i < n; ++i) rhs(i) = mapped[i] - x[i];
-  const auto solution = m.fullPivLu().solve(rhs).eval();
+  SmallMatrix m{};
   for (int i = 0; i < n; ++i) {
-    // No capacitor of a mains circuit is ever a hundred kilovolts away: such a step is a singular matrix.
-    if (!(std::abs(solution(i)) < 1e5)) return false;
-    step[i] = solution(i);
+    for (int k = 0; k < n; ++k) m[i][k] = (i == k ? 1 : 0) - jacobian[i][k];
+    step[i] = mapped[i] - x[i];
   }
-  return true;
+  if (!solve_small<kMaxStates>(n, m, step)) return false;
+  // No capacitor of a mains circuit is ever a hundred kilovolts away: such a step is a singular matrix.
+  return std::all_of(step.begin(), step.begin() + n, [](double v) { return std::abs(v) < 1e5; });
 }
 
 double PeriodMap::distance(const StateVector& x, const StateVector& mapped) const {
@@ -74,7 +62,11 @@ double PeriodMap::greatest_multiplier(const SmallMatrix& jacobian) const {
     const double square = half_trace * half_trace - determinant;
     greatest = square >= 0 ? std::abs(half_trace) + std::sqrt(square) : std::sqrt(std::abs(determinant));
   } else {
-    const auto values = to_eigen(n, jacobian).eigenvalues().eval();
+    Eigen::MatrixXd m(n, n);
+    for (int i = 0; i < n; ++i) {
+      for (int k = 0; k < n; ++k) m(i, k) = jacobian[i][k];
+    }
+    const Eigen::VectorXcd values = m.eigenvalues();
     for (int i = 0; i < n; ++i) greatest = std::max(greatest, std::abs(values(i)));
   }
   return halved_ ? greatest * greatest : greatest;

@@ -15,9 +15,10 @@ struct Orbit {
   int passes = 0;  ///< walks made
 };
 
-/// Newton on the period map from `start`: (1 - J)·dx = map(x) - x. A full step that makes the residual grow
-/// is halved twice, then sixteen plain periods are walked (passive networks contract, however slowly). Stop:
-/// greatest |map(x) - x| <= options.state_tolerance_V. Afterwards map.segments() is the orbit.
+/// Newton on the period map from `start`: (1 - J)·dx = map(x) - x, shortened until the residual falls in the
+/// energy norm. Where 1 - J is singular (a rail that only drifts) or no step helps, strides of whole periods
+/// along the drift. Stop: residual and next step both <= options.state_tolerance_V. Afterwards
+/// map.segments() is the orbit.
 Orbit find_orbit(PeriodMap& map, const StateVector& start, const SteadyOptions& options);
 
 /// Extremes of the rail along map.segments().

@@ -13,8 +13,7 @@ using StateVector = std::array<double, kMaxStates>;
 enum class SteadyStatus { converged, alternating, failed };
 
 struct SteadyOptions {
-  int max_newton_passes = 40;       ///< one pass is one period (half a period with symmetry)
-  int max_march_periods = 4000;     ///< fallback marching before giving up
+  int max_rounds = 200;             ///< Newton steps (or strides along a drift) before giving up
   double state_tolerance_V = 1e-8;  ///< stop: greatest correction of the next Newton step
   bool powers = true;               ///< losses, currents, energy law; false: rail extremes only
   bool peaks = true;                ///< with powers: the peak current of every branch
