@@ -73,16 +73,19 @@ TEST_CASE("The power law's capability is the greatest that a fine scan over the 
 }
 
 TEST_CASE("'Available at the input minimum' overstates a step-down stage, more with a higher clamp") {
-  // By charge balance the current at 6 V exceeds that at the clamp by (Vpk - 6)/(Vpk - Vz) with Vpk the low
-  // crest less the drops; 4/13/38 % were measured for 12/24/47 V clamps on 120 V mains by an exact prototype.
-  const double expected[] = {1.04, 1.13, 1.38};
+  // Such a claim takes the current there at the clamp's voltage. By charge balance that current exceeds the
+  // clamp's own by (Vpk - 6 V)/(Vpk - Vz), Vpk the low crest less the drops; an exact piecewise-linear
+  // prototype gave 4/13/38 % for 12/24/47 V clamps on 120 V mains.
+  const double expected[] = {0.04, 0.13, 0.38};
   const parts::Clamp clamps[] = {test::zener_12V(), test::zener_24V(), test::zener_47V()};
   for (int i = 0; i < 3; ++i) {
-    const auto result = capability(american(clamps[i]));
+    auto example = american(clamps[i]);
+    example.reservoir.capacitance_F = 10e-3;  // no ripple, and
+    example.clamp.knee_current_A.reset();     // no knee: the rail stands at the clamp until it lets go
+    const auto result = capability(example);
     INFO("clamp " << clamps[i].voltage_V << " V: " << result.naive_A / result.by_law_A);
-    // Another supply than the one measured: the crest, the ripple and the low end of the zener shift it.
-    REQUIRE_THAT(result.naive_A / result.by_law_A - 1,
-                 WithinAbs(expected[i] - 1, 0.3 * (expected[i] - 1) + 0.03));
+    // The prototype's stage and tolerances are not known: a sixth of the figure, and 1 % for slopes.
+    REQUIRE_THAT(result.naive_A / result.by_law_A - 1, WithinAbs(expected[i], expected[i] / 6 + 0.01));
   }
 }
 
