@@ -1,10 +1,12 @@
 #include "dropfront/app/command_line.hpp"
 
 #include <CLI/CLI.hpp>
+#include <algorithm>
 
 #include "dropfront/app/commands.hpp"
 #include "dropfront/report/folder_writer.hpp"
 #include "dropfront/values/input_error.hpp"
+#include "dropfront/values/suggest.hpp"
 
 namespace dropfront::app {
 
@@ -16,6 +18,7 @@ struct Arguments {
   AssessArguments assess;
   CheckArguments check;
   PartsArguments parts;
+  DeckArguments deck;
   SeriesArguments series;
   StartArguments start;
 };
@@ -59,7 +62,7 @@ CLI::App* add_search(CLI::App& app, SearchArguments& a) {
   add_sets(command, a.sets);
   command->add_flag("--json", a.json, "Print one JSON document and nothing else");
   command->add_flag("--quiet", a.quiet, "Print only where the files are");
-  command->footer("Example:\n  dropfront search problems/leak-alarm.json --out results --effort quick");
+  command->footer("Example:\n  dropfront search problems/towel-rail-timer.json --out results --effort quick");
   return command;
 }
 
@@ -97,6 +100,22 @@ CLI::App* add_parts(CLI::App& app, PartsArguments& a) {
   return command;
 }
 
+CLI::App* add_deck(CLI::App& app, DeckArguments& a) {
+  CLI::App* command =
+      app.add_subcommand("deck", "Circuit-simulator deck (SPICE3 syntax) of a candidate, runnable as is");
+  command->add_option("result", a.result, "Result folder")->required()->type_name("RESULT");
+  command->add_option("--candidate", a.candidate, "Number of the candidate")->required()->type_name("N");
+  command
+      ->add_option("--corner", a.corner,
+                   "nominal, lean_cold, lean_hot, rich_empty, rich_loaded, standby or standby_worst")
+      ->capture_default_str()
+      ->type_name("CORNER");
+  command->add_option("--supply", a.supply, "Which of several supplies (default: the first)")
+      ->type_name("NAME");
+  command->footer("Example:\n  dropfront deck results/towel-rail-timer --candidate 1 --corner lean_cold");
+  return command;
+}
+
 CLI::App* add_series(CLI::App& app, SeriesArguments& a) {
   CLI::App* command = app.add_subcommand("series", "Preferred values around a value (IEC 60063)");
   command->add_option("value", a.value, "A value: 4.7k, 470n, R47, 52")->required()->type_name("VALUE");
@@ -114,6 +133,16 @@ CLI::App* add_start(CLI::App& app, StartArguments& a) {
   return command;
 }
 
+void refuse_unknown_command(const CLI::App& app, int argc, const char* const* argv) {
+  if (argc < 2 || *argv[1] == '-' || *argv[1] == '\0') return;
+  std::vector<std::string> known;
+  for (const CLI::App* one : app.get_subcommands({})) known.push_back(one->get_name());
+  if (std::find(known.begin(), known.end(), argv[1]) != known.end()) return;
+  throw values::InputError("dropfront", "",
+                           "no command '" + std::string(argv[1]) + "'" +
+                               values::did_you_mean(argv[1], known) + "; dropfront --help lists them");
+}
+
 ExitStatus command(int argc, const char* const* argv, Console& console) {
   CLI::App app{kAbout, "dropfront"};
   app.require_subcommand(1);
@@ -124,8 +153,10 @@ ExitStatus command(int argc, const char* const* argv, Console& console) {
   CLI::App* assess = add_assess(app, all.assess);
   CLI::App* check = add_check(app, all.check);
   CLI::App* parts = add_parts(app, all.parts);
+  CLI::App* deck = add_deck(app, all.deck);
   CLI::App* series = add_series(app, all.series);
   CLI::App* start = add_start(app, all.start);
+  refuse_unknown_command(app, argc, argv);
   try {
     app.parse(argc, argv);
   } catch (const CLI::ParseError& error) {
@@ -135,6 +166,7 @@ ExitStatus command(int argc, const char* const* argv, Console& console) {
   if (*assess) return assess_command(all.assess, console);
   if (*check) return check_command(all.check, console);
   if (*parts) return parts_command(all.parts, console);
+  if (*deck) return deck_command(all.deck, console);
   if (*series) return series_command(all.series, console);
   if (*start) return start_command(all.start, console);
   return ExitStatus::bad_input;

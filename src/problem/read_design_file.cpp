@@ -6,6 +6,7 @@
 #include "dropfront/problem/named_part.hpp"
 #include "dropfront/problem/problem.hpp"
 #include "dropfront/problem/scalars.hpp"
+#include "dropfront/problem/sections.hpp"
 #include "dropfront/problem/support.hpp"
 #include "dropfront/values/text_file.hpp"
 
@@ -44,10 +45,8 @@ void refuse_unused(ObjectReader& reader, const char* slot, const scoring::Design
 
 }  // namespace
 
-scoring::Design read_design_file(const std::string& path, Problem& problem) {
-  const std::string text = values::read_text_file(path);
-  const Node root = parse_document(text, path);
-  ObjectReader reader(Cursor(root, path), keys::design);
+scoring::Design read_design(const Cursor& cursor, Problem& problem) {
+  ObjectReader reader(cursor, keys::design);
   scoring::Design design;
   design.arrangement = read_arrangement(reader.require("arrangement"));
   design.dropper = read_part<parts::Dropper>(reader.require("dropper"), problem);
@@ -66,6 +65,13 @@ scoring::Design read_design_file(const std::string& path, Problem& problem) {
   caution_unchecked("design.varistor", design.varistor != nullptr, checks("varistor."), problem.cautions);
   caution_unchecked("design.fuse", design.fuse != nullptr, checks("fuse."), problem.cautions);
   caution_unchecked("design.ceramic", design.ceramic != nullptr, checks("ceramic."), problem.cautions);
+  return design;
+}
+
+scoring::Design read_design_file(const std::string& path, Problem& problem) {
+  const std::string text = values::read_text_file(path);
+  const Node root = parse_document(text, path);
+  const scoring::Design design = read_design(Cursor(root, path), problem);
   problem.inputs.push_back({std::filesystem::path(path).filename().string(), hash_of_file(path)});
   return design;
 }

@@ -51,6 +51,17 @@ Problem read_problem(const Node& root, const std::string& path, const std::strin
   problem.text = canonical_json(root);
   problem.inputs.push_back({fs::path(path).filename().string(), hash});
   ObjectReader reader(Cursor(root, path), keys::problem);
+  read_asked(reader, problem);
+  read_parts(reader.require("parts"), fs::path(path).parent_path().string(), problem);
+  read_slots(reader.take_object("slots"), problem);
+  reader.finish();
+  note_column_defaults(problem);
+  return problem;
+}
+
+}  // namespace
+
+void read_asked(ObjectReader& reader, Problem& problem) {
   reader.take("$schema");  // for editors
   problem.title = read_text(reader.require("title"));
   read_mains(reader.require("mains"), problem);
@@ -60,14 +71,7 @@ Problem read_problem(const Node& root, const std::string& path, const std::strin
   read_limits(reader.take_object("limits"), problem);
   read_derating(reader.take_object("derating"), problem);
   read_settings(reader, problem);
-  read_parts(reader.require("parts"), fs::path(path).parent_path().string(), problem);
-  read_slots(reader.take_object("slots"), problem);
-  reader.finish();
-  note_column_defaults(problem);
-  return problem;
 }
-
-}  // namespace
 
 ProblemFile read_problem_file(const std::string& path, const std::vector<std::string>& sets) {
   const std::string text = values::read_text_file(path);

@@ -79,7 +79,7 @@ std::string checks_text(const scoring::Score& score, const AssessTextOptions& op
                         bool several_supplies) {
   TextTable table({"check", ">value", "", ">limit", ">headroom", "", "worst at"});
   for (const auto& check : score.checks) {
-    const bool yes_no = is_yes_no(check);
+    const bool yes_no = check.yes_or_no() && check.value;
     table.row({std::string(check.id),
                yes_no ? (*check.value > 0 ? "yes" : "no") : amount(check.value, check.unit),
                yes_no          ? ""

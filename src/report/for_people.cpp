@@ -66,11 +66,6 @@ std::optional<double> area_mm2(const scoring::Objectives& objectives) {
   return static_cast<double>(*objectives.board_area_um2) / 1e6;
 }
 
-bool is_yes_no(const scoring::Check& check) {
-  return check.unit.empty() && !check.at_most && check.limit == 1.0 &&
-         (check.value == 0.0 || check.value == 1.0);
-}
-
 std::string_view verdict_name(scoring::Verdict verdict) {
   switch (verdict) {
     case scoring::Verdict::compliant:

@@ -7,7 +7,6 @@
 #include <thread>
 
 #include "dropfront/report/cautions.hpp"
-#include "dropfront/report/for_people.hpp"
 #include "dropfront/report/second_sources.hpp"
 
 namespace dropfront::report {
@@ -57,7 +56,7 @@ const scoring::Check* tightest_check(const scoring::Score& score) {
   const scoring::Check* tightest = nullptr;
   for (const auto& check : score.checks) {
     const auto headroom = check.headroom();
-    if (!headroom || !check.pass.value_or(false) || is_yes_no(check)) continue;
+    if (!headroom || !check.pass.value_or(false) || check.yes_or_no()) continue;
     if (tightest == nullptr || *headroom < *tightest->headroom()) tightest = &check;
   }
   return tightest;

@@ -41,6 +41,15 @@ std::vector<Option> arrangement_options(const std::vector<const circuit::Arrange
   return options;
 }
 
+/// Positions of the least and the greatest value; the first and the last option where values have no order.
+std::pair<std::size_t, std::size_t> ends_of(const search::Slot& slot, std::size_t options) {
+  const auto& values = slot.coordinate;
+  if (values.size() != options || values.empty()) return {0, options > 0 ? options - 1 : 0};
+  const auto [least, greatest] = std::minmax_element(values.begin(), values.end());
+  return {static_cast<std::size_t>(least - values.begin()),
+          static_cast<std::size_t>(greatest - values.begin())};
+}
+
 std::string size_text(const parts::PartInfo& info) {
   const auto side = [](const std::optional<std::int64_t>& um) {
     return um ? rounded(static_cast<double>(*um) / 1000, 1) : std::string("?");
@@ -69,15 +78,16 @@ std::vector<Option> slot_options(const problem::Problem& problem, std::string_vi
 }
 
 std::string slots_text(const problem::Problem& problem, const search::Space& space) {
-  TextTable table({"slot", ">options", "first", "last"});
+  TextTable table({"slot", ">options", "from", "to"});
   for (const auto& slot : space.slots) {
     const auto options = slot_options(problem, slot.name);
     const auto words = [](const Option& option) {
       return option.value.empty() || option.value == option.name ? option.name
                                                                  : option.name + " (" + option.value + ")";
     };
-    table.row({slot.name, counted(slot.size), options.empty() ? "" : words(options.front()),
-               options.size() < 2 ? "" : words(options.back())});
+    const auto [least, greatest] = ends_of(slot, options.size());
+    table.row({slot.name, counted(slot.size), options.empty() ? "" : words(options[least]),
+               options.size() < 2 ? "" : words(options[greatest])});
   }
   return table.text() + "  " + counted(space.size()) + " possible designs\n";
 }

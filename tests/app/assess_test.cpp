@@ -43,7 +43,9 @@ TEST_CASE("with several supplies the operation is told apart by their names") {
 
 TEST_CASE("a mistake in the design file is status 2, named with file and place") {
   const Workshop shop;
-  shop.write("design.json", "{\"arrangement\": \"half-wave-clamp-ahed\"}");
+  auto design = nlohmann::ordered_json::parse(shop.read(kBench), nullptr, true, true);
+  design["arrangement"] = "half-wave-clamp-ahed";
+  shop.write("design.json", design.dump());
   const auto finished = shop.run("assess " + kAlarm + " --design design.json");
   CHECK(finished.status == 2);
   CHECK(finished.out.empty());

@@ -10,7 +10,8 @@ struct Finished {
   std::string out, err;
 };
 
-/// A folder of its own with the shipped problems in it, removed at the end. Commands run inside it.
+/// A folder of its own with the shipped problems in it and `small.json`, the shipped timer with few enough
+/// parts to look at every design. Removed at the end. Commands run inside it.
 class Workshop {
  public:
   Workshop();

@@ -11,6 +11,7 @@
 #include <filesystem>
 #include <fstream>
 #include <iterator>
+#include <nlohmann/json.hpp>
 
 #include "support/catch.hpp"
 
@@ -22,6 +23,11 @@ Workshop::Workshop() {
   folder_ = (fs::temp_directory_path() / "dropfront_workshop_XXXXXX").string();
   REQUIRE(::mkdtemp(folder_.data()) != nullptr);
   fs::create_directory_symlink(fs::path(DROPFRONT_SOURCE_DIR) / "problems", fs::path(folder_) / "problems");
+  auto problem = nlohmann::ordered_json::parse(read("problems/towel-rail-timer.json"), nullptr, true, true);
+  problem["parts"] = {"problems/parts/demo"};
+  problem["slots"]["dropper"]["where"]["capacitance"] = {{"min", "390 nF"}, {"max", "560 nF"}};
+  problem["slots"]["clamp"]["where"]["voltage"] = {{"min", "8 V"}, {"max", "9.5 V"}};
+  write("small.json", problem.dump());
 }
 
 Workshop::~Workshop() { fs::remove_all(folder_); }
@@ -94,14 +100,15 @@ TEST_CASE("the program says its name, its commands and its warning") {
   const auto help = shop.run("--help");
   CHECK(help.status == 0);
   CHECK(help.err.empty());
-  for (const char* word : {"search", "assess", "check", "parts", "series", "start", "mains potential"})
+  for (const char* word :
+       {"search", "assess", "check", "parts", "deck", "series", "start", "mains potential"})
     CHECK(help.out.find(word) != std::string::npos);
   CHECK(shop.run("--version").out.starts_with("dropfront "));
 }
 
 TEST_CASE("the example in the help of every command works") {
   const Workshop shop;
-  for (const std::string command : {"assess", "check", "parts", "series", "start", "search"}) {
+  for (const std::string command : {"assess", "check", "parts", "series", "start", "search", "deck"}) {
     if (command == "start") {  // into a folder that may be written to
       fs::remove(shop.path("problems"));
       fs::copy(fs::path(DROPFRONT_SOURCE_DIR) / "problems", shop.path("problems"),
@@ -136,6 +143,7 @@ TEST_CASE("wrong usage is status 2, with the reason on standard error") {
     CHECK(finished.out.empty());
     CHECK_FALSE(finished.err.empty());
   }
+  CHECK(shop.run("serch problems/leak-alarm.json").err.find("did you mean 'search'") != std::string::npos);
   CHECK(shop.run("parts problems/leak-alarm.json --slot clmap").err.find("did you mean 'clamp'") !=
         std::string::npos);
 }

@@ -49,6 +49,14 @@ struct PartsArguments {
 };
 ExitStatus parts_command(const PartsArguments& arguments, Console& console);
 
+struct DeckArguments {
+  std::string result;
+  int candidate = 1;
+  std::string corner = "nominal";
+  std::optional<std::string> supply;  ///< of several, by name; unset: the first
+};
+ExitStatus deck_command(const DeckArguments& arguments, Console& console);
+
 struct SeriesArguments {
   std::string value;
   std::string series = "E24";

@@ -18,4 +18,9 @@ void read_settings(ObjectReader& problem_reader, Problem& problem);
 void read_parts(const Cursor& folders, const std::string& base, Problem& problem);
 void read_slots(const Cursor& slots, Problem& problem);
 
+/// All of a problem but its parts and slots: enough to score a design whose numbers are inline.
+void read_asked(ObjectReader& problem_reader, Problem& problem);
+/// A design, parts by name or inline; inline ones are added to the problem's derived parts.
+scoring::Design read_design(const Cursor& design, Problem& problem);
+
 }  // namespace dropfront::problem

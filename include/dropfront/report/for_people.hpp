@@ -27,9 +27,6 @@ std::string counted(double count);
 std::optional<double> cost_units(const scoring::Objectives& objectives);  ///< currency
 std::optional<double> area_mm2(const scoring::Objectives& objectives);
 
-/// A check that asks for a yes: value 0 or 1, limit >= 1, no unit. Its headroom says nothing.
-bool is_yes_no(const scoring::Check& check);
-
 /// "compliant", "breaks limits", "undefined".
 std::string_view verdict_name(scoring::Verdict verdict);
 
