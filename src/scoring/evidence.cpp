@@ -40,7 +40,7 @@ const LeanAnswer& Evidence::lean() {
   lean->reason = found.reason;
   lean->ambient_degC = found.where.ambient_degC;
   lean->hot_decides = found.where.ambient_degC == impl_->ambient_degC(true);
-  lean->ends = ends_text(found.where.ends);
+  lean->ends = ends_text(found.where.ends, impl_->bled());
   lean->available_A = found.available_A;
   if (!found.usable) return *lean;
   lean->capability_A = impl_->lean_search.solver().capability_A(found);

@@ -52,6 +52,7 @@ struct Evidence::Impl {
     const auto& ambient = requirement->surroundings.ambient_degC;
     return hot ? ambient.high : ambient.low;
   }
+  bool bled() const { return design.discharge != nullptr && design.discharge_count > 0; }
   bool one_ambient() const { return ambient_degC(false) == ambient_degC(true); }
 
   const OperatingPoint& lean_point(bool hot) {
@@ -60,7 +61,7 @@ struct Evidence::Impl {
     const auto& found = lean_search.at(hot);
     point = points.solve(hot ? "lean_hot" : "lean_cold", lean_search.solver().recipe(found.where.ends),
                          heaviest(true), ambient_degC(hot));
-    point->ends = ends_text(found.where.ends);
+    point->ends = ends_text(found.where.ends, bled());
     return *point;
   }
 
@@ -71,7 +72,7 @@ struct Evidence::Impl {
       point = rest(true);
     } else {
       point = points.solve("rich_empty", rich_recipe(*shapes), rich_share(0, "none"), ambient_degC(hot));
-      point->ends = kRichEnds;
+      point->ends = rich_ends(bled());
     }
     return *point;
   }

@@ -40,7 +40,7 @@ const std::vector<OperatingPoint>& Evidence::rich_loads() {
     const auto& warm = loads.back();
     loads.push_back(impl_->points.solve("rich_loaded", rich_recipe(*impl_->shapes), load,
                                         impl_->ambient_degC(true), warm.state.usable() ? &warm : nullptr));
-    loads.back().ends = kRichEnds;
+    loads.back().ends = rich_ends(impl_->bled());
   }
   return loads;
 }
@@ -70,7 +70,7 @@ const OperatingPoint& Evidence::standby_worst() {
   const auto at = [&](End series, const OperatingPoint* warm) {
     auto solved = impl_->points.solve("standby_worst", production_recipe(*impl_->shapes, series),
                                       impl_->asleep(), kStandby_degC, warm);
-    solved.ends = production_ends(series);
+    solved.ends = production_ends(series, impl_->bled());
     return solved;
   };
   auto high = at(End::high, nullptr);

@@ -25,9 +25,11 @@ const char* end_name(End end) { return end == End::low ? "low" : "high"; }
 
 }  // namespace
 
-std::string ends_text(const LeanEnds& ends) {
-  return std::string("series_resistor ") + end_name(ends.series_resistor) + ", esr " + end_name(ends.esr) +
-         ", discharge " + end_name(ends.discharge);
+std::string ends_text(const LeanEnds& ends, bool bled) {
+  std::string text =
+      std::string("series_resistor ") + end_name(ends.series_resistor) + ", esr " + end_name(ends.esr);
+  if (bled) text += std::string(", discharge ") + end_name(ends.discharge);
+  return text;
 }
 
 LeanCaseSolver::LeanCaseSolver(PointSolver& points, const circuit::Waveform& lean_mains, double overhead_A,

@@ -33,9 +33,15 @@ Recipe production_recipe(const MainsShapes& shapes, End series_resistor) {
   return recipe;
 }
 
-const char* production_ends(End series_resistor) {
-  return series_resistor == End::low ? "dropper high, series_resistor low, discharge low, clamp high"
-                                     : "dropper high, series_resistor high, discharge low, clamp high";
+const char* rich_ends(bool bled) { return production_ends(End::high, bled); }
+
+const char* production_ends(End series_resistor, bool bled) {
+  if (series_resistor == End::low) {
+    return bled ? "dropper high, series_resistor low, discharge low, clamp high"
+                : "dropper high, series_resistor low, clamp high";
+  }
+  return bled ? "dropper high, series_resistor high, discharge low, clamp high"
+              : "dropper high, series_resistor high, clamp high";
 }
 
 }  // namespace dropfront::scoring

@@ -95,6 +95,29 @@ bool run_tier(Tier tier, const Evidences& evidences, bool stop_at_failure,
   return true;
 }
 
+std::size_t index_of(std::string_view id) {
+  const auto& table = check_table();
+  const auto rule = std::find_if(table.begin(), table.end(), [id](const CheckRule& r) { return r.id == id; });
+  return static_cast<std::size_t>(rule - table.begin());
+}
+
+/// Whether charge balance alone rules the margin out, by a twentieth of the load at least: nearer misses are
+/// worked out, so that what is reported of them is exact. The check then carries the ceiling.
+std::optional<Check> margin_out_of_reach(const Evidences& evidences) {
+  for (const auto& evidence : evidences) {
+    const double load_A = evidence->loads().heaviest_output_A();
+    const double wanted_A = evidence->requirement().limits.current_margin * load_A;
+    const double ceiling_A = evidence->margin_ceiling_A();
+    if (!(ceiling_A < wanted_A - 0.05 * load_A)) continue;
+    At at;
+    at.supply = evidence->supply().name;
+    at.corner = "lean";
+    at.load = evidence->loads().heaviest_name;
+    return at_least("supply.margin", ceiling_A, wanted_A, "A", at, "ceiling by charge balance, not solved");
+  }
+  return std::nullopt;
+}
+
 /// Tiers by cost, and the objective that becomes known with each; false when the score stops there.
 bool run_stages(Score& score, Depth depth, const Stop& stop, const Evidences& evidences,
                 std::vector<std::optional<Check>>& found) {
@@ -102,6 +125,12 @@ bool run_stages(Score& score, Depth depth, const Stop& stop, const Evidences& ev
   const auto stopped = [&] { return stop && stop(score.objectives); };
   if (stopped() || !run_tier(Tier::list, evidences, stop_at_failure, found)) return false;
   if (depth == Depth::cheap) return false;
+  if (stop_at_failure) {
+    if (auto ruled_out = margin_out_of_reach(evidences)) {
+      found[index_of("supply.margin")] = std::move(ruled_out);
+      return false;
+    }
+  }
   score.objectives.standby_loss_W = greatest_standby_W(evidences);
   if (!run_tier(Tier::standby, evidences, stop_at_failure, found) || stopped()) return false;
   score.objectives.current_margin_A = least_margin_A(evidences);

@@ -46,6 +46,10 @@ class Evidence {
   /// The margin with new parts (no ageing), else as lean().margin_A. Absent: no answer.
   std::optional<double> margin_new_A();
 
+  /// A margin no lean search can exceed, by charge balance alone (theorem): nothing is solved. Infinite where
+  /// the rail the stage needs is not known.
+  double margin_ceiling_A();
+
   const OperatingPoint& nominal();
   const OperatingPoint& rich_empty();      ///< the ambient with the greatest rail (rail_greatest_V)
   const OperatingPoint& rich_empty_hot();  ///< the same load at the high ambient, for powers

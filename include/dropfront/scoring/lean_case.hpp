@@ -12,7 +12,8 @@ struct LeanEnds {
   End discharge = End::high;
   friend bool operator==(const LeanEnds&, const LeanEnds&) = default;
 };
-std::string ends_text(const LeanEnds& ends);
+/// As words; the discharge chain is left out where there is none.
+std::string ends_text(const LeanEnds& ends, bool bled);
 
 /// One ambient and one choice of ends.
 struct LeanCase {
