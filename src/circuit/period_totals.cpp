@@ -7,17 +7,17 @@ namespace dropfront::circuit {
 
 namespace {
 
-constexpr int kMostBasis = kMaxStates + 2 + 2 * kMostTones;
+constexpr int kMostBasis = 2 * kMaxStates + 1 + 2 * kMostTones;
 
-/// The functions a segment's quantities are made of, in this order: one per state (e^(lambda s), or s where
-/// the mode is slow), then 1, then cos and sin of each tone.
+/// The functions a segment's quantities are made of, in this order: two per state (e^(lambda·s) and nothing,
+/// or s and s^2 where the mode is slow), then 1, then cos and sin of each tone.
 struct Basis {
   int states = 0;
   int tones = 0;
-  int size() const { return states + 1 + 2 * tones; }
-  int one() const { return states; }
-  int cosine(int h) const { return states + 1 + 2 * h; }
-  int sine(int h) const { return states + 2 + 2 * h; }
+  int size() const { return 2 * states + 1 + 2 * tones; }
+  int one() const { return 2 * states; }
+  int cosine(int h) const { return 2 * states + 1 + 2 * h; }
+  int sine(int h) const { return 2 * states + 2 + 2 * h; }
 };
 
 using Coefficients = std::array<double, kMostBasis>;
@@ -26,7 +26,7 @@ struct Gram {
   double mean[kMostBasis];           // integral of each function
 };
 
-/// A row's coefficients in the basis. Slow modes: alpha + (lambda·alpha + drift)·s.
+/// A row's coefficients in the basis. Slow modes to second order in lambda·s, which is below 1e-4.
 Coefficients expand(const Segment& segment, const Basis& basis, const ModalRow& row,
                     const ForcedRow& forced) {
   Coefficients c{};
@@ -34,10 +34,12 @@ Coefficients expand(const Segment& segment, const Basis& basis, const ModalRow& 
   c[basis.one()] = forced.constant;
   for (int i = 0; i < basis.states; ++i) {
     if (mode.slow[i]) {
+      const double slope = mode.lambda[i] * segment.alpha[i] + segment.drift[i];
       c[basis.one()] += row.z[i] * segment.alpha[i];
-      c[i] = row.z[i] * (mode.lambda[i] * segment.alpha[i] + segment.drift[i]);
+      c[2 * i] = row.z[i] * slope;
+      c[2 * i + 1] = row.z[i] * slope * mode.lambda[i] / 2;
     } else {
-      c[i] = row.z[i] * segment.alpha[i];
+      c[2 * i] = row.z[i] * segment.alpha[i];
     }
   }
   for (int h = 0; h < basis.tones; ++h) {
@@ -45,6 +47,24 @@ Coefficients expand(const Segment& segment, const Basis& basis, const ModalRow& 
     c[basis.sine(h)] = forced.sine[h];
   }
   return c;
+}
+
+/// Integral of s^k·e^(l·s) from 0 to `length`, l <= 0, k <= 2. By its series where closed forms would cancel.
+double power_exponential(int k, double l, double length) {
+  const double x = l * length;
+  if (std::abs(x) < 1) {
+    double term = 1;
+    double sum = 1.0 / (k + 1);
+    for (int j = 1; j < 20; ++j) {
+      term *= x / j;
+      sum += term / (k + 1 + j);
+    }
+    return sum * std::pow(length, k + 1);
+  }
+  const double decay = std::exp(x);
+  if (k == 0) return (decay - 1) / l;
+  if (k == 1) return (decay * (x - 1) + 1) / (l * l);
+  return (decay * (x * x - 2 * x + 2) - 2) / (l * l * l);
 }
 
 /// Integral of cos(a·t) and sin(a·t) from t0 to t1; a = 0 gives the length and zero.
@@ -56,23 +76,34 @@ TrigIntegral trig_integral(double a, double t0, double t1) {
   return {(std::sin(a * t1) - std::sin(a * t0)) / a, (std::cos(a * t0) - std::cos(a * t1)) / a};
 }
 
-/// Products of state functions with everything but tones.
+/// The power of s that stands in a state's slot, and its exponent's rate.
+struct StateFunction {
+  bool used;
+  int power;
+  double rate;
+};
+StateFunction state_function(const ConductionMode& mode, int slot) {
+  const int i = slot / 2;
+  if (mode.slow[i]) return {true, slot % 2 + 1, 0};
+  return {slot % 2 == 0, 0, mode.lambda[i]};
+}
+
+/// Products of state functions with each other and with the constant.
 void fill_states(const Segment& segment, const Basis& basis, Gram& gram) {
   const auto& mode = *segment.mode;
   const double length = segment.length_s;
-  for (int i = 0; i < basis.states; ++i) {
-    const double li = mode.lambda[i];
-    gram.mean[i] = mode.slow[i] ? length * length / 2 : std::expm1(li * length) / li;
+  for (int i = 0; i < 2 * basis.states; ++i) {
+    const auto f = state_function(mode, i);
+    gram.mean[i] = f.used ? power_exponential(f.power, f.rate, length) : 0;
     gram.m[i][basis.one()] = gram.mean[i];
-    for (int k = i; k < basis.states; ++k) {
-      const double lk = mode.lambda[k];
-      if (mode.slow[i] && mode.slow[k]) {
-        gram.m[i][k] = length * length * length / 3;
-      } else if (!mode.slow[i] && !mode.slow[k]) {
-        gram.m[i][k] = std::expm1((li + lk) * length) / (li + lk);
+    for (int k = i; k < 2 * basis.states; ++k) {
+      const auto g = state_function(mode, k);
+      if (!f.used || !g.used) {
+        gram.m[i][k] = 0;
+      } else if (f.power + g.power > 2) {
+        gram.m[i][k] = std::pow(length, f.power + g.power + 1) / (f.power + g.power + 1);  // both slow
       } else {
-        const double l = mode.slow[i] ? lk : li;  // integral of s·e^(l·s)
-        gram.m[i][k] = (std::exp(l * length) * (l * length - 1) + 1) / (l * l);
+        gram.m[i][k] = power_exponential(f.power + g.power, f.rate + g.rate, length);
       }
     }
   }
@@ -94,14 +125,17 @@ void fill_mixed(const Segment& segment, const Basis& basis, const Waveform& main
     gram.mean[js] = gram.m[basis.one()][js] = (c0 - c1) / w;
     for (int i = 0; i < basis.states; ++i) {
       if (mode.slow[i]) {
-        gram.m[i][jc] = length * s1 / w + (c1 - c0) / (w * w);
-        gram.m[i][js] = -length * c1 / w + (s1 - s0) / (w * w);
+        gram.m[2 * i][jc] = length * s1 / w + (c1 - c0) / (w * w);
+        gram.m[2 * i][js] = -length * c1 / w + (s1 - s0) / (w * w);
+        gram.m[2 * i + 1][jc] = length * length * s1 / w + 2 * (length * c1 - (s1 - s0) / w) / (w * w);
+        gram.m[2 * i + 1][js] = -length * length * c1 / w + 2 * (length * s1 + (c1 - c0) / w) / (w * w);
       } else {
         const double l = mode.lambda[i];
         const double decay = l * length > -60 ? std::exp(l * length) : 0;
         const double scale = 1 / (l * l + w * w);
-        gram.m[i][jc] = (decay * (l * c1 + w * s1) - (l * c0 + w * s0)) * scale;
-        gram.m[i][js] = (decay * (l * s1 - w * c1) - (l * s0 - w * c0)) * scale;
+        gram.m[2 * i][jc] = (decay * (l * c1 + w * s1) - (l * c0 + w * s0)) * scale;
+        gram.m[2 * i][js] = (decay * (l * s1 - w * c1) - (l * s0 - w * c0)) * scale;
+        gram.m[2 * i + 1][jc] = gram.m[2 * i + 1][js] = 0;
       }
     }
   }

@@ -7,7 +7,7 @@
 namespace dropfront::circuit {
 
 /// Integrals over a walk, in closed form: every current and voltage is a sum of exponentials, sinusoids, a
-/// constant and (slow modes) a straight line, so every product integral is elementary.
+/// constant and (slow modes) a parabola, so every product integral is elementary.
 struct WalkTotals {
   double duration_s = 0;
   double rail_Vs = 0;                 ///< integral of the rail voltage
@@ -19,7 +19,7 @@ struct WalkTotals {
   double dissipated_J() const;
 };
 
-/// Sums over `segments`. Slow modes are taken as straight lines inside a segment: relative error below 1e-8.
+/// Sums over `segments`. Slow modes are taken to second order in lambda·s < 1e-4.
 WalkTotals integrate(const Walker& walker, const std::vector<Segment>& segments);
 
 /// Energy stored in the capacitors.
