@@ -117,10 +117,6 @@ LoadRoot newton_load(PeriodMap& map, const StateVector& start, double start_A, d
       }
     }
     const double short_V = required_V - walked.rail_min_V;
-    if (map.distance(root.state, mapped) < 1e-8 && std::abs(short_V) < 1e-8) {
-      root.found = true;
-      return root;
-    }
     std::array<std::array<double, kUnknowns>, kUnknowns> m{};
     std::array<double, kUnknowns> step{};
     for (int i = 0; i < n; ++i) {
@@ -131,6 +127,13 @@ LoadRoot newton_load(PeriodMap& map, const StateVector& start, double start_A, d
     }
     m[n][n] = walked.min_by_load;
     step[n] = short_V;
+    if (map.distance(root.state, mapped) < 1e-8 && std::abs(short_V) < 1e-8) {
+      std::array<double, kUnknowns> per_V{};
+      per_V[n] = 1;
+      root.found = solve_small<kUnknowns>(n + 1, m, per_V);
+      root.current_per_V = per_V[n];
+      return root;
+    }
     if (!solve_small<kUnknowns>(n + 1, m, step)) return root;
     for (int i = 0; i < n; ++i) root.state[i] += std::clamp(step[i], -1e4, 1e4);
     // The load stays positive and never more than halves or doubles at once.

@@ -4,6 +4,7 @@
 #include <cmath>
 
 #include "dropfront/circuit/available_current.hpp"
+#include "dropfront/circuit/greatest_power.hpp"
 #include "dropfront/scoring/clamp_power.hpp"
 #include "dropfront/scoring/power_peak.hpp"
 #include "dropfront/scoring/settled_rise.hpp"
@@ -62,12 +63,22 @@ double LeanCaseSolver::capability_A(const LeanSolution& solution) const {
   return stage.efficiency.value_or(0) * spare_A * solution.best_rail_V / stage.output_voltage_V;
 }
 
-/// Greatest (I - overhead)·rail_min(I) up to the available current. Looked for within `reach` of `near_A`
+/// Greatest (I - overhead)·rail_min(I) up to the available current: by its derivative along the rail voltage,
+/// else by its values alone. Those are looked for within `reach` of `near_A`
 /// first; where the peak lies at the edge of that neighbourhood, over the whole range. Cold starts: a start
 /// from a rail volts away takes longer.
 void LeanCaseSolver::find_power_peak(circuit::ElementValues values, double near_A, double reach,
                                      LeanSolution& found) {
   if (!(found.available_A > overhead_A_)) return;
+  values.rail_current_A = found.available_A;
+  const auto greatest = circuit::find_greatest_power(points_->design().arrangement->build(values),
+                                                     points_->required_V(), found.available_A, overhead_A_);
+  points_->count(greatest.steady_states);
+  if (greatest.usable) {
+    found.best_A = greatest.current_A;
+    found.best_rail_V = greatest.rail_V;
+    return;
+  }
   const auto power = [&](double load_A) {
     values.rail_current_A = load_A;
     const auto state = points_->steady(values, kRailOnly);

@@ -6,6 +6,7 @@ namespace dropfront::circuit {
 struct LoadRoot {
   bool found = false;
   double current_A = 0;
+  double current_per_V = 0;  ///< how the root moves with required_V
   StateVector state{};
   int passes = 0;
 };

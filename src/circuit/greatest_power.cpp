@@ -1,0 +1,107 @@
+#include "dropfront/circuit/greatest_power.hpp"
+
+#include <algorithm>
+#include <cmath>
+
+#include "dropfront/circuit/load_newton.hpp"
+#include "dropfront/circuit/orbit.hpp"
+
+namespace dropfront::circuit {
+
+namespace {
+
+constexpr double kTolerance = 2e-4;    // of the rail voltage
+constexpr double kAgreement_V = 1e-5;  // of Newton's root with the independent steady state
+
+struct Trial {
+  double rail_V = 0;
+  double power = 0;
+  double turn = 0;  // derivative of the power by the rail voltage
+  LoadRoot root;
+};
+
+class Search {
+ public:
+  Search(const Network& network, double overhead_A) : map_(network), overhead_A_(overhead_A) {
+    for (std::size_t k = 0; k < network.capacitors.size(); ++k) cold_[k] = network.capacitors[k].start_V;
+  }
+
+  bool orbit_at(double load_A, StateVector& state, double& rail_V) {
+    map_.set_load(load_A);
+    const Orbit orbit = find_orbit(map_, cold_, SteadyOptions{});
+    if (orbit.found) {
+      state = orbit.start;
+      rail_V = rail_extremes(map_).low;
+    }
+    return orbit.found;
+  }
+
+  bool try_at(double rail_V, const StateVector& from, double near_A, Trial& trial) {
+    trial.rail_V = rail_V;
+    trial.root = newton_load(map_, from, near_A, rail_V);
+    if (!trial.root.found) return false;
+    trial.power = (trial.root.current_A - overhead_A_) * rail_V;
+    trial.turn = (trial.root.current_A - overhead_A_) + rail_V * trial.root.current_per_V;
+    return true;
+  }
+
+ private:
+  PeriodMap map_;
+  double overhead_A_;
+  StateVector cold_{};
+};
+
+}  // namespace
+
+GreatestPower find_greatest_power(const Network& network, double floor_V, double floor_load_A,
+                                  double overhead_A) {
+  GreatestPower answer;
+  Search search(network, overhead_A);
+  const auto give_up = [&](const char* reason) {
+    answer.reason = reason;
+    return answer;
+  };
+  StateVector light{};
+  StateVector at_floor{};
+  double light_V = 0;
+  double floor_rail_V = 0;
+  const double lightest_A = std::max(overhead_A, 1e-3 * floor_load_A);
+  answer.steady_states = 3;
+  if (!search.orbit_at(lightest_A, light, light_V) ||
+      !search.orbit_at(floor_load_A, at_floor, floor_rail_V)) {
+    return give_up("no periodic steady state found");
+  }
+  Trial low, best;
+  if (!search.try_at(floor_V, at_floor, floor_load_A, low)) return give_up("no load holds the lowest rail");
+  best = low;
+  double high_V = light_V;
+  double high_turn = -low.root.current_A;  // beyond the overhead's own rail nothing is left
+  double high_memory = high_turn;
+  for (int k = 0; low.turn > 0 && high_V - low.rail_V > kTolerance * high_V && k < 40; ++k) {
+    const double width = high_V - low.rail_V;
+    double trial_V = low.rail_V + width * low.turn / (low.turn - high_memory);
+    if (k % 2 == 1) trial_V = low.rail_V + 0.5 * width;
+    trial_V = std::clamp(trial_V, low.rail_V + 0.02 * width, high_V - 0.02 * width);
+    Trial trial;
+    if (!search.try_at(trial_V, low.root.state, low.root.current_A, trial))
+      return give_up("a load was not found");
+    if (trial.power > best.power) best = trial;
+    if (trial.turn > 0) {
+      low = trial;
+    } else {
+      high_V = trial_V;
+      high_memory = trial.turn;
+    }
+  }
+  StateVector confirmed{};
+  double rail_V = 0;
+  if (!search.orbit_at(best.root.current_A, confirmed, rail_V))
+    return give_up("no periodic steady state found");
+  if (!(std::abs(rail_V - best.rail_V) <= kAgreement_V)) return give_up("the steady state disagrees");
+  answer.usable = true;
+  answer.current_A = best.root.current_A;
+  answer.rail_V = rail_V;
+  return answer;
+}
+
+}  // namespace dropfront::circuit
