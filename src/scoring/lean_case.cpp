@@ -119,12 +119,16 @@ LeanSolution LeanCaseSolver::solve(const LeanCase& where, const LeanSolution* ne
   SettledRise settled(kRiseTolerance_K);
   for (int pass = 0; pass < kMostRisePasses; ++pass) {
     values = points_->values(what, found.rises, where.ambient_degC);
-    const auto answer = circuit::find_available_current(wiring.build, values, points_->required_V());
+    const auto* near = found.available.usable ? &found.available
+                       : neighbour            ? &neighbour->available
+                                              : nullptr;
+    const auto answer = circuit::find_available_current(wiring.build, values, points_->required_V(), near);
     points_->count(answer.steady_states);
     if (!answer.usable) {
       found.reason = answer.reason;
       return found;
     }
+    found.available = answer;
     found.available_A = found.best_A = answer.current_A;
     found.best_rail_V = points_->required_V();
     if (stepping()) find_power_peak(values, near_A, reach, found);
@@ -136,6 +140,7 @@ LeanSolution LeanCaseSolver::solve(const LeanCase& where, const LeanSolution* ne
       found.reason = state.reason;
       return found;
     }
+    found.best_state = state.start;
     const auto implied = points_->rises_of(values, state, found.rises.junction_K);
     const bool calm = std::abs(implied.local_K - found.rises.local_K) <= kRiseTolerance_K;
     const double next_K = settled.next(found.rises.junction_K, implied.junction_K);
@@ -149,7 +154,7 @@ LeanSolution LeanCaseSolver::solve(const LeanCase& where, const LeanSolution* ne
 double LeanCaseSolver::rail_V(const LeanCase& where, const LeanSolution& known) {
   auto values = points_->values(recipe(where.ends), known.rises, where.ambient_degC);
   values.rail_current_A = known.best_A;
-  const auto state = points_->steady(values, kRailOnly);
+  const auto state = points_->steady(values, kRailOnly, &known.best_state);
   return state.usable() ? state.rail_min_V : -1e9;
 }
 

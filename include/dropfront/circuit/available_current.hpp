@@ -18,9 +18,10 @@ struct AvailableCurrent {
 };
 
 /// `values.rail_current_A` is ignored; load_cutoff_V should be half of required_V. Tolerance: current to
-/// 1e-6 relative or 1 nA; the returned current is on the passing side (rail_min_V >= required_V - 1e-7 V).
-/// `ceiling_A` is an upper bound to start from (charge balance), 0: computed here.
+/// 1e-6 relative or 1 nA; the returned current is on the passing side (rail_min_V >= required_V - 1e-6 V).
+/// `near`: the answer at slightly other values, or null. Newton then starts there and only its answer is
+/// confirmed; without it a lighter load is tried too where the rail need not be monotone (bridges).
 AvailableCurrent find_available_current(Network (*build)(const ElementValues&), ElementValues values,
-                                        double required_V, double ceiling_A = 0);
+                                        double required_V, const AvailableCurrent* near = nullptr);
 
 }  // namespace dropfront::circuit

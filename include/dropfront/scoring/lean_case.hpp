@@ -1,6 +1,7 @@
 #pragma once
 #include <string>
 
+#include "dropfront/circuit/available_current.hpp"
 #include "dropfront/scoring/point_solver.hpp"
 
 namespace dropfront::scoring {
@@ -31,6 +32,8 @@ struct LeanSolution {
   double available_A = 0;  ///< largest rail load with rail minimum >= V_required
   double best_A = 0;       ///< rail load of greatest output: available_A, or lower for a power law
   double best_rail_V = 0;  ///< rail minimum there (V_required, or the power law's rail)
+  circuit::AvailableCurrent available;  ///< in full, to start neighbouring cases from
+  circuit::StateVector best_state{};    ///< capacitor voltages at best_A, likewise
 };
 
 /// Solves single cases of the lean corner: low flat-topped mains, C min, low clamp curve, greatest drops.
