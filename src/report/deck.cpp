@@ -12,13 +12,12 @@
 namespace dropfront::report {
 namespace {
 
-constexpr double kJunctionShare = 0.01;         // emission coefficient
+constexpr double kJunctionShare = 0.02;         // emission coefficient
 constexpr double kJunctionSaturation_A = 1e-9;  // its reverse current: below any leakage that matters
 constexpr double kThermal_V = 0.025864186;      // kT/q at 27 degC, the simulator's own temperature
 constexpr double kJunctionReference_A = 1e-3;   // where the smooth curve meets the piecewise-linear one
-// Without it a bridge whose diodes are all off hangs on the leak alone, and some runs stop for want of a time
-// step.
-constexpr double kJunctionCapacitance_F = 5e-12;
+// Without it a bridge whose diodes are all off hangs on the leak alone and some runs end for want of a step.
+constexpr double kJunctionCapacitance_F = 2e-11;
 
 constexpr std::array<std::string_view, static_cast<int>(circuit::Owner::count)> kOwnerNames{
     "line",    "series resistor", "dropper",       "discharge chain",
@@ -176,7 +175,7 @@ void write_run(Deck& deck, const circuit::Network& network, const DeckOptions& o
   const double step_s = options.max_step_periods * period_s;
   // Vectors are kept from a little ahead of the first window only: long runs stay small in memory.
   const double keep_s = std::max(0.0, from_s - window_s - 10 * step_s);
-  deck.line(".options method=gear reltol={} abstol=1e-9 vntol=1e-6", options.relative_tolerance);
+  deck.line(".options method=gear reltol={} abstol=1e-8 vntol=1e-5", options.relative_tolerance);
   deck.line(".tran {} {} {} {} uic", step_s, stop_s, keep_s, step_s);
   const auto measure = [&](std::string_view name, std::string_view what, std::string_view vector) {
     deck.line(".measure tran {} {} {} from={} to={}", name, what, vector, from_s, stop_s);

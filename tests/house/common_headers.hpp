@@ -1,4 +1,5 @@
-// Read once by the second compiler before it checks every source: it would otherwise spend half its time here.
+// Read once by the second compiler before it checks every source: it would otherwise spend half its time
+// here.
 #pragma once
 #include <fmt/format.h>
 

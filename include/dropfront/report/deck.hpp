@@ -8,7 +8,7 @@ namespace dropfront::report {
 
 /// How a piecewise-linear branch is written.
 enum class BranchForm {
-  smooth,  ///< near-ideal junction (IS 1 nA, N 0.01, CJO 5 pF) with RS = slope, in series with the threshold
+  smooth,  ///< near-ideal junction (IS 1 nA, N 0.02, CJO 20 pF) with RS = slope, in series with the threshold
   piecewise  ///< the exact curve, as a behavioural current source
 };
 
@@ -30,8 +30,8 @@ struct DeckOptions {
 /// (absent in runs too short). Pure: same arguments, same bytes. Elements are numbered from 1 in the
 /// network's order: R, C, D (smooth) or B (piecewise); node k of the network is n<k>, the neutral 0.
 ///
-/// Smooth junction: v = threshold + slope·i + n·Vt·ln(i / 1 mA), n·Vt = 0.26 mV at 27 °C; its 3.6 mV at 1 mA
-/// are taken off the threshold, so it lies within 2 mV of the piecewise-linear curve between 1 uA and 1 A.
+/// Smooth junction: v = threshold + slope·i + n·Vt·ln(i / 1 mA), n·Vt = 0.52 mV at 27 °C; its 7 mV at 1 mA
+/// are taken off the threshold, so it lies within 4 mV of the piecewise-linear curve between 1 uA and 1 A.
 /// Valid: slopes > 0, resistances > 0 (an infinite one is left out). The load's cut-off needs cutoff_V > 0,
 /// else the current is constant at any voltage.
 std::string make_deck(const circuit::Network& network, const std::string& title,
