@@ -5,7 +5,7 @@
 #include <set>
 
 #include "dropfront/search/neighbours.hpp"
-#include "dropfront/search/prospect.hpp"
+#include "dropfront/search/prospects.hpp"
 #include "dropfront/search/spread_order.hpp"
 
 namespace dropfront::search {
@@ -13,9 +13,9 @@ namespace {
 
 class Closer {
  public:
-  Closer(Session& session, CandidateQueue& queue)
+  Closer(Session& session, Prospects& prospects)
       : session_(session),
-        queue_(queue),
+        prospects_(prospects),
         singles_(session.evaluator.objective_count()),
         pairs_(session.evaluator.objective_count()) {
     for (const auto& member : session.ledger.front().entries())
@@ -24,13 +24,15 @@ class Closer {
 
   bool run() {
     while (!session_.ended() && session_.may_evaluate()) {
-      while (queue_.promising() < evaluation_batch && take_up_singles()) {
+      // Looks are cheap beside evaluations: new members are taken up at once, and more as long as the queue
+      // holds too little of promise.
+      while (take_up_singles() && prospects_.promising() < evaluation_batch) {
       }
-      if (queue_.promising() == 0 && !take_up_pairs() && queue_.empty()) break;
+      if (prospects_.promising() == 0 && !take_up_pairs() && prospects_.empty()) break;
       evaluate_batch();
       session_.report("close", progress());
     }
-    return !session_.ended() && queue_.empty() && queue_.left_out() == 0 && !session_.looks_refused &&
+    return !session_.ended() && prospects_.empty() && prospects_.left_out() == 0 && !session_.looks_refused &&
            singles_.empty();
   }
 
@@ -42,9 +44,7 @@ class Closer {
   }
 
   void evaluate_batch() {
-    const auto choices = queue_.pop(evaluation_batch, session_.ledger.front(), session_.plan.reach);
-    for (const auto& rejected : queue_.take_rejected())
-      session_.ledger.pass_over(rejected.choice, rejected.objectives);
+    const auto choices = prospects_.take(evaluation_batch);
     for (const Merged& merged : session_.evaluate(choices)) {
       for (std::int64_t tag : merged.entered.removed) {
         singles_.remove(tag);
@@ -61,7 +61,7 @@ class Closer {
       const std::int64_t tag = order.pick();
       if (tag < 0) break;
       const Candidate& member = session_.ledger.compliant()[tag];
-      parents.push_back(Parent{member.choice, member.evaluation.objectives, 0});
+      parents.push_back(Parent{member.choice, session_.quantities_of(member.evaluation), 0});
     }
     return parents;
   }
@@ -69,12 +69,10 @@ class Closer {
   // While nothing complies: the designs closest to complying.
   std::vector<Parent> broken() {
     std::vector<Parent> parents;
-    const std::size_t m = static_cast<std::size_t>(session_.evaluator.objective_count());
     for (const auto& entry : session_.ledger.nearest_broken().entries()) {
       if (parents.size() == members_a_round) break;
       if (!broken_taken_.insert(entry.second).second) continue;
-      parents.push_back(Parent{entry.second, std::vector<double>(m, std::numeric_limits<double>::quiet_NaN()),
-                               entry.first[0]});
+      parents.push_back(Parent{entry.second, {}, entry.first[0]});
     }
     return parents;
   }
@@ -110,7 +108,7 @@ class Closer {
         choices.push_back(std::move(choice));
         made_from.push_back(p);
       }
-    prospect(session_, queue_, parents, choices, made_from);
+    prospects_.add(parents, choices, made_from);
     return !parents.empty();
   }
 
@@ -124,13 +122,13 @@ class Closer {
   }
 
   Session& session_;
-  CandidateQueue& queue_;
+  Prospects& prospects_;
   SpreadOrder singles_, pairs_;
   std::set<Choice> broken_taken_;
 };
 
 }  // namespace
 
-bool close(Session& session, CandidateQueue& queue) { return Closer(session, queue).run(); }
+bool close(Session& session, Prospects& prospects) { return Closer(session, prospects).run(); }
 
 }  // namespace dropfront::search

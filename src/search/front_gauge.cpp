@@ -7,12 +7,13 @@
 
 namespace dropfront::search {
 
-FrontGauge::FrontGauge(const ParetoArchive& front) : objectives_(front.resolution().size()) {
+FrontGauge::FrontGauge(const ParetoArchive& front, const std::vector<double>& least_extent)
+    : objectives_(front.resolution().size()) {
   ObjectiveRange range(static_cast<int>(objectives_));
   for (const auto& member : front.entries())
     if (member.alive) range.take(member.objectives);
   for (std::size_t k = 0; k < objectives_; ++k)
-    extent_.push_back(std::max(range.extent(static_cast<int>(k)), front.resolution()[k]));
+    extent_.push_back(std::max({range.extent(static_cast<int>(k)), front.resolution()[k], least_extent[k]}));
   for (const auto& member : front.entries())
     if (member.alive)
       for (std::size_t k = 0; k < objectives_; ++k) members_.push_back(member.objectives[k] / extent_[k]);

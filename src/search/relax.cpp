@@ -68,8 +68,13 @@ class Relaxer {
       for (const RelaxedDesign& design : log) {
         ++session_.ledger.counts().relaxed;
         // Far outside the limits objectives may be stand-ins.
-        if (design.violation < 1)
-          session_.model.add(session_.region_of(design.categories), design.position, design.objectives);
+        if (!(design.violation < 1)) continue;
+        if (design.violation == 0) session_.compliant_range.take(design.objectives);
+        Evaluation learnt;
+        learnt.objectives = design.objectives;
+        learnt.headroom = design.headroom;
+        session_.model.add(session_.region_of(design.categories), design.position,
+                           session_.quantities_of(learnt));
       }
     measure();
     result.range = range_;
@@ -93,6 +98,7 @@ class Relaxer {
     for (double x : e.objectives)
       if (!std::isfinite(x)) design.violation = penalty_cap;
     design.objectives = std::move(e.objectives);
+    design.headroom = std::move(e.headroom);
     return design;
   }
 

@@ -5,7 +5,7 @@
 
 #include "dropfront/search/close.hpp"
 #include "dropfront/search/enumerate.hpp"
-#include "dropfront/search/prospect.hpp"
+#include "dropfront/search/prospects.hpp"
 #include "dropfront/search/rank.hpp"
 #include "dropfront/search/relax.hpp"
 #include "dropfront/search/sequence.hpp"
@@ -14,10 +14,10 @@
 namespace dropfront::search {
 namespace {
 
-constexpr std::size_t scored_an_optimum = 16;
+constexpr std::size_t scored_an_optimum = 4;
 
 // Stages relax and snap: the first designs to score, and all others looked at on the way into the queue.
-void relax_and_snap(Session& session, CandidateQueue& queue) {
+void relax_and_snap(Session& session, Prospects& queue) {
   session.report("relax", 0);
   const Relaxation relaxation = relax(session);
   session.report("snap", 0);
@@ -40,14 +40,13 @@ void relax_and_snap(Session& session, CandidateQueue& queue) {
     made_from.insert(made_from.end(), snapped[i].size() - std::min(scored_an_optimum, snapped[i].size()), i);
   for (std::size_t i = 0; i < snapped.size(); ++i)
     if (!snapped[i].empty()) parents[i].choice = snapped[i].front();
-  prospect(session, queue, parents, rest, made_from);
+  queue.add(parents, rest, made_from);
 }
 
 // Designs spread evenly over the whole space, so that no corner of it goes unseen.
-void scatter(Session& session, CandidateQueue& queue) {
+void scatter(Session& session, Prospects& queue) {
   const std::int64_t count = std::min({session.plan.evaluations / 10, session.plan.looks / 10}) + 1;
   const int slots = static_cast<int>(session.space.slots.size());
-  const std::size_t m = static_cast<std::size_t>(session.evaluator.objective_count());
   std::vector<Choice> choices;
   std::vector<Parent> parents;
   std::vector<std::size_t> made_from;
@@ -58,10 +57,10 @@ void scatter(Session& session, CandidateQueue& queue) {
       choice[s] = static_cast<std::int32_t>(
           std::min(point[s] * session.space.slots[s].size, session.space.slots[s].size - 1.0));
     made_from.push_back(parents.size());
-    parents.push_back(Parent{choice, std::vector<double>(m, std::numeric_limits<double>::quiet_NaN()), 0});
+    parents.push_back(Parent{choice, {}, 0});
     choices.push_back(std::move(choice));
   }
-  prospect(session, queue, parents, choices, made_from);
+  queue.add(parents, choices, made_from);
 }
 
 }  // namespace
@@ -73,8 +72,11 @@ SearchOutcome run_search(const Evaluator& evaluator, const SearchOptions& option
     outcome.exhaustive = enumerate(session);
     outcome.closed = outcome.exhaustive;
   } else if (session.space.size() >= 1) {
-    CandidateQueue queue(session.codec, evaluator.objective_count());
+    Prospects queue(session);
     if (options.switches.relax && !session.axes.empty()) relax_and_snap(session, queue);
+    // Once the closing has come to its end, designs from all over the space are looked at, by then with good
+    // models: those that promise something are closed in turn.
+    if (session.ledger.front().size() > 0) close(session, queue);
     scatter(session, queue);
     outcome.closed = close(session, queue);
   }

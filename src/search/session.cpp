@@ -1,8 +1,16 @@
 #include "dropfront/search/session.hpp"
 
 #include <algorithm>
+#include <cmath>
+#include <limits>
 
 namespace dropfront::search {
+namespace {
+
+// Stands for the headroom of a check that holds when the evaluator does not tell it.
+constexpr double unknown_headroom = 0.05;
+
+}  // namespace
 
 Session::Session(const Evaluator& the_evaluator, const SearchOptions& the_options)
     : evaluator(the_evaluator),
@@ -13,10 +21,13 @@ Session::Session(const Evaluator& the_evaluator, const SearchOptions& the_option
       codec(space),
       workers(the_options.threads),
       ledger(the_evaluator),
-      model(static_cast<int>(axes.size()), the_evaluator.objective_count()),
+      model(static_cast<int>(axes.size()),
+            the_evaluator.objective_count() + static_cast<int>(the_evaluator.check_names().size())),
       record(space),
+      compliant_range(the_evaluator.objective_count()),
       seen_(codec),
-      categories_(category_slots(space)) {
+      categories_(category_slots(space)),
+      broken_in_evaluation_(the_evaluator.check_names().size()) {
   if (options.time_s) {
     using Clock = std::chrono::steady_clock;
     deadline_ = Clock::now() +
@@ -55,9 +66,42 @@ std::vector<Looked> Session::look_new(const std::vector<Choice>& choices) {
   return alive;
 }
 
+std::vector<double> Session::quantities_of(const Evaluation& evaluation) const {
+  std::vector<double> quantities = evaluation.objectives;
+  const std::size_t checks = evaluator.check_names().size();
+  if (evaluation.headroom.size() == checks)
+    // Far from its limit the exact figure of a headroom says little and would only bend the fit.
+    for (double h : evaluation.headroom) quantities.push_back(std::isnan(h) ? h : std::clamp(h, -1.0, 1.0));
+  else if (evaluation.complete && evaluation.outcome == Outcome::compliant)
+    quantities.insert(quantities.end(), checks, unknown_headroom);
+  quantities.resize(evaluation.objectives.size() + checks, std::numeric_limits<double>::quiet_NaN());
+  if (evaluation.headroom.empty())
+    for (std::size_t i = 0; i < evaluation.broken.size(); ++i)
+      quantities[evaluation.objectives.size() + evaluation.broken[i]] =
+          -std::min(evaluation.shortfall[i], 1.0);
+  return quantities;
+}
+
 void Session::learn(const Choice& choice, const Evaluation& evaluation) {
   record.note(choice, evaluation.outcome == Outcome::breaks_limits);
-  model.add(region_of(choice), position_of(choice), evaluation.objectives);
+  model.add(region_of(choice), position_of(choice), quantities_of(evaluation));
+  if (evaluation.outcome == Outcome::compliant) compliant_range.take(evaluation.objectives);
+  for (std::int16_t check : evaluation.broken) ++broken_in_evaluation_[check];
+}
+
+FrontGauge Session::gauge() const {
+  std::vector<double> least(evaluator.objective_count(), 0.0);
+  if (!compliant_range.empty())
+    for (std::size_t k = 0; k < least.size(); ++k)
+      least[k] = 0.1 * compliant_range.extent(static_cast<int>(k));
+  return FrontGauge(ledger.front(), least);
+}
+
+std::vector<int> Session::telling_checks() const {
+  std::vector<int> checks;
+  for (std::size_t c = 0; c < broken_in_evaluation_.size(); ++c)
+    if (broken_in_evaluation_[c] >= 5) checks.push_back(static_cast<int>(c));
+  return checks;
 }
 
 std::vector<Merged> Session::evaluate(const std::vector<Choice>& choices) {

@@ -1,6 +1,5 @@
 #pragma once
 #include <cstdint>
-#include <queue>
 #include <vector>
 
 #include "dropfront/search/choice_codec.hpp"
@@ -9,27 +8,43 @@
 
 namespace dropfront::search {
 
+/// What is guessed of a design before its evaluation.
+struct Guess {
+  std::vector<double> objectives;  ///< known ones as they are, the others optimistic
+  double chance = 0;               ///< that it holds its checks
+  double gain = 0;                 ///< on the front, see FrontGauge
+};
+
 /// Designs that were looked at and wait for their evaluation, most promising first. Packed: millions fit.
 class CandidateQueue {
  public:
   CandidateQueue(const ChoiceCodec& codec, int objectives) : codec_(&codec), objectives_(objectives) {}
 
-  /// `known`: objectives as the look told them, NaN where unknown; `predicted`: all of them, optimistic where
-  /// unknown; `chance`: that the design holds its checks.
-  void push(const Choice& choice, const std::vector<double>& known, const std::vector<double>& predicted,
-            double chance, double gain);
+  /// `known`: objectives as the look told them, NaN where unknown; `origin`: the caller's own number.
+  void push(const Choice& choice, const std::vector<double>& known, std::uint32_t origin, const Guess& guess);
 
-  /// Takes up to `count` designs. Designs that the front rejects by what is known, or that are predicted to
-  /// miss it by more than `reach`, fall out; the latter are counted in left_out().
-  std::vector<Choice> pop(int count, const ParetoArchive& front, double reach);
-
-  /// Counts a design that was not worth pushing.
-  void leave_out() { ++left_out_; }
+  /// Takes up to `count` designs. Designs that the front rejects by what is known, or that are guessed to
+  /// miss it by `reach` or more, fall out; the latter are counted in left_out().
+  std::vector<Choice> pop(int count, const ParetoArchive& front, const FrontGauge& gauge, double reach);
 
   bool empty() const { return heap_.empty(); }
   std::int64_t left_out() const { return left_out_; }
-  /// Designs that promised to reach the front when they were pushed and still wait.
+  /// Counts a design that was not worth pushing.
+  void leave_out() { ++left_out_; }
+  /// Designs that promised to reach the front when they were last guessed at and still wait.
   std::int64_t promising() const { return promising_; }
+
+  /// A waiting design, to guess anew.
+  struct Waiting {
+    Choice choice;
+    std::vector<double> known;
+    std::uint32_t origin;
+  };
+  std::size_t size() const { return heap_.size(); }
+  Waiting waiting(std::size_t i) const;
+  /// Replaces all guesses, in the order of waiting(); those that miss by `reach` fall out.
+  void reguess(const std::vector<Guess>& guesses, double reach);
+
   /// Designs the front rejected while they waited, for the ledger's filling list.
   struct Rejected {
     Choice choice;
@@ -46,13 +61,18 @@ class CandidateQueue {
     }
   };
   static double promise(double gain, double chance) { return gain > 0 ? gain * chance : gain / chance; }
+  Choice choice_at(std::size_t index) const;
+  std::vector<double> row(const std::vector<double>& table, std::size_t index) const;
+  void add(Item item);
+  Item take();
 
   const ChoiceCodec* codec_;
   int objectives_;
   std::vector<std::uint64_t> choices_;
+  std::vector<std::uint32_t> origins_;
   std::vector<float> chances_;
-  std::vector<double> known_, predicted_;
-  std::priority_queue<Item> heap_;
+  std::vector<double> known_, guessed_;
+  std::vector<Item> heap_;
   std::vector<Rejected> rejected_;
   std::int64_t left_out_ = 0;
   std::int64_t promising_ = 0;

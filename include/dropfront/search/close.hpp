@@ -1,5 +1,5 @@
 #pragma once
-#include "dropfront/search/candidate_queue.hpp"
+#include "dropfront/search/prospects.hpp"
 #include "dropfront/search/session.hpp"
 
 namespace dropfront::search {
@@ -9,6 +9,6 @@ namespace dropfront::search {
 /// then the two-part changes of coupled slots, and again. While nothing complies the designs that break
 /// limits least are taken up instead. Returns true when it came to that end by itself with no one-part change
 /// left out.
-bool close(Session& session, CandidateQueue& queue);
+bool close(Session& session, Prospects& queue);
 
 }  // namespace dropfront::search

@@ -23,7 +23,7 @@ struct EffortPlan {
 EffortPlan plan_for(const SearchOptions& options);
 
 /// Fixed batch sizes: part of the answer, since a batch sees the front as it was before.
-constexpr int evaluation_batch = 192;
+constexpr int evaluation_batch = 96;
 constexpr int members_a_round = 8;
 
 }  // namespace dropfront::search

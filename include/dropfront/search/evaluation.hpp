@@ -19,6 +19,9 @@ struct Evaluation {
   double violation = 0;              ///< graded and finite, 0 when compliant
   std::vector<std::int16_t> broken;  ///< indices into the problem's check names that failed
   std::vector<double> shortfall;     ///< relative shortfall, one per entry of `broken`
+  /// Relative headroom of every check of the problem's check names, negative where broken, NaN where not
+  /// made. May be left empty; given, it lets the search foresee which designs will break a check.
+  std::vector<double> headroom;
 };
 
 using Dominated = std::function<bool(const std::vector<double>& objectives)>;

@@ -8,7 +8,8 @@ namespace dropfront::search {
 /// Measures how far a vector lies before or behind a front, as a share of the front's extent.
 class FrontGauge {
  public:
-  explicit FrontGauge(const ParetoArchive& front);
+  /// `least_extent`: one an objective; keeps the share meaningful while the front is small.
+  FrontGauge(const ParetoArchive& front, const std::vector<double>& least_extent);
 
   /// min over members of max over objectives of (member - point) / extent. Positive: the point improves on
   /// every member in some objective by at least so much. Negative: how much it must improve to do so. 1 for

@@ -5,49 +5,54 @@
 
 namespace dropfront::search {
 
-/// Objectives near one place of one region, as polynomials of the positions on the axes.
+/// One quantity near one place, as a polynomial of the positions on the axes.
 class LocalFit {
  public:
-  bool usable() const { return usable_; }
-  /// Value of objective k at `position`; `spread` receives the fit's r.m.s. error (may be null). Positions
-  /// far outside the samples are read as the border of their neighbourhood.
-  double value(int k, const std::vector<double>& position, double* spread = nullptr) const;
+  bool usable() const { return !coefficients_.empty(); }
+  /// Value at `position`. Positions far outside the samples are read as the border of their neighbourhood.
+  double value(const std::vector<double>& position) const;
+  double spread() const { return spread_; }  ///< r.m.s. error of the fit over its samples
 
  private:
   friend class LocalModel;
-  std::vector<double> features(const std::vector<double>& position) const;
+  void features(const double* position, std::vector<double>& out) const;
 
-  bool usable_ = false;
   bool quadratic_ = false;
-  std::vector<double> centre_;
   double width_ = 1;
-  std::vector<std::vector<double>> coefficients_;  ///< one vector an objective
-  std::vector<double> spread_;
+  double spread_ = 0;
+  std::vector<double> centre_;
+  std::vector<double> coefficients_;
 };
 
-/// Learns objectives that only an evaluation tells from the evaluations made so far, to decide which designs
-/// to evaluate next. It orders work; it never decides what is on a front.
+/// Learns what only an evaluation tells (objectives, headrooms of checks) from the evaluations made so far,
+/// to decide which designs to evaluate next. It orders work; it never decides what is on a front.
 class LocalModel {
  public:
-  LocalModel(int axes, int objectives) : axes_(axes), objectives_(objectives) {}
+  LocalModel(int axes, int quantities) : axes_(axes), quantities_(quantities) {}
 
-  /// One sample; ignored unless all objectives are finite. Call from one thread, in a fixed order.
-  void add(std::int64_t region, const std::vector<double>& position, const std::vector<double>& objectives);
+  /// One sample; quantities that are not finite are unknown. Call from one thread, in a fixed order.
+  void add(std::int64_t region, const std::vector<double>& position, const std::vector<double>& quantities);
 
-  /// Weighted least squares about `centre` (Gaussian weights; the width grows from 0.15 of the axes until
-  /// enough samples count; of those the nearest 1,500), slopes slightly damped. Not usable with fewer samples
-  /// than coefficients.
-  LocalFit fit(std::int64_t region, const std::vector<double>& centre) const;
+  /// Fits for the `wanted` quantities about `centre`, in that order: weighted least squares (Gaussian
+  /// weights; the width grows from 0.15 of the axes until enough samples count; at most the nearest 800),
+  /// slopes damped. Not usable with fewer than three samples.
+  std::vector<LocalFit> fit(std::int64_t region, const std::vector<double>& centre,
+                            const std::vector<int>& wanted) const;
 
  private:
   struct Samples {
     std::vector<double> positions;   ///< axes_ a sample
-    std::vector<double> objectives;  ///< objectives_ a sample
+    std::vector<double> quantities;  ///< quantities_ a sample
   };
-  bool fit_width(const Samples& samples, LocalFit& fit) const;
+  struct Near {
+    double square;  ///< squared distance
+    std::size_t sample;
+  };
+  LocalFit fit_one(const Samples& samples, const std::vector<Near>& near, const std::vector<double>& centre,
+                   int quantity) const;
 
   int axes_;
-  int objectives_;
+  int quantities_;
   std::map<std::int64_t, Samples> regions_;
 };
 

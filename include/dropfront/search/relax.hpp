@@ -13,6 +13,7 @@ struct RelaxedDesign {
   std::vector<double> position;
   std::vector<double> objectives;
   double violation = 0;
+  std::vector<double> headroom;  ///< as in Evaluation
 };
 
 /// The best relaxed design for one aim in one region.

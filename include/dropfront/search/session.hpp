@@ -4,9 +4,11 @@
 #include <string>
 #include <vector>
 
+#include "dropfront/search/achievement.hpp"
 #include "dropfront/search/axis.hpp"
 #include "dropfront/search/choice_codec.hpp"
 #include "dropfront/search/effort.hpp"
+#include "dropfront/search/front_gauge.hpp"
 #include "dropfront/search/ledger.hpp"
 #include "dropfront/search/local_model.hpp"
 #include "dropfront/search/option_record.hpp"
@@ -67,6 +69,16 @@ class Session {
   /// Number of the choice's combination of category options.
   std::int64_t region_of(const Choice& choice) const;
 
+  /// What the model learns of an evaluation: objectives, then headrooms; NaN where unknown.
+  std::vector<double> quantities_of(const Evaluation& evaluation) const;
+  /// The front as it is, measured on at least a tenth of the extent of the compliant designs seen so far,
+  /// relaxed ones included.
+  FrontGauge gauge() const;
+  ObjectiveRange compliant_range;
+
+  /// Checks that evaluations have broken often enough to be worth foreseeing.
+  std::vector<int> telling_checks() const;
+
   bool looks_refused = false;  ///< the budget kept a design from being looked at
   bool pairs_refused = false;  ///< the budget kept two-part changes from being made
 
@@ -75,6 +87,7 @@ class Session {
 
   ChoiceSet seen_;
   std::vector<int> categories_;
+  std::vector<std::int64_t> broken_in_evaluation_;
   std::int64_t evaluations_ = 0;
   std::atomic<bool> halted_{false};
   std::chrono::steady_clock::time_point deadline_;

@@ -1,0 +1,38 @@
+#pragma once
+#include <cstdint>
+#include <vector>
+
+#include "dropfront/search/candidate_queue.hpp"
+#include "dropfront/search/prospector.hpp"
+#include "dropfront/search/session.hpp"
+
+namespace dropfront::search {
+
+/// The designs under consideration: looked at, guessed at, waiting in order of promise.
+class Prospects {
+ public:
+  explicit Prospects(Session& session)
+      : session_(session), queue_(session.codec, session.evaluator.objective_count()) {}
+
+  /// Looks at designs and queues those that stay in play. `made_from[i]`: index into `parents` of choice i.
+  void add(const std::vector<Parent>& parents, const std::vector<Choice>& choices,
+           const std::vector<std::size_t>& made_from);
+
+  /// Takes the most promising designs. Guesses are made anew each time the evaluations have grown by a
+  /// quarter.
+  std::vector<Choice> take(int count);
+
+  bool empty() const { return queue_.empty(); }
+  std::int64_t promising() const { return queue_.promising(); }
+  std::int64_t left_out() const { return queue_.left_out(); }
+
+ private:
+  void reguess();
+
+  Session& session_;
+  CandidateQueue queue_;
+  std::vector<Parent> parents_;  ///< of all designs ever queued
+  std::int64_t guessed_at_ = 0;  ///< evaluations at the last reguess
+};
+
+}  // namespace dropfront::search

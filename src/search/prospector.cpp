@@ -1,0 +1,102 @@
+#include "dropfront/search/prospector.hpp"
+
+#include <algorithm>
+#include <cmath>
+#include <limits>
+
+namespace dropfront::search {
+namespace {
+
+constexpr double least_chance = 1e-4;
+constexpr double least_spread = 0.02;
+
+}  // namespace
+
+Prospector::Prospector(Session& session, const std::vector<Parent>& parents)
+    : session_(session), parents_(parents), checks_(session.telling_checks()) {}
+
+void Prospector::fit(const std::vector<Offspring>& offspring) {
+  const int m = session_.evaluator.objective_count();
+  for (int k = 0; k < m; ++k)
+    if (std::any_of(offspring.begin(), offspring.end(),
+                    [k](const Offspring& design) { return std::isnan(design.known[k]); }))
+      wanted_.push_back(k);
+  for (int check : checks_) wanted_.push_back(m + check);
+  place_of_.assign(m + session_.evaluator.check_names().size(), -1);
+  for (std::size_t w = 0; w < wanted_.size(); ++w) place_of_[wanted_[w]] = static_cast<int>(w);
+  if (!session_.options.switches.predict || wanted_.empty()) return;
+  for (const Offspring& design : offspring) fits_[{design.parent, session_.region_of(design.choice)}].clear();
+  std::vector<std::pair<Key, std::vector<LocalFit>*>> tasks;
+  for (auto& entry : fits_) tasks.emplace_back(entry.first, &entry.second);
+  session_.workers.for_each(tasks.size(), 1, [&](std::size_t i) {
+    const auto position = session_.position_of(parents_[tasks[i].first.first].choice);
+    *tasks[i].second = session_.model.fit(tasks[i].first.second, position, wanted_);
+  });
+}
+
+const LocalFit* Prospector::fit_of(const std::vector<LocalFit>* fits, int quantity) const {
+  if (!fits || place_of_[quantity] < 0) return nullptr;
+  const LocalFit& fit = (*fits)[place_of_[quantity]];
+  return fit.usable() ? &fit : nullptr;
+}
+
+double Prospector::known(std::size_t parent, int quantity) const {
+  const auto& quantities = parents_[parent].quantities;
+  const std::size_t q = static_cast<std::size_t>(quantity);
+  return q < quantities.size() ? quantities[q] : std::numeric_limits<double>::quiet_NaN();
+}
+
+// The fit's value, shifted to agree with what is known of a parent of the same region.
+double Prospector::value(const LocalFit& fit, const Offspring& design, int quantity) const {
+  const Choice& from = parents_[design.parent].choice;
+  const double there = fit.value(session_.position_of(design.choice));
+  const double anchor = known(design.parent, quantity);
+  if (std::isnan(anchor) || session_.region_of(from) != session_.region_of(design.choice)) return there;
+  return there + anchor - fit.value(session_.position_of(from));
+}
+
+std::vector<double> Prospector::objectives(const Offspring& design, const std::vector<LocalFit>* fits) const {
+  std::vector<double> result = design.known;
+  for (std::size_t k = 0; k < result.size(); ++k) {
+    if (!std::isnan(result[k])) continue;
+    const int quantity = static_cast<int>(k);
+    const LocalFit* fit = fit_of(fits, quantity);
+    result[k] = fit ? value(*fit, design, quantity) - fit->spread() : known(design.parent, quantity);
+    // Nothing known at all: as good as it gets.
+    if (std::isnan(result[k])) result[k] = -1e300;
+  }
+  return result;
+}
+
+double Prospector::chance(const Offspring& design, const std::vector<LocalFit>* fits) const {
+  double product = session_.record.chance(parents_[design.parent].choice, design.choice);
+  for (int check : checks_) {
+    const int quantity = session_.evaluator.objective_count() + check;
+    const LocalFit* fit = fit_of(fits, quantity);
+    if (!fit) continue;
+    // Logistic in place of the normal distribution; 1.7 matches their slopes.
+    const double sigmas = value(*fit, design, quantity) / std::max(fit->spread(), least_spread);
+    product *= 1 / (1 + std::exp(-1.7 * sigmas));
+  }
+  return std::max(product, least_chance);
+}
+
+std::vector<Guess> Prospector::guess(const std::vector<Offspring>& offspring) {
+  fit(offspring);
+  const FrontGauge gauge = session_.gauge();
+  const double reach = session_.plan.reach;
+  std::vector<Guess> guesses(offspring.size());
+  session_.workers.for_each(offspring.size(), 16, [&](std::size_t i) {
+    const Offspring& design = offspring[i];
+    const auto found = fits_.find({design.parent, session_.region_of(design.choice)});
+    const std::vector<LocalFit>* fits = found == fits_.end() ? nullptr : &found->second;
+    Guess& guess = guesses[i];
+    guess.objectives = objectives(design, fits);
+    const double gain = gauge.gain(guess.objectives, -reach);
+    guess.gain = gain > 0 ? std::min(gain, 1.0) / (1 + parents_[design.parent].violation) : gain;
+    if (gain > -reach) guess.chance = chance(design, fits);
+  });
+  return guesses;
+}
+
+}  // namespace dropfront::search

@@ -1,0 +1,45 @@
+#include "dropfront/search/prospects.hpp"
+
+#include <algorithm>
+#include <utility>
+
+namespace dropfront::search {
+
+void Prospects::add(const std::vector<Parent>& parents, const std::vector<Choice>& choices,
+                    const std::vector<std::size_t>& made_from) {
+  const std::size_t first = parents_.size();
+  parents_.insert(parents_.end(), parents.begin(), parents.end());
+  std::vector<Offspring> offspring;
+  for (Looked& looked : session_.look_new(choices))
+    offspring.push_back(
+        Offspring{std::move(looked.choice), std::move(looked.objectives), first + made_from[looked.origin]});
+  const std::vector<Guess> guesses = Prospector(session_, parents_).guess(offspring);
+  for (std::size_t i = 0; i < offspring.size(); ++i) {
+    if (guesses[i].gain <= -session_.plan.reach)
+      queue_.leave_out();
+    else
+      queue_.push(offspring[i].choice, offspring[i].known, static_cast<std::uint32_t>(offspring[i].parent),
+                  guesses[i]);
+  }
+}
+
+void Prospects::reguess() {
+  std::vector<Offspring> offspring;
+  offspring.reserve(queue_.size());
+  for (std::size_t i = 0; i < queue_.size(); ++i) {
+    CandidateQueue::Waiting waiting = queue_.waiting(i);
+    offspring.push_back(Offspring{std::move(waiting.choice), std::move(waiting.known), waiting.origin});
+  }
+  queue_.reguess(Prospector(session_, parents_).guess(offspring), session_.plan.reach);
+  guessed_at_ = session_.evaluations();
+}
+
+std::vector<Choice> Prospects::take(int count) {
+  if (4 * session_.evaluations() > 5 * guessed_at_ + 4 * evaluation_batch) reguess();
+  auto choices = queue_.pop(count, session_.ledger.front(), session_.gauge(), session_.plan.reach);
+  for (const auto& rejected : queue_.take_rejected())
+    session_.ledger.pass_over(rejected.choice, rejected.objectives);
+  return choices;
+}
+
+}  // namespace dropfront::search
