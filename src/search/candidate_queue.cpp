@@ -67,24 +67,33 @@ std::vector<Choice> CandidateQueue::pop(int count, const ParetoArchive& front, c
   return result;
 }
 
-CandidateQueue::Waiting CandidateQueue::waiting(std::size_t i) const {
-  const std::size_t index = heap_[i].index;
-  return Waiting{choice_at(index), row(known_, index), origins_[index]};
+std::vector<CandidateQueue::Waiting> CandidateQueue::waiting(std::size_t most) {
+  const std::size_t count = std::min(most, heap_.size());
+  // Sorted best first, the array is no heap until reguess() has put it in order again.
+  std::sort(heap_.begin(), heap_.end(), [](const Item& a, const Item& b) { return b < a; });
+  std::vector<Waiting> result;
+  for (std::size_t i = 0; i < count; ++i) {
+    const std::size_t index = heap_[i].index;
+    result.push_back(Waiting{choice_at(index), row(known_, index), origins_[index]});
+  }
+  return result;
 }
 
 void CandidateQueue::reguess(const std::vector<Guess>& guesses, double reach) {
   const std::vector<Item> old = std::exchange(heap_, {});
   promising_ = 0;
   for (std::size_t i = 0; i < old.size(); ++i) {
-    if (guesses[i].gain <= -reach) {
-      ++left_out_;
-      continue;
-    }
     const std::size_t index = old[i].index;
-    chances_[index] = static_cast<float>(guesses[i].chance);
-    std::copy(guesses[i].objectives.begin(), guesses[i].objectives.end(),
-              guessed_.begin() + static_cast<std::ptrdiff_t>(index * objectives_));
-    add(Item{promise(guesses[i].gain, guesses[i].chance), old[i].index});
+    if (i >= guesses.size()) {
+      add(old[i]);
+    } else if (guesses[i].gain <= -reach) {
+      ++left_out_;
+    } else {
+      chances_[index] = static_cast<float>(guesses[i].chance);
+      std::copy(guesses[i].objectives.begin(), guesses[i].objectives.end(),
+                guessed_.begin() + static_cast<std::ptrdiff_t>(index * objectives_));
+      add(Item{promise(guesses[i].gain, guesses[i].chance), old[i].index});
+    }
   }
 }
 

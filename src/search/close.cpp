@@ -4,6 +4,8 @@
 #include <limits>
 #include <set>
 
+#include "dropfront/search/elites.hpp"
+#include "dropfront/search/mixture.hpp"
 #include "dropfront/search/neighbours.hpp"
 #include "dropfront/search/prospects.hpp"
 #include "dropfront/search/spread_order.hpp"
@@ -17,7 +19,11 @@ class Closer {
       : session_(session),
         prospects_(prospects),
         singles_(session.evaluator.objective_count()),
-        pairs_(session.evaluator.objective_count()) {
+        pairs_(session.evaluator.objective_count()),
+        elites_(session.evaluator.resolution()),
+        random_(session.options.seed) {
+    for (std::size_t tag = 0; tag < session.ledger.compliant().size(); ++tag)
+      admit(static_cast<std::int64_t>(tag));
     for (const auto& member : session.ledger.front().entries())
       if (member.alive) join(member.tag);
   }
@@ -28,6 +34,7 @@ class Closer {
       // holds too little of promise.
       while (take_up_singles() && prospects_.promising() < evaluation_batch) {
       }
+      take_up_mixtures();
       if (prospects_.promising() == 0 && !take_up_pairs() && prospects_.empty()) break;
       evaluate_batch();
       session_.report("close", progress());
@@ -43,6 +50,11 @@ class Closer {
     if (!session_.space.coupled.empty()) pairs_.add(tag, objectives);
   }
 
+  void admit(std::int64_t tag) {
+    const Candidate& design = session_.ledger.compliant()[tag];
+    elites_.add(session_.region_of(design.choice), design.evaluation.objectives, design.choice, tag);
+  }
+
   void evaluate_batch() {
     const auto choices = prospects_.take(evaluation_batch);
     for (const Merged& merged : session_.evaluate(choices)) {
@@ -52,6 +64,7 @@ class Closer {
       }
       // A newcomer may have been displaced by a later one of its own batch: add, then remove, in order.
       if (merged.entered.front) join(merged.entered.tag);
+      if (merged.entered.tag >= 0) admit(merged.entered.tag);
     }
   }
 
@@ -60,10 +73,14 @@ class Closer {
     for (int n = 0; n < members_a_round; ++n) {
       const std::int64_t tag = order.pick();
       if (tag < 0) break;
-      const Candidate& member = session_.ledger.compliant()[tag];
-      parents.push_back(Parent{member.choice, session_.quantities_of(member.evaluation), 0});
+      parents.push_back(parent(tag));
     }
     return parents;
+  }
+
+  Parent parent(std::int64_t tag) const {
+    const Candidate& member = session_.ledger.compliant()[tag];
+    return Parent{member.choice, session_.quantities_of(member.evaluation), 0, tag};
   }
 
   // While nothing complies: the designs closest to complying.
@@ -72,7 +89,7 @@ class Closer {
     for (const auto& entry : session_.ledger.nearest_broken().entries()) {
       if (parents.size() == members_a_round) break;
       if (!broken_taken_.insert(entry.second).second) continue;
-      parents.push_back(Parent{entry.second, {}, entry.first[0]});
+      parents.push_back(Parent{entry.second, {}, entry.first[0], -1});
     }
     return parents;
   }
@@ -99,6 +116,28 @@ class Closer {
     });
   }
 
+  // Mixtures of the best designs, of the front as it is or of any region.
+  void take_up_mixtures() {
+    if (elites_.empty() || session_.ended() || !mixing_allowed()) return;
+    const std::vector<std::int64_t> front = session_.ledger.front().tags();
+    const auto draw = [&] {
+      return random_.below(2) == 0 ? elites_.draw(random_) : front[random_.below(front.size())];
+    };
+    std::vector<Parent> parents;
+    std::vector<Choice> choices;
+    std::vector<std::size_t> made_from;
+    for (int n = 0; n < mixtures_a_round; ++n) {
+      parents.push_back(parent(draw()));
+      const Choice& second = session_.ledger.compliant()[draw()].choice;
+      choices.push_back(mix(session_.space, session_.axes, parents.back().choice, second, random_));
+      made_from.push_back(parents.size() - 1);
+    }
+    prospects_.add(parents, choices, made_from);
+  }
+
+  // One-part changes come first: half of the looks stays theirs.
+  bool mixing_allowed() const { return 2 * session_.ledger.counts().looked < session_.plan.looks; }
+
   template <class Changes>
   bool take_up(const std::vector<Parent>& parents, const Changes& changes) {
     std::vector<Choice> choices;
@@ -124,6 +163,8 @@ class Closer {
   Session& session_;
   Prospects& prospects_;
   SpreadOrder singles_, pairs_;
+  Elites elites_;
+  values::RandomStream random_;
   std::set<Choice> broken_taken_;
 };
 

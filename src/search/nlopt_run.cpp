@@ -40,7 +40,8 @@ class Recorder {
   void attach(nlopt::opt* optimiser) { optimiser_ = optimiser; }
 
   double evaluate(const double* x) {
-    const bool stopped = request_.stop && request_.stop->load(std::memory_order_relaxed);
+    const bool reached = !log_.best.empty() && log_.best_value <= request_.stop_value;
+    const bool stopped = reached || (request_.stop && request_.stop->load(std::memory_order_relaxed));
     // Some methods call on after a stop or past their limit: they get the penalty and no evaluation is made.
     if (parked_ || stopped || log_.evaluations >= request_.max_evaluations) {
       if (optimiser_) optimiser_->force_stop();
@@ -64,6 +65,7 @@ class Recorder {
     if (log_.best.empty() || value < log_.best_value) {
       log_.best = position_;
       log_.best_value = value;
+      if (value <= request_.stop_value && optimiser_) optimiser_->force_stop();
     }
     return value;
   }

@@ -156,6 +156,13 @@ bool ParetoArchive::insert(const std::vector<double>& objectives, const Choice& 
   return true;
 }
 
+std::vector<std::int64_t> ParetoArchive::tags() const {
+  std::vector<std::int64_t> result;
+  for (const Member& m : members_)
+    if (m.alive) result.push_back(m.tag);
+  return result;
+}
+
 std::vector<const ParetoArchive::Member*> ParetoArchive::sorted() const {
   std::vector<const Member*> result;
   for (const Member& m : members_)

@@ -9,6 +9,8 @@ namespace {
 
 constexpr double least_chance = 1e-4;
 constexpr double least_spread = 0.02;
+constexpr double cell = 0.2;    // of an axis
+constexpr double nearby = 0.2;  // of an axis: how far a parent can serve as anchor
 
 }  // namespace
 
@@ -25,13 +27,26 @@ void Prospector::fit(const std::vector<Offspring>& offspring) {
   place_of_.assign(m + session_.evaluator.check_names().size(), -1);
   for (std::size_t w = 0; w < wanted_.size(); ++w) place_of_[wanted_[w]] = static_cast<int>(w);
   if (!session_.options.switches.predict || wanted_.empty()) return;
-  for (const Offspring& design : offspring) fits_[{design.parent, session_.region_of(design.choice)}].clear();
-  std::vector<std::pair<Key, std::vector<LocalFit>*>> tasks;
-  for (auto& entry : fits_) tasks.emplace_back(entry.first, &entry.second);
+  for (const Offspring& design : offspring) fits_[cell_of(design.choice)].clear();
+  std::vector<std::pair<const Cell*, std::vector<LocalFit>*>> tasks;
+  for (auto& entry : fits_) tasks.emplace_back(&entry.first, &entry.second);
   session_.workers.for_each(tasks.size(), 1, [&](std::size_t i) {
-    const auto position = session_.position_of(parents_[tasks[i].first.first].choice);
-    *tasks[i].second = session_.model.fit(tasks[i].first.second, position, wanted_);
+    std::vector<double> centre;
+    for (int step : tasks[i].first->second) centre.push_back((step + 0.5) * cell);
+    std::vector<LocalFit>& fits = *tasks[i].second;
+    fits = session_.model.fit(tasks[i].first->first, centre, wanted_);
+    if (std::all_of(fits.begin(), fits.end(), [](const LocalFit& f) { return f.usable(); })) return;
+    const std::vector<LocalFit> others = session_.relaxed_model.fit(tasks[i].first->first, centre, wanted_);
+    for (std::size_t w = 0; w < fits.size(); ++w)
+      if (!fits[w].usable()) fits[w] = others[w];
   });
+}
+
+Prospector::Cell Prospector::cell_of(const Choice& choice) const {
+  Cell result{session_.region_of(choice), {}};
+  for (double x : session_.position_of(choice))
+    result.second.push_back(std::min(static_cast<int>(x / cell), static_cast<int>(1 / cell) - 1));
+  return result;
 }
 
 const LocalFit* Prospector::fit_of(const std::vector<LocalFit>* fits, int quantity) const {
@@ -46,13 +61,17 @@ double Prospector::known(std::size_t parent, int quantity) const {
   return q < quantities.size() ? quantities[q] : std::numeric_limits<double>::quiet_NaN();
 }
 
-// The fit's value, shifted to agree with what is known of a parent of the same region.
+// The fit's value, shifted to agree with what is known of a parent close by.
 double Prospector::value(const LocalFit& fit, const Offspring& design, int quantity) const {
   const Choice& from = parents_[design.parent].choice;
-  const double there = fit.value(session_.position_of(design.choice));
+  const std::vector<double> here = session_.position_of(design.choice);
+  const double value = fit.value(here);
   const double anchor = known(design.parent, quantity);
-  if (std::isnan(anchor) || session_.region_of(from) != session_.region_of(design.choice)) return there;
-  return there + anchor - fit.value(session_.position_of(from));
+  if (std::isnan(anchor) || session_.region_of(from) != session_.region_of(design.choice)) return value;
+  const std::vector<double> there = session_.position_of(from);
+  for (std::size_t a = 0; a < here.size(); ++a)
+    if (std::abs(here[a] - there[a]) > nearby) return value;
+  return value + anchor - fit.value(there);
 }
 
 std::vector<double> Prospector::objectives(const Offspring& design, const std::vector<LocalFit>* fits) const {
@@ -88,7 +107,7 @@ std::vector<Guess> Prospector::guess(const std::vector<Offspring>& offspring) {
   std::vector<Guess> guesses(offspring.size());
   session_.workers.for_each(offspring.size(), 16, [&](std::size_t i) {
     const Offspring& design = offspring[i];
-    const auto found = fits_.find({design.parent, session_.region_of(design.choice)});
+    const auto found = fits_.find(cell_of(design.choice));
     const std::vector<LocalFit>* fits = found == fits_.end() ? nullptr : &found->second;
     Guess& guess = guesses[i];
     guess.objectives = objectives(design, fits);

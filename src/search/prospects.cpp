@@ -4,15 +4,29 @@
 #include <utility>
 
 namespace dropfront::search {
+namespace {
+
+constexpr std::size_t most_reguessed = 10000;
+
+}  // namespace
 
 void Prospects::add(const std::vector<Parent>& parents, const std::vector<Choice>& choices,
                     const std::vector<std::size_t>& made_from) {
-  const std::size_t first = parents_.size();
-  parents_.insert(parents_.end(), parents.begin(), parents.end());
+  std::vector<std::size_t> places;
+  for (const Parent& parent : parents) {
+    if (parent.tag >= 0) {
+      const auto entry = place_of_.try_emplace(parent.tag, parents_.size());
+      places.push_back(entry.first->second);
+      if (!entry.second) continue;
+    } else {
+      places.push_back(parents_.size());
+    }
+    parents_.push_back(parent);
+  }
   std::vector<Offspring> offspring;
   for (Looked& looked : session_.look_new(choices))
     offspring.push_back(
-        Offspring{std::move(looked.choice), std::move(looked.objectives), first + made_from[looked.origin]});
+        Offspring{std::move(looked.choice), std::move(looked.objectives), places[made_from[looked.origin]]});
   const std::vector<Guess> guesses = Prospector(session_, parents_).guess(offspring);
   for (std::size_t i = 0; i < offspring.size(); ++i) {
     if (guesses[i].gain <= -session_.plan.reach)
@@ -25,11 +39,8 @@ void Prospects::add(const std::vector<Parent>& parents, const std::vector<Choice
 
 void Prospects::reguess() {
   std::vector<Offspring> offspring;
-  offspring.reserve(queue_.size());
-  for (std::size_t i = 0; i < queue_.size(); ++i) {
-    CandidateQueue::Waiting waiting = queue_.waiting(i);
+  for (CandidateQueue::Waiting& waiting : queue_.waiting(most_reguessed))
     offspring.push_back(Offspring{std::move(waiting.choice), std::move(waiting.known), waiting.origin});
-  }
   queue_.reguess(Prospector(session_, parents_).guess(offspring), session_.plan.reach);
   guessed_at_ = session_.evaluations();
 }

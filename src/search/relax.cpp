@@ -10,29 +10,16 @@
 namespace dropfront::search {
 namespace {
 
-using Log = std::vector<RelaxedDesign>;
-
 constexpr std::size_t regions_an_aim = 3;
+constexpr int sampled = 8;
 
+// One local run.
 struct Run {
   std::size_t region = 0;
   std::vector<double> weights;
   RelaxedDesign start;
-  Log log;
+  RelaxedLog log;
 };
-
-const RelaxedDesign* best_of(const Log& log, const std::vector<double>& weights,
-                             const ObjectiveRange& range) {
-  const RelaxedDesign* best = nullptr;
-  double least = 0;
-  for (const RelaxedDesign& design : log) {
-    const double value = achievement(design.objectives, design.violation, weights, range);
-    if (best && !(value < least)) continue;
-    best = &design;
-    least = value;
-  }
-  return best;
-}
 
 class Relaxer {
  public:
@@ -41,148 +28,180 @@ class Relaxer {
         dimensions_(static_cast<int>(session.axes.size())),
         regions_(regions_of(session.space, session.plan.most_regions)),
         logs_(regions_.size()),
-        range_(session.evaluator.objective_count()) {
+        range_(session.evaluator.objective_count()),
+        polish_evaluations_(8 * (dimensions_ + 1)) {
     for (const Axis& axis : session.axes) high_.push_back(axis.position.size() > 1 ? 1.0 : 0.0);
-    const int share = static_cast<int>(session.plan.relaxed / (4 * static_cast<long>(regions_.size())));
-    sampled_ = std::clamp(share, 4, 20 * (dimensions_ + 1));
   }
 
   Relaxation run() {
-    for_regions([this](std::size_t r) { sample(r); });
-    measure();
-    for_regions([this](std::size_t r) { search_globally(r); });
-    measure();
-    std::vector<Run> runs = plan_polish();
-    session_.workers.for_each(runs.size(), 1, [&](std::size_t i) { polish(runs[i]); });
-    Relaxation result{{}, range_};
-    for (Run& run : runs) {
-      const RelaxedDesign* best = best_of(run.log, run.weights, range_);
-      const bool started_better =
-          !best || achievement(run.start.objectives, run.start.violation, run.weights, range_) <
-                       achievement(best->objectives, best->violation, run.weights, range_);
-      result.optima.push_back(RelaxedOptimum{started_better ? run.start : *best, run.weights});
-      auto& log = logs_[run.region];
-      log.insert(log.end(), run.log.begin(), run.log.end());
+    const std::int64_t half = session_.plan.relaxed / 2;
+    session_.workers.for_each(regions_.size(), 1, [this](std::size_t r) { sample(r); });
+    // What the first regions leave of their share goes to those that need more.
+    for (std::int64_t allowed : {half - spent(), half + half / 2 - spent()}) {
+      std::vector<std::size_t> open;
+      for (std::size_t r = 0; r < regions_.size(); ++r)
+        if (!complies(logs_[r])) open.push_back(r);
+      const std::int64_t share = open.empty() ? 0 : allowed / static_cast<std::int64_t>(open.size());
+      session_.workers.for_each(open.size(), 1, [&](std::size_t i) { seek_compliance(open[i], share); });
     }
-    for (const Log& log : logs_)
-      for (const RelaxedDesign& design : log) {
-        ++session_.ledger.counts().relaxed;
-        // Far outside the limits objectives may be stand-ins.
-        if (!(design.violation < 1)) continue;
-        if (design.violation == 0) session_.compliant_range.take(design.objectives);
-        Evaluation learnt;
-        learnt.objectives = design.objectives;
-        learnt.headroom = design.headroom;
-        session_.model.add(session_.region_of(design.categories), design.position,
-                           session_.quantities_of(learnt));
-      }
+    measure();
+    Relaxation result{{}, {}, range_};
+    polish(balanced_runs(), result);
+    measure();
+    polish(aimed_runs(), result);
     measure();
     result.range = range_;
+    const std::int64_t share =
+        session_.plan.evaluations / (8 * static_cast<std::int64_t>(regions_.size())) + 1;
+    const auto wanted = static_cast<std::size_t>(std::min<std::int64_t>(session_.plan.starts, share));
+    for (const RelaxedLog& log : logs_) {
+      for (RelaxedDesign& design : spread_of(log, wanted, range_))
+        result.starts.push_back(RelaxedOptimum{std::move(design), balanced_aim(objectives())});
+      teach(log);
+    }
     return result;
   }
 
  private:
-  template <class Body>
-  void for_regions(const Body& body) {
-    session_.workers.for_each(regions_.size(), 1, [&](std::size_t r) {
-      if (!session_.ended()) body(r);
-    });
-  }
-
-  RelaxedDesign evaluate(std::size_t region, const std::vector<double>& position) const {
-    Evaluation e = session_.evaluator.relaxed(regions_[region], position);
-    RelaxedDesign design;
-    design.categories = regions_[region];
-    design.position = position;
-    design.violation = std::isfinite(e.violation) ? std::max(e.violation, 0.0) : penalty_cap;
-    for (double x : e.objectives)
-      if (!std::isfinite(x)) design.violation = penalty_cap;
-    design.objectives = std::move(e.objectives);
-    design.headroom = std::move(e.headroom);
-    return design;
-  }
+  int objectives() const { return session_.evaluator.objective_count(); }
 
   void sample(std::size_t region) {
-    for (int n = 0; n < sampled_; ++n) {
+    for (int n = 0; n < sampled && !session_.ended(); ++n) {
       std::vector<double> position = spread_point(n, dimensions_, n == 0 ? 0 : session_.options.seed);
       for (int k = 0; k < dimensions_; ++k) position[k] *= high_[k];
-      logs_[region].push_back(evaluate(region, position));
+      logs_[region].push_back(evaluate_relaxed(session_.evaluator, regions_[region], position));
     }
   }
 
-  NloptRequest request(int evaluations, std::uint64_t stream) const {
+  NloptRequest request(NloptMethod method, std::int64_t evaluations, std::uint64_t stream) const {
     NloptRequest r;
+    r.method = method;
     r.low.assign(dimensions_, 0.0);
     r.high = high_;
-    r.max_evaluations = evaluations;
+    r.max_evaluations = static_cast<int>(std::max<std::int64_t>(evaluations, 1));
     r.seed = session_.options.seed * 1000003 + stream;
     r.stop = &session_.halted();
     return r;
   }
 
-  BoxFunction logged(std::size_t region, const std::vector<double>& weights, Log& log) {
-    return [this, region, weights, &log](const std::vector<double>& position) {
+  static bool complies(const RelaxedLog& log) {
+    return std::any_of(log.begin(), log.end(), [](const RelaxedDesign& d) { return d.violation == 0; });
+  }
+
+  std::int64_t spent() const {
+    std::int64_t sum = 0;
+    for (const RelaxedLog& log : logs_) sum += static_cast<std::int64_t>(log.size());
+    return sum;
+  }
+
+  // First globally; where that has been tried in vain, locally from the best so far.
+  void seek_compliance(std::size_t region, std::int64_t share) {
+    if (session_.ended() || share < 1) return;
+    RelaxedLog& log = logs_[region];
+    const bool first = log.size() <= sampled;
+    NloptRequest r = request(first ? NloptMethod::direct_l : NloptMethod::sbplx, share, region);
+    r.stop_value = 0;
+    r.start = std::min_element(log.begin(), log.end(), [](const RelaxedDesign& a, const RelaxedDesign& b) {
+                return a.violation < b.violation;
+              })->position;
+    run_nlopt(r, [&](const std::vector<double>& position) {
       session_.ended();
-      log.push_back(evaluate(region, position));
-      return achievement(log.back().objectives, log.back().violation, weights, range_);
-    };
-  }
-
-  void search_globally(std::size_t region) {
-    const std::size_t m = static_cast<std::size_t>(session_.evaluator.objective_count());
-    const std::vector<double> balanced(m, 1.0 / static_cast<double>(m));
-    NloptRequest r = request(sampled_, region);
-    r.method = NloptMethod::direct_l;
-    run_nlopt(r, logged(region, balanced, logs_[region]));
-  }
-
-  void polish(Run& run) {
-    if (session_.ended()) return;
-    NloptRequest r = request(polish_evaluations_, 7919 + run.region);
-    r.method = NloptMethod::sbplx;
-    r.start = run.start.position;
-    run_nlopt(r, logged(run.region, run.weights, run.log));
+      log.push_back(evaluate_relaxed(session_.evaluator, regions_[region], position));
+      return log.back().violation;
+    });
   }
 
   // Scale of the objectives over what complies; over everything while nothing does.
   void measure() {
     for (bool complying : {true, false}) {
-      range_ = ObjectiveRange(session_.evaluator.objective_count());
-      for (const Log& log : logs_)
+      range_ = ObjectiveRange(objectives());
+      for (const RelaxedLog& log : logs_)
         for (const RelaxedDesign& d : log)
           if (!complying || d.violation == 0) range_.take(d.objectives);
       if (!range_.empty()) return;
     }
   }
 
-  std::vector<Run> plan_polish() {
-    std::vector<Run> runs;
-    for (const auto& weights : spread_aims(session_.evaluator.objective_count(), session_.plan.aims)) {
-      std::vector<std::pair<double, std::size_t>> order;
-      for (std::size_t r = 0; r < regions_.size(); ++r)
-        if (const RelaxedDesign* best = best_of(logs_[r], weights, range_))
-          order.emplace_back(achievement(best->objectives, best->violation, weights, range_), r);
-      std::sort(order.begin(), order.end());
-      if (order.size() > regions_an_aim) order.resize(regions_an_aim);
-      for (const auto& place : order)
-        runs.push_back(Run{place.second, weights, *best_of(logs_[place.second], weights, range_), {}});
+  // The region's run for an aim; regions without a complying design have none, unless no region has one.
+  std::vector<std::pair<double, Run>> runs_for(const std::vector<double>& weights) const {
+    std::vector<std::pair<double, Run>> runs;
+    for (bool complying : {true, false}) {
+      for (std::size_t r = 0; r < regions_.size(); ++r) {
+        const RelaxedDesign* best = best_of(logs_[r], weights, range_);
+        if (!best || (complying && best->violation > 0)) continue;
+        const double value = achievement(best->objectives, best->violation, weights, range_);
+        runs.emplace_back(value, Run{r, weights, *best, {}});
+      }
+      if (!runs.empty()) break;
     }
-    std::int64_t spent = 0;
-    for (const Log& log : logs_) spent += static_cast<std::int64_t>(log.size());
-    const std::int64_t left = std::max<std::int64_t>(session_.plan.relaxed - spent, 0);
-    const std::int64_t share = runs.empty() ? 0 : left / static_cast<std::int64_t>(runs.size());
-    polish_evaluations_ = static_cast<int>(std::clamp<std::int64_t>(share, 1, 40 * (dimensions_ + 1)));
+    std::stable_sort(runs.begin(), runs.end(),
+                     [](const auto& a, const auto& b) { return a.first < b.first; });
     return runs;
+  }
+
+  std::vector<Run> balanced_runs() const {
+    std::vector<Run> runs;
+    for (auto& entry : runs_for(balanced_aim(objectives()))) runs.push_back(std::move(entry.second));
+    return runs;
+  }
+
+  std::vector<Run> aimed_runs() const {
+    std::vector<Run> runs;
+    for (const auto& weights : spread_aims(objectives(), session_.plan.aims)) {
+      auto ordered = runs_for(weights);
+      if (ordered.size() > regions_an_aim) ordered.resize(regions_an_aim);
+      for (auto& entry : ordered) runs.push_back(std::move(entry.second));
+    }
+    return runs;
+  }
+
+  void polish(std::vector<Run> runs, Relaxation& result) {
+    const std::int64_t left = session_.plan.relaxed - spent();
+    const std::int64_t affordable = std::max<std::int64_t>(left / polish_evaluations_, 0);
+    if (static_cast<std::int64_t>(runs.size()) > affordable)
+      runs.erase(runs.begin() + static_cast<std::ptrdiff_t>(affordable), runs.end());
+    session_.workers.for_each(runs.size(), 1, [&](std::size_t i) { polish(runs[i]); });
+    for (Run& run : runs) {
+      RelaxedLog& log = logs_[run.region];
+      run.log.push_back(run.start);
+      result.optima.push_back(RelaxedOptimum{*best_of(run.log, run.weights, range_), run.weights});
+      run.log.pop_back();
+      log.insert(log.end(), run.log.begin(), run.log.end());
+    }
+  }
+
+  void polish(Run& run) {
+    if (session_.ended()) return;
+    NloptRequest r = request(NloptMethod::sbplx, polish_evaluations_, 7919 + run.region);
+    r.start = run.start.position;
+    run_nlopt(r, [&](const std::vector<double>& position) {
+      session_.ended();
+      run.log.push_back(evaluate_relaxed(session_.evaluator, regions_[run.region], position));
+      return achievement(run.log.back().objectives, run.log.back().violation, run.weights, range_);
+    });
+  }
+
+  void teach(const RelaxedLog& log) {
+    for (const RelaxedDesign& design : log) {
+      ++session_.ledger.counts().relaxed;
+      if (design.violation == 0) session_.compliant_range.take(design.objectives);
+      // Far outside the limits objectives may be stand-ins.
+      if (!(design.violation < 1)) continue;
+      Evaluation learnt;
+      learnt.objectives = design.objectives;
+      learnt.headroom = design.headroom;
+      session_.relaxed_model.add(session_.region_of(design.categories), design.position,
+                                 session_.quantities_of(learnt));
+    }
   }
 
   Session& session_;
   int dimensions_;
   std::vector<Choice> regions_;
-  std::vector<Log> logs_;
+  std::vector<RelaxedLog> logs_;  ///< one a region
   ObjectiveRange range_;
-  std::vector<double> high_;
-  int sampled_ = 0;
-  int polish_evaluations_ = 1;
+  std::int64_t polish_evaluations_;
+  std::vector<double> high_;  ///< 1, or 0 for an axis of one coordinate
 };
 
 }  // namespace

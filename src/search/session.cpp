@@ -23,6 +23,7 @@ Session::Session(const Evaluator& the_evaluator, const SearchOptions& the_option
       ledger(the_evaluator),
       model(static_cast<int>(axes.size()),
             the_evaluator.objective_count() + static_cast<int>(the_evaluator.check_names().size())),
+      relaxed_model(model),
       record(space),
       compliant_range(the_evaluator.objective_count()),
       seen_(codec),
@@ -121,7 +122,7 @@ std::vector<Merged> Session::evaluate(const std::vector<Choice>& choices) {
     for (std::size_t i = 0; i < count; ++i) {
       const Choice& choice = choices[start + i];
       learn(choice, results[i]);
-      merged.push_back(Merged{choice, ledger.merge(choice, results[i])});
+      merged.push_back(Merged{choice, ledger.merge(choice, results[i]), quantities_of(results[i])});
     }
     evaluations_ += static_cast<std::int64_t>(count);
     start += count;

@@ -2,89 +2,131 @@
 
 #include <algorithm>
 #include <cmath>
+#include <set>
 #include <utility>
 
 namespace dropfront::search {
 namespace {
 
-// How good a look is for an aim: violation first, then the weighted sum of what is known.
-std::pair<double, double> merit(const Session& session, const Choice& choice,
-                                const std::vector<double>& weights, const ObjectiveRange& range) {
-  const Evaluation look = session.evaluator.look(choice);
-  double sum = 0;
-  for (std::size_t k = 0; k < look.objectives.size(); ++k)
-    if (!std::isnan(look.objectives[k]))
-      sum += (weights[k] + 0.05) * range.scaled(static_cast<int>(k), look.objectives[k]);
-  double violation = look.violation;
-  if (look.outcome != Outcome::compliant) violation = std::max(violation, 1e-9);
-  return {violation, sum};
-}
+using Options = std::vector<std::int32_t>;
 
-std::vector<std::int32_t> all_options(int size) {
-  std::vector<std::int32_t> options(size);
-  for (int i = 0; i < size; ++i) options[i] = i;
-  return options;
-}
+constexpr double dear = 1.0;
+constexpr double middle = 0.75;
+constexpr double cheap = 0.0;
 
-}  // namespace
+class Snapper {
+ public:
+  Snapper(const Session& session, const RelaxedOptimum& optimum, const ObjectiveRange& range)
+      : session_(session),
+        optimum_(optimum),
+        range_(range),
+        here_(session.space.slots.size()),
+        near_(session.space.slots.size()) {
+    for (std::size_t a = 0; a < session.axes.size(); ++a) place(session.axes[a], optimum.design.position[a]);
+    for (std::size_t s = 0; s < here_.size(); ++s) {
+      if (!here_[s].empty()) continue;
+      const Slot& slot = session.space.slots[s];
+      for (std::int32_t option = 0; option < slot.size; ++option)
+        if (!slot.category || option == optimum.design.categories[s]) here_[s].push_back(option);
+      near_[s] = here_[s];
+    }
+  }
 
-std::vector<Choice> snap(const Session& session, const RelaxedOptimum& optimum, const ObjectiveRange& range) {
-  const Space& space = session.space;
-  Choice base = optimum.design.categories;
-  std::vector<std::vector<std::int32_t>> here(space.slots.size());  // options of the base design
-  std::vector<std::vector<std::int32_t>> near(space.slots.size());  // options tried one at a time
-  for (std::size_t a = 0; a < session.axes.size(); ++a) {
-    const Axis& axis = session.axes[a];
-    const std::vector<int> steps = axis.around(optimum.design.position[a]);
-    here[axis.slot].assign(axis.options[steps[0]].begin(), axis.options[steps[0]].end());
+  // The design with the option at this share of the way from the best look to the worst, in every slot.
+  Choice base(double share) const {
+    Choice choice;
+    for (const Options& options : here_) choice.push_back(options.front());
+    for (int pass = 0; pass < 2; ++pass)
+      for (std::size_t s = 0; s < here_.size(); ++s) {
+        if (here_[s].size() < 2) continue;
+        std::vector<std::pair<std::pair<double, double>, std::int32_t>> order;
+        for (std::int32_t option : here_[s]) {
+          choice[s] = option;
+          order.emplace_back(merit(choice), option);
+        }
+        std::sort(order.begin(), order.end());
+        // Options whose looks break a check come last and are no choice as long as others do not.
+        std::size_t sound = 0;
+        while (sound < order.size() && order[sound].first.first <= order[0].first.first) ++sound;
+        const auto at = static_cast<std::size_t>(share * static_cast<double>(sound - 1) + 0.5);
+        choice[s] = order[at].second;
+      }
+    return choice;
+  }
+
+  std::vector<Choice> around(const std::vector<Choice>& bases) const {
+    std::set<Choice> seen(bases.begin(), bases.end());
+    std::vector<Choice> result;
+    const auto offer = [&](Choice choice) {
+      if (seen.insert(choice).second) result.push_back(std::move(choice));
+    };
+    for (const Choice& from : bases) {
+      Choice below = from, above = from;
+      for (const Axis& axis : session_.axes) {
+        below[axis.slot] = near_[axis.slot].front();
+        above[axis.slot] = near_[axis.slot].back();
+      }
+      offer(below);
+      offer(above);
+      for (std::size_t s = 0; s < near_.size(); ++s)
+        for (std::int32_t option : near_[s]) {
+          Choice changed = from;
+          changed[s] = option;
+          offer(std::move(changed));
+        }
+    }
+    return result;
+  }
+
+ private:
+  void place(const Axis& axis, double position) {
+    const std::vector<int> steps = axis.around(position);
+    here_[axis.slot].assign(axis.options[steps[0]].begin(), axis.options[steps[0]].end());
     const int last = static_cast<int>(axis.position.size()) - 1;
     const auto ends = std::minmax_element(steps.begin(), steps.end());
     // On a hit both neighbours still count: the relaxed price law is not the list's.
-    const bool single = steps.size() == 1;
-    for (int step = std::max(0, *ends.first - single); step <= std::min(last, *ends.second + single); ++step)
-      near[axis.slot].insert(near[axis.slot].end(), axis.options[step].begin(), axis.options[step].end());
-    base[axis.slot] = here[axis.slot].front();
+    const bool hit = steps.size() == 1;
+    for (int step = std::max(0, *ends.first - hit); step <= std::min(last, *ends.second + hit); ++step)
+      near_[axis.slot].insert(near_[axis.slot].end(), axis.options[step].begin(), axis.options[step].end());
   }
-  for (std::size_t s = 0; s < space.slots.size(); ++s) {
-    if (!here[s].empty()) continue;
-    here[s] = space.slots[s].category ? std::vector<std::int32_t>{base[s]} : all_options(space.slots[s].size);
-    near[s] = here[s];
-  }
-  std::vector<std::pair<std::pair<double, double>, Choice>> others;
-  for (int pass = 0; pass < 2; ++pass)
-    for (std::size_t s = 0; s < space.slots.size(); ++s) {
-      if (here[s].size() < 2) continue;
-      std::vector<std::pair<std::pair<double, double>, std::int32_t>> tried;
-      for (std::int32_t option : here[s]) {
-        base[s] = option;
-        tried.emplace_back(merit(session, base, optimum.weights, range), option);
-        others.emplace_back(tried.back().first, base);
-      }
-      base[s] = std::min_element(tried.begin(), tried.end())->second;
-    }
 
-  const auto offer = [&](const Choice& choice) {
-    others.emplace_back(merit(session, choice, optimum.weights, range), choice);
-  };
-  Choice below = base;
-  Choice above = base;
-  for (std::size_t s = 0; s < space.slots.size(); ++s)
-    for (std::int32_t option : near[s]) {
-      Choice changed = base;
-      changed[s] = option;
-      offer(changed);
-    }
-  for (const Axis& axis : session.axes) {
-    below[axis.slot] = near[axis.slot].front();
-    above[axis.slot] = near[axis.slot].back();
+  // How good a look is for the aim: violation first, then the weighted sum of what is known.
+  std::pair<double, double> merit(const Choice& choice) const {
+    const Evaluation look = session_.evaluator.look(choice);
+    double sum = 0;
+    for (std::size_t k = 0; k < look.objectives.size(); ++k)
+      if (!std::isnan(look.objectives[k]))
+        sum += (optimum_.weights[k] + 0.05) * range_.scaled(static_cast<int>(k), look.objectives[k]);
+    const double violation = look.outcome == Outcome::compliant ? 0 : std::max(look.violation, 1e-9);
+    return {violation, sum};
   }
-  offer(below);
-  offer(above);
-  std::sort(others.begin(), others.end());
-  others.erase(std::unique(others.begin(), others.end()), others.end());
-  std::vector<Choice> result{base};
-  for (auto& other : others)
-    if (other.second != result.front()) result.push_back(std::move(other.second));
+
+  const Session& session_;
+  const RelaxedOptimum& optimum_;
+  const ObjectiveRange& range_;
+  std::vector<Options> here_;  ///< options of the bases, by slot
+  std::vector<Options> near_;  ///< options tried one at a time
+};
+
+}  // namespace
+
+Snapped snap(const Session& session, const RelaxedOptimum& optimum, const ObjectiveRange& range) {
+  const Snapper snapper(session, optimum, range);
+  Snapped result;
+  for (double share : {dear, middle, cheap}) {
+    Choice base = snapper.base(share);
+    if (std::find(result.bases.begin(), result.bases.end(), base) == result.bases.end())
+      result.bases.push_back(std::move(base));
+  }
+  result.around = snapper.around(result.bases);
+  return result;
+}
+
+Snapped snap_dear(const Session& session, const RelaxedOptimum& optimum, const ObjectiveRange& range) {
+  const Snapper snapper(session, optimum, range);
+  Snapped result;
+  result.bases.push_back(snapper.base(dear));
+  result.around = snapper.around(result.bases);
   return result;
 }
 

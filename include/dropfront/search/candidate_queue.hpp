@@ -40,9 +40,9 @@ class CandidateQueue {
     std::vector<double> known;
     std::uint32_t origin;
   };
-  std::size_t size() const { return heap_.size(); }
-  Waiting waiting(std::size_t i) const;
-  /// Replaces all guesses, in the order of waiting(); those that miss by `reach` fall out.
+  /// The most promising designs, up to `most`, in a fixed order.
+  std::vector<Waiting> waiting(std::size_t most);
+  /// New guesses for the designs that waiting() just gave, in its order; those that miss by `reach` fall out.
   void reguess(const std::vector<Guess>& guesses, double reach);
 
   /// Designs the front rejected while they waited, for the ledger's filling list.

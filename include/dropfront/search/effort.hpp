@@ -14,6 +14,7 @@ struct EffortPlan {
   std::int64_t exhaustive_limit;  ///< spaces up to this size are enumerated
   int aims;                       ///< weight vectors, at least
   int most_regions;               ///< combinations of category options relaxed, at most
+  int starts;                     ///< relaxed designs of each region that are snapped and scored, at most
   int pair_window;                ///< two-part changes: distinct neighbours on either side of each axis
   double reach;                   ///< designs predicted to miss the front by more than this share of its
                                   ///< extent are left out of the closing
@@ -25,5 +26,6 @@ EffortPlan plan_for(const SearchOptions& options);
 /// Fixed batch sizes: part of the answer, since a batch sees the front as it was before.
 constexpr int evaluation_batch = 96;
 constexpr int members_a_round = 8;
+constexpr int mixtures_a_round = 600;
 
 }  // namespace dropfront::search

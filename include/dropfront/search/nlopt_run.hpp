@@ -20,6 +20,7 @@ struct NloptRequest {
   int max_evaluations = 200;      ///< >= 1, never exceeded
   double x_tolerance = 1e-4;      ///< absolute, on every axis; > 0, since some methods freeze without one
   double initial_step = 0.1;      ///< local methods
+  double stop_value = -1e300;     ///< the run ends at the first value not above it
   std::uint64_t seed = 1;         ///< random methods
   const std::atomic<bool>* stop = nullptr;
 };

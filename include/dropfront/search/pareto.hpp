@@ -38,6 +38,7 @@ class ParetoArchive {
   bool rejects(const std::vector<double>& objectives, const Choice& choice) const;
 
   int size() const { return alive_; }
+  std::vector<std::int64_t> tags() const;  ///< of the members, in order of entry
   const std::vector<double>& resolution() const { return resolution_; }
 
   /// Members in order of raw objectives, then choice.

@@ -1,4 +1,5 @@
 #pragma once
+#include <cstdint>
 #include <map>
 #include <utility>
 #include <vector>
@@ -13,6 +14,7 @@ struct Parent {
   Choice choice;
   std::vector<double> quantities;  ///< objectives, then headrooms of checks (may end earlier); NaN: unknown
   double violation = 0;            ///< of a design that breaks limits, taken up while nothing complies
+  std::int64_t tag = -1;           ///< of a compliant design
 };
 
 /// A design that was looked at, and the index of the parent it was made from.
@@ -24,10 +26,11 @@ struct Offspring {
 
 /// Guesses what looks do not tell.
 ///
-/// Objectives: the local model of the design's region, anchored at the parent where that is the parent's
-/// region too, less its error (optimistic); without a usable model the parent's value. Chance to hold the
-/// checks: from the models of those headrooms that evaluations have broken before, and from the record of the
-/// options that differ from the parent's.
+/// Objectives: a local model of the design's region about its place (one fit for all designs in a cell of a
+/// grid over the axes), anchored at the parent where that lies in the same region and close by, less its
+/// error (optimistic); without a usable model the parent's value. Chance to hold the checks: from models of
+/// those headrooms that evaluations have found broken, and from the record of the options that differ from
+/// the parent's.
 class Prospector {
  public:
   Prospector(Session& session, const std::vector<Parent>& parents);
@@ -35,7 +38,8 @@ class Prospector {
   std::vector<Guess> guess(const std::vector<Offspring>& offspring);
 
  private:
-  using Key = std::pair<std::size_t, std::int64_t>;  // parent, region
+  using Cell = std::pair<std::int64_t, std::vector<int>>;  // region, position in steps of the grid
+  Cell cell_of(const Choice& choice) const;
   void fit(const std::vector<Offspring>& offspring);
   std::vector<double> objectives(const Offspring& design, const std::vector<LocalFit>* fits) const;
   double chance(const Offspring& design, const std::vector<LocalFit>* fits) const;
@@ -48,7 +52,7 @@ class Prospector {
   std::vector<int> checks_;
   std::vector<int> wanted_;    ///< quantities fitted: unknown objectives, then telling checks
   std::vector<int> place_of_;  ///< quantity -> index into wanted_, or -1
-  std::map<Key, std::vector<LocalFit>> fits_;
+  std::map<Cell, std::vector<LocalFit>> fits_;
 };
 
 }  // namespace dropfront::search

@@ -1,5 +1,6 @@
 #pragma once
 #include <cstdint>
+#include <map>
 #include <vector>
 
 #include "dropfront/search/candidate_queue.hpp"
@@ -31,8 +32,9 @@ class Prospects {
 
   Session& session_;
   CandidateQueue queue_;
-  std::vector<Parent> parents_;  ///< of all designs ever queued
-  std::int64_t guessed_at_ = 0;  ///< evaluations at the last reguess
+  std::vector<Parent> parents_;                   ///< of all designs ever queued
+  std::map<std::int64_t, std::size_t> place_of_;  ///< tag of a compliant parent -> its place there
+  std::int64_t guessed_at_ = 0;                   ///< evaluations at the last reguess
 };
 
 }  // namespace dropfront::search

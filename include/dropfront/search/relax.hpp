@@ -1,20 +1,11 @@
 #pragma once
-#include <cstdint>
 #include <vector>
 
 #include "dropfront/search/achievement.hpp"
+#include "dropfront/search/relaxed_log.hpp"
 #include "dropfront/search/session.hpp"
 
 namespace dropfront::search {
-
-/// A relaxed design: one combination of category options, a position on every axis.
-struct RelaxedDesign {
-  Choice categories;  ///< entries of slots that are no categories: 0
-  std::vector<double> position;
-  std::vector<double> objectives;
-  double violation = 0;
-  std::vector<double> headroom;  ///< as in Evaluation
-};
 
 /// The best relaxed design for one aim in one region.
 struct RelaxedOptimum {
@@ -23,13 +14,16 @@ struct RelaxedOptimum {
 };
 
 struct Relaxation {
-  std::vector<RelaxedOptimum> optima;  ///< by aim, then region
+  std::vector<RelaxedOptimum> optima;  ///< in order of the runs that found them
+  std::vector<RelaxedOptimum> starts;  ///< some of every region, well spread (see spread_of)
   ObjectiveRange range;                ///< of the relaxed designs that comply, or of all if none does
 };
 
-/// Stage relax. Each region (combination of category options) is sampled evenly, searched by a global NLopt
-/// method for a balanced aim, then polished by a local one for the aims it serves best, starting from the
-/// best of the log. Regions beyond the effort's limit are thinned out evenly. Feeds the session's model.
+/// Stage relax, every region (combination of category options) by itself: an even sample, then a global NLopt
+/// method on the violation alone until a design complies. Then a local one from the best of the log, first
+/// for a balanced aim in every region that has a complying design, then for the spread aims in the regions
+/// that serve each best. Regions beyond the effort's limit are thinned out evenly. Feeds the session's
+/// relaxed model.
 Relaxation relax(Session& session);
 
 /// Combinations of category options, at most `most` of them, evenly thinned.

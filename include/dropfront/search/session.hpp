@@ -27,6 +27,7 @@ struct Looked {
 struct Merged {
   Choice choice;
   Entered entered;
+  std::vector<double> quantities;  ///< see Session::quantities_of
 };
 
 /// What the stages of one search share: the memo of designs, the ledger, the limits, the threads.
@@ -43,6 +44,7 @@ class Session {
   Workers workers;
   Ledger ledger;
   LocalModel model;
+  LocalModel relaxed_model;  ///< of relaxed designs: a stand-in where real ones are too few
   OptionRecord record;
 
   /// Looks at the choices not seen before, as far as the budget goes, and returns those that stay in play.

@@ -6,13 +6,22 @@
 
 namespace dropfront::search {
 
-/// The real designs about one relaxed optimum, none twice: the base design, then all others that were looked
-/// at on the way, by merit of their looks.
-///
-/// Base design: on every axis the nearest coordinate; among the options there, and for slots without an axis
-/// among all, the one whose look is best (least violation, then least weighted sum of the objectives a look
-/// tells), slot by slot, twice. Then every one-slot change of it to the options of the coordinates on both
-/// sides, and the designs with all axes moved below or all above.
-std::vector<Choice> snap(const Session& session, const RelaxedOptimum& optimum, const ObjectiveRange& range);
+/// The real designs about a relaxed one.
+struct Snapped {
+  /// On every axis an option at the nearest coordinate, in slots without an axis any option: the dearest, the
+  /// one at three quarters and the cheapest in the order of their looks (violation, then weighted sum of the
+  /// objectives a look tells). What a look does not tell, ratings above all, tends to be better in dear
+  /// parts: the dear design is the one most likely to comply, the cheap one the one to hope for.
+  std::vector<Choice> bases;
+  /// All one-slot changes of the bases to options at the coordinates on both sides, and the bases with all
+  /// axes moved below or all above.
+  std::vector<Choice> around;
+};
+
+/// None twice, none of the bases among the others.
+Snapped snap(const Session& session, const RelaxedOptimum& optimum, const ObjectiveRange& range);
+
+/// The same from the dearest base alone.
+Snapped snap_dear(const Session& session, const RelaxedOptimum& optimum, const ObjectiveRange& range);
 
 }  // namespace dropfront::search
