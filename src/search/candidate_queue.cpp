@@ -29,7 +29,7 @@ CandidateQueue::Item CandidateQueue::take() {
 }
 
 void CandidateQueue::push(const Choice& choice, const std::vector<double>& known, std::uint32_t origin,
-                          const Guess& guess) {
+                          const Guess& guess, double reach) {
   const std::size_t index = chances_.size();
   choices_.resize((index + 1) * codec_->words());
   codec_->encode(choice, &choices_[index * codec_->words()]);
@@ -37,7 +37,10 @@ void CandidateQueue::push(const Choice& choice, const std::vector<double>& known
   chances_.push_back(static_cast<float>(guess.chance));
   known_.insert(known_.end(), known.begin(), known.end());
   guessed_.insert(guessed_.end(), guess.objectives.begin(), guess.objectives.end());
-  add(Item{promise(guess.gain, guess.chance), static_cast<std::uint32_t>(index)});
+  if (guess.gain <= -reach)
+    aside_.push_back(static_cast<std::uint32_t>(index));
+  else
+    add(Item{promise(guess.gain, guess.chance), static_cast<std::uint32_t>(index)});
 }
 
 std::vector<Choice> CandidateQueue::pop(int count, const ParetoArchive& front, const FrontGauge& gauge,
@@ -53,7 +56,7 @@ std::vector<Choice> CandidateQueue::pop(int count, const ParetoArchive& front, c
     }
     const double gain = gauge.gain(row(guessed_, item.index), -reach);
     if (gain <= -reach && front.size() > 0) {
-      ++left_out_;
+      aside_.push_back(item.index);
       continue;
     }
     // The front has moved on since the guess: a gain can only have shrunk. What has fallen behind the next in
@@ -87,7 +90,7 @@ void CandidateQueue::reguess(const std::vector<Guess>& guesses, double reach) {
     if (i >= guesses.size()) {
       add(old[i]);
     } else if (guesses[i].gain <= -reach) {
-      ++left_out_;
+      aside_.push_back(old[i].index);
     } else {
       chances_[index] = static_cast<float>(guesses[i].chance);
       std::copy(guesses[i].objectives.begin(), guesses[i].objectives.end(),
@@ -95,6 +98,10 @@ void CandidateQueue::reguess(const std::vector<Guess>& guesses, double reach) {
       add(Item{promise(guesses[i].gain, guesses[i].chance), old[i].index});
     }
   }
+}
+
+void CandidateQueue::recall() {
+  for (std::uint32_t index : std::exchange(aside_, {})) add(Item{0, index});
 }
 
 std::vector<CandidateQueue::Rejected> CandidateQueue::take_rejected() { return std::exchange(rejected_, {}); }

@@ -35,11 +35,15 @@ class Closer {
       while (take_up_singles() && prospects_.promising() < evaluation_batch) {
       }
       take_up_mixtures();
-      if (prospects_.promising() == 0 && !take_up_pairs() && prospects_.empty()) break;
+      if (prospects_.promising() == 0 && !take_up_pairs() && prospects_.empty() && !prospects_.recall()) {
+        if (++dry_rounds_ > most_dry_rounds) break;
+        continue;
+      }
+      dry_rounds_ = 0;
       evaluate_batch();
       session_.report("close", progress());
     }
-    return !session_.ended() && prospects_.empty() && prospects_.left_out() == 0 && !session_.looks_refused &&
+    return !session_.ended() && prospects_.empty() && prospects_.aside() == 0 && !session_.looks_refused &&
            singles_.empty();
   }
 
@@ -165,6 +169,7 @@ class Closer {
   SpreadOrder singles_, pairs_;
   Elites elites_;
   values::RandomStream random_;
+  int dry_rounds_ = 0;  ///< in a row without a design worth its evaluation
   std::set<Choice> broken_taken_;
 };
 

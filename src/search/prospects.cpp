@@ -7,6 +7,8 @@ namespace dropfront::search {
 namespace {
 
 constexpr std::size_t most_reguessed = 10000;
+constexpr double least_reach = 0.05;
+constexpr double all_of_it = 1e9;
 
 }  // namespace
 
@@ -29,24 +31,37 @@ void Prospects::add(const std::vector<Parent>& parents, const std::vector<Choice
         Offspring{std::move(looked.choice), std::move(looked.objectives), places[made_from[looked.origin]]});
   const std::vector<Guess> guesses = Prospector(session_, parents_).guess(offspring);
   for (std::size_t i = 0; i < offspring.size(); ++i) {
-    if (guesses[i].gain <= -session_.plan.reach)
-      queue_.leave_out();
-    else
-      queue_.push(offspring[i].choice, offspring[i].known, static_cast<std::uint32_t>(offspring[i].parent),
-                  guesses[i]);
+    queue_.push(offspring[i].choice, offspring[i].known, static_cast<std::uint32_t>(offspring[i].parent),
+                guesses[i], session_.plan.reach);
   }
 }
 
-void Prospects::reguess() {
+void Prospects::reguess(std::size_t most) {
   std::vector<Offspring> offspring;
-  for (CandidateQueue::Waiting& waiting : queue_.waiting(most_reguessed))
+  for (CandidateQueue::Waiting& waiting : queue_.waiting(most))
     offspring.push_back(Offspring{std::move(waiting.choice), std::move(waiting.known), waiting.origin});
   queue_.reguess(Prospector(session_, parents_).guess(offspring), session_.plan.reach);
   guessed_at_ = session_.evaluations();
 }
 
+bool Prospects::recall() {
+  while (queue_.aside() > 0) {
+    // Guesses that have not changed will not be better: then more is taken.
+    if (session_.evaluations() == recalled_at_) {
+      if (session_.plan.reach >= all_of_it) return false;
+      session_.plan.reach =
+          session_.plan.reach < 1 ? std::max(2 * session_.plan.reach, least_reach) : all_of_it;
+    }
+    recalled_at_ = session_.evaluations();
+    queue_.recall();
+    reguess(queue_.size());
+    if (!queue_.empty()) return true;
+  }
+  return false;
+}
+
 std::vector<Choice> Prospects::take(int count) {
-  if (4 * session_.evaluations() > 5 * guessed_at_ + 4 * evaluation_batch) reguess();
+  if (4 * session_.evaluations() > 5 * guessed_at_ + 4 * evaluation_batch) reguess(most_reguessed);
   auto choices = queue_.pop(count, session_.ledger.front(), session_.gauge(), session_.plan.reach);
   for (const auto& rejected : queue_.take_rejected())
     session_.ledger.pass_over(rejected.choice, rejected.objectives);

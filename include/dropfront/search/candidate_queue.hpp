@@ -21,16 +21,19 @@ class CandidateQueue {
   CandidateQueue(const ChoiceCodec& codec, int objectives) : codec_(&codec), objectives_(objectives) {}
 
   /// `known`: objectives as the look told them, NaN where unknown; `origin`: the caller's own number.
-  void push(const Choice& choice, const std::vector<double>& known, std::uint32_t origin, const Guess& guess);
+  void push(const Choice& choice, const std::vector<double>& known, std::uint32_t origin, const Guess& guess,
+            double reach);
+  std::size_t size() const { return heap_.size(); }
 
-  /// Takes up to `count` designs. Designs that the front rejects by what is known, or that are guessed to
-  /// miss it by `reach` or more, fall out; the latter are counted in left_out().
+  /// Takes up to `count` designs. Designs that the front rejects by what is known fall out; those that are
+  /// guessed to miss it by `reach` or more are laid aside.
   std::vector<Choice> pop(int count, const ParetoArchive& front, const FrontGauge& gauge, double reach);
 
   bool empty() const { return heap_.empty(); }
-  std::int64_t left_out() const { return left_out_; }
-  /// Counts a design that was not worth pushing.
-  void leave_out() { ++left_out_; }
+  /// Designs laid aside.
+  std::size_t aside() const { return aside_.size(); }
+  /// Takes all designs laid aside back among the waiting, to be guessed at anew.
+  void recall();
   /// Designs that promised to reach the front when they were last guessed at and still wait.
   std::int64_t promising() const { return promising_; }
 
@@ -42,7 +45,8 @@ class CandidateQueue {
   };
   /// The most promising designs, up to `most`, in a fixed order.
   std::vector<Waiting> waiting(std::size_t most);
-  /// New guesses for the designs that waiting() just gave, in its order; those that miss by `reach` fall out.
+  /// New guesses for the designs that waiting() just gave, in its order; those that miss by `reach` are
+  /// laid aside.
   void reguess(const std::vector<Guess>& guesses, double reach);
 
   /// Designs the front rejected while they waited, for the ledger's filling list.
@@ -74,7 +78,7 @@ class CandidateQueue {
   std::vector<double> known_, guessed_;
   std::vector<Item> heap_;
   std::vector<Rejected> rejected_;
-  std::int64_t left_out_ = 0;
+  std::vector<std::uint32_t> aside_;
   std::int64_t promising_ = 0;
 };
 

@@ -16,8 +16,8 @@ struct EffortPlan {
   int most_regions;               ///< combinations of category options relaxed, at most
   int starts;                     ///< relaxed designs of each region that are snapped and scored, at most
   int pair_window;                ///< two-part changes: distinct neighbours on either side of each axis
-  double reach;                   ///< designs predicted to miss the front by more than this share of its
-                                  ///< extent are left out of the closing
+  double reach;                   ///< designs guessed to miss the front by more than this share of its extent
+                                  ///< wait until nothing better is left
 };
 
 /// quick / normal / deep; `options.budget` replaces the looks.
@@ -27,5 +27,6 @@ EffortPlan plan_for(const SearchOptions& options);
 constexpr int evaluation_batch = 96;
 constexpr int members_a_round = 8;
 constexpr int mixtures_a_round = 600;
+constexpr int most_dry_rounds = 10;
 
 }  // namespace dropfront::search

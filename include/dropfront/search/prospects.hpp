@@ -25,16 +25,20 @@ class Prospects {
 
   bool empty() const { return queue_.empty(); }
   std::int64_t promising() const { return queue_.promising(); }
-  std::int64_t left_out() const { return queue_.left_out(); }
+  std::size_t aside() const { return queue_.aside(); }
+  /// Guesses anew at everything that was laid aside, going farther behind the front as long as that brings
+  /// nothing; true when something of it waits again, false when nothing was aside.
+  bool recall();
 
  private:
-  void reguess();
+  void reguess(std::size_t most);
 
   Session& session_;
   CandidateQueue queue_;
   std::vector<Parent> parents_;                   ///< of all designs ever queued
   std::map<std::int64_t, std::size_t> place_of_;  ///< tag of a compliant parent -> its place there
   std::int64_t guessed_at_ = 0;                   ///< evaluations at the last reguess
+  std::int64_t recalled_at_ = -1;                 ///< and at the last recall
 };
 
 }  // namespace dropfront::search
