@@ -9,7 +9,7 @@ namespace {
 
 constexpr double widths[] = {0.15, 0.3, 0.6, 1.2};
 constexpr double farthest_square = 13.8;  // in widths: a weight of 1e-3
-constexpr std::size_t most_samples = 800;
+constexpr std::size_t most_samples = 500;
 constexpr double farthest = 3;  // in widths
 
 // Solves A x = b by Cholesky; A symmetric (row-major n x n, lower half read), both overwritten.

@@ -1,5 +1,7 @@
 // The search without enumeration, on spaces small enough to know the answer.
+#include "dropfront/search/effort.hpp"
 #include "dropfront/search/hypervolume.hpp"
+#include "dropfront/search/neighbours.hpp"
 #include "dropfront/search/search.hpp"
 #include "search/toy_lists.hpp"
 #include "support/catch.hpp"
@@ -55,10 +57,7 @@ TEST_CASE("without enumeration the front has at least 99.9 % of the exact one's 
   for (std::uint64_t seed = 1; seed <= 6; ++seed) {
     const toy::Lists lists(middling(seed, 2 + static_cast<int>(seed % 3)));
     const auto exact = toy::front_by_definition(lists);
-    // The bar is set for the whole of 2e6 looks, which is the deep effort.
-    SearchOptions options = no_enumeration();
-    options.effort = Effort::deep;
-    const SearchOutcome outcome = run_search(lists, options);
+    const SearchOutcome outcome = run_search(lists, no_enumeration());
     CHECK_FALSE(outcome.exhaustive);
     const std::size_t m = exact[0].evaluation.objectives.size();
     std::vector<double> reference(m, -1e300), best(m, 1e300), found(m, 1e300);
@@ -165,6 +164,53 @@ TEST_CASE("progress passes through the stages in order and its counts never fall
   };
   run_search(lists, options);
   CHECK(stage == 3);
+}
+
+TEST_CASE("a search that calls itself closed has left no one-part change of its front untried") {
+  const toy::Lists lists(middling(3, 2));
+  const SearchOutcome outcome = run_search(lists, no_enumeration());
+  REQUIRE(outcome.closed);
+  for (const Candidate& member : outcome.front)
+    for (const Choice& neighbour : one_part_changes(lists.space(), member.choice)) {
+      const Evaluation e = lists.exact(neighbour);
+      if (e.outcome != Outcome::compliant) continue;
+      CHECK_FALSE(dominates(objective_keys(e.objectives, lists.resolution()),
+                            objective_keys(member.evaluation.objectives, lists.resolution())));
+    }
+}
+
+TEST_CASE("a search without relaxation, or without guesses still ends with a front") {
+  for (int off = 0; off < 3; ++off) {
+    const toy::Lists lists(middling(7, 3));
+    SearchOptions options = no_enumeration();
+    options.effort = Effort::quick;
+    options.switches.relax = off == 0;
+    options.switches.predict = off == 1;
+    const SearchOutcome outcome = run_search(lists, options);
+    CHECK_FALSE(outcome.front.empty());
+    CHECK((outcome.counts.relaxed > 0) == options.switches.relax);
+  }
+}
+
+TEST_CASE("efforts keep their limits: looks, evaluations and relaxed designs") {
+  toy::Shape shape = middling(5, 4);
+  shape.droppers = shape.resistors = shape.clamps = shape.reservoirs = 30;  // 3.2e6 designs
+  const toy::Lists lists(shape);
+  SearchOptions options;
+  options.effort = Effort::quick;
+  const EffortPlan plan = plan_for(options);
+  const SearchOutcome outcome = run_search(lists, options);
+  CHECK(outcome.counts.looked <= plan.looks);
+  CHECK(outcome.counts.relaxed <= plan.relaxed);
+  CHECK(outcome.counts.scored <= plan.evaluations);
+  CHECK(lists.relaxations.load() == outcome.counts.relaxed);
+  CHECK_FALSE(outcome.cut_short);  // nobody asked for less than the effort
+  for (Effort effort : {Effort::quick, Effort::normal, Effort::deep}) {
+    options.effort = effort;
+    // The project's bar: at most 2e6 looks, of them at most 5 % scored in full.
+    CHECK(plan_for(options).looks <= 2000000);
+    CHECK(20 * plan_for(options).evaluations <= plan_for(options).looks);
+  }
 }
 
 TEST_CASE("when little complies a search still finds it") {

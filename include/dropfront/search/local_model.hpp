@@ -34,7 +34,7 @@ class LocalModel {
   void add(std::int64_t region, const std::vector<double>& position, const std::vector<double>& quantities);
 
   /// Fits for the `wanted` quantities about `centre`, in that order: weighted least squares (Gaussian
-  /// weights; the width grows from 0.15 of the axes until enough samples count; at most the nearest 800),
+  /// weights; the width grows from 0.15 of the axes until enough samples count; at most the nearest 500),
   /// slopes damped. Not usable with fewer than three samples.
   std::vector<LocalFit> fit(std::int64_t region, const std::vector<double>& centre,
                             const std::vector<int>& wanted) const;
