@@ -120,12 +120,16 @@ class Closer {
     });
   }
 
-  // Mixtures of the best designs, of the front as it is or of any region.
+  // Mixtures of the best designs: by one objective, of the front as it is, of any region.
   void take_up_mixtures() {
     if (elites_.empty() || session_.ended() || !mixing_allowed()) return;
     const std::vector<std::int64_t> front = session_.ledger.front().tags();
+    const std::vector<std::int64_t> ends = session_.ledger.front().ends();
     const auto draw = [&] {
-      return random_.below(2) == 0 ? elites_.draw(random_) : front[random_.below(front.size())];
+      const std::uint64_t kind = random_.below(4);
+      if (kind == 0) return ends[random_.below(ends.size())];
+      if (kind == 1) return front[random_.below(front.size())];
+      return elites_.draw(random_);
     };
     std::vector<Parent> parents;
     std::vector<Choice> choices;

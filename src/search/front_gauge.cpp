@@ -6,6 +6,11 @@
 #include "dropfront/search/achievement.hpp"
 
 namespace dropfront::search {
+namespace {
+
+constexpr double beyond_weight = 2;
+
+}  // namespace
 
 FrontGauge::FrontGauge(const ParetoArchive& front, const std::vector<double>& least_extent)
     : objectives_(front.resolution().size()) {
@@ -17,6 +22,7 @@ FrontGauge::FrontGauge(const ParetoArchive& front, const std::vector<double>& le
   for (const auto& member : front.entries())
     if (member.alive)
       for (std::size_t k = 0; k < objectives_; ++k) members_.push_back(member.objectives[k] / extent_[k]);
+  for (std::size_t k = 0; k < objectives_; ++k) best_.push_back(range.low(static_cast<int>(k)) / extent_[k]);
 }
 
 double FrontGauge::gain(const std::vector<double>& point, double enough) const {
@@ -29,9 +35,11 @@ double FrontGauge::gain(const std::vector<double>& point, double enough) const {
     double most = members_[i] - scaled[0];
     for (std::size_t k = 1; k < m; ++k) most = std::max(most, members_[i + k] - scaled[k]);
     least = std::min(least, most);
-    if (least <= enough) break;
+    if (least <= enough) return least;
   }
-  return least;
+  double beyond = 0;
+  for (std::size_t k = 0; k < m; ++k) beyond = std::max(beyond, best_[k] - scaled[k]);
+  return least + beyond_weight * beyond;
 }
 
 }  // namespace dropfront::search

@@ -163,6 +163,17 @@ std::vector<std::int64_t> ParetoArchive::tags() const {
   return result;
 }
 
+std::vector<std::int64_t> ParetoArchive::ends() const {
+  std::vector<std::int64_t> result;
+  const std::vector<const Member*> members = sorted();
+  for (std::size_t k = 0; k < resolution_.size() && !members.empty(); ++k)
+    result.push_back(
+        (*std::min_element(members.begin(), members.end(), [k](const Member* a, const Member* b) {
+          return a->objectives[k] < b->objectives[k];
+        }))->tag);
+  return result;
+}
+
 std::vector<const ParetoArchive::Member*> ParetoArchive::sorted() const {
   std::vector<const Member*> result;
   for (const Member& m : members_)

@@ -45,6 +45,8 @@ TEST_CASE("the gauge measures in extents of the front how far a point is before 
   CHECK_THAT(gauge.gain({2, 10}, -1), WithinAbs(0, 1e-15));
   CHECK_THAT(gauge.gain({3, 11}, -1), WithinAbs(-0.5, 1e-15));
   CHECK(gauge.gain({9, 99}, -1) <= -1);
+  // Half an extent better than the best of the first objective counts twice on top.
+  CHECK_THAT(gauge.gain({-1, 10}, -1), WithinAbs(0.5 + 2 * 0.5, 1e-15));
   CHECK(FrontGauge(ParetoArchive({0, 0}), {0, 0}).gain({5, 5}, -1) == 1);
 }
 

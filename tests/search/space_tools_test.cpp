@@ -123,7 +123,8 @@ TEST_CASE(
 }
 
 TEST_CASE("the even sequence fills every part of the cube better than chance does") {
-  // 400 points on a 20 x 20 grid: chance fills 400 (1 - 1/e) = 253 cells give or take 10; held to five of those more.
+  // 400 points on a 20 x 20 grid: chance fills 400 (1 - 1/e) = 253 cells give or take 10; held to five of
+  // those more.
   std::set<std::pair<int, int>> cells;
   for (int n = 0; n < 400; ++n) {
     const auto p = spread_point(n, 2, 9);

@@ -12,8 +12,10 @@ class FrontGauge {
   FrontGauge(const ParetoArchive& front, const std::vector<double>& least_extent);
 
   /// min over members of max over objectives of (member - point) / extent. Positive: the point improves on
-  /// every member in some objective by at least so much. Negative: how much it must improve to do so. 1 for
-  /// an empty front. Stops early, with a value <= `enough`, once the answer is known not to exceed `enough`.
+  /// every member in some objective by at least so much. Negative: how much it must improve to do so. To it
+  /// is added twice what the point gains on the best value of an objective, since the ends of a front are
+  /// what people ask for first. 1 for an empty front. Stops early, with a value <= `enough`, once the answer
+  /// is known not to exceed `enough`.
   double gain(const std::vector<double>& point, double enough) const;
 
   const std::vector<double>& extent() const { return extent_; }
@@ -22,6 +24,7 @@ class FrontGauge {
   std::size_t objectives_;
   std::vector<double> members_;  ///< scaled by the extent, one after the other
   std::vector<double> extent_;
+  std::vector<double> best_;  ///< least of each objective, scaled
 };
 
 }  // namespace dropfront::search

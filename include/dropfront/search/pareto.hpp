@@ -39,6 +39,7 @@ class ParetoArchive {
 
   int size() const { return alive_; }
   std::vector<std::int64_t> tags() const;  ///< of the members, in order of entry
+  std::vector<std::int64_t> ends() const;  ///< for each objective the tag of the member best in it
   const std::vector<double>& resolution() const { return resolution_; }
 
   /// Members in order of raw objectives, then choice.
