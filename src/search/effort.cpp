@@ -17,7 +17,10 @@ EffortPlan plan_for(const SearchOptions& options) {
       plan = {2'000'000, 100'000, 20'000, 60'000, 40, 128, 32, 6, 1e9};
       break;
   }
-  if (options.budget) plan.looks = std::max<std::int64_t>(1, *options.budget);
+  if (options.budget) {
+    plan.looks = std::max<std::int64_t>(1, *options.budget);
+    plan.relaxed = std::min(plan.relaxed, plan.looks);
+  }
   return plan;
 }
 
