@@ -1,0 +1,41 @@
+#pragma once
+#include <cstdint>
+#include <vector>
+
+namespace dropfront::search {
+
+/// Many choices at once: per slot the ascending list of its options; every combination is a member.
+struct Box {
+  std::vector<std::vector<std::int32_t>> options;  ///< one list a slot, none empty
+  double members() const {
+    double n = 1;
+    for (const auto& list : options) n *= static_cast<double>(list.size());
+    return n;
+  }
+};
+
+/// How a bound is known; the weakest class used names the certificate.
+enum class BoundKind { exact, theorem, monotone };
+
+/// What no member of a box can beat.
+struct Bounds {
+  std::vector<double> objectives;  ///< one an objective, in its own unit, minimised; -infinity: not known
+  std::vector<BoundKind> kinds;    ///< one an objective
+  int broken = -1;                 ///< index into the evaluator's check names that every member breaks
+  BoundKind broken_kind = BoundKind::theorem;
+};
+
+/// The bridge from boxes to whatever is being designed. Total, thread-safe, depends on its arguments only.
+/// A box it is asked about holds one option in every category slot.
+class Bounder {
+ public:
+  virtual ~Bounder() = default;
+  /// `depth` 0: what needs no solving; 1: solving allowed. A deeper bound is never looser.
+  virtual Bounds bound(const Box& box, int depth) const = 0;
+  /// Drops options that another option of the same slot replaces at no loss in every member (equal in what
+  /// the circuit sees, not dearer, not larger, ratings no worse where they could matter in this box).
+  /// Options equal in everything stay. Returns how many designs were dropped.
+  virtual double reduce(Box& box) const = 0;
+};
+
+}  // namespace dropfront::search
