@@ -43,6 +43,8 @@ CLI::App* add_search(CLI::App& app, SearchArguments& a) {
   command->add_option("--out", a.out, "Folder of the result folders")
       ->capture_default_str()
       ->type_name("DIR");
+  command->add_flag("--prove", a.prove,
+                    "Go on until nothing in the lists can do better (small problems: always)");
   command->add_option("--effort", a.effort, "quick, normal or deep (default: as the problem says)")
       ->check(CLI::IsMember({"quick", "normal", "deep"}));
   command->add_option("--top", a.top, "Designs in each ranked set")

@@ -95,6 +95,7 @@ class Run {
     options.seed = arguments_.seed.value_or(problem.seed);
     options.threads = arguments_.threads;
     options.top = arguments_.top.value_or(problem.top);
+    options.prove = arguments_.prove;
     options.budget = arguments_.budget;
     options.time_s = time_s_;
     options.stop = stop_;

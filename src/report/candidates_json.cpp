@@ -6,6 +6,7 @@
 #include "dropfront/report/design_json.hpp"
 #include "dropfront/report/json_writer.hpp"
 #include "dropfront/report/make_result.hpp"
+#include "dropfront/report/proof_json.hpp"
 #include "dropfront/report/score_json.hpp"
 
 namespace dropfront::report {
@@ -139,14 +140,7 @@ std::string candidates_json(const Result& result) {
   json.key("counts");
   write_counts(json, result);
   json.key("proof");
-  if (result.exhaustive) {
-    json.begin_object(kFlat);
-    json.member("complete", true);
-    json.member("by", "every design of the space was looked at");
-    json.end_object();
-  } else {
-    json.null();
-  }
+  write_proof(json, result);
   json.key("front");
   write_entries(json, result.front);
   json.key("ranked");

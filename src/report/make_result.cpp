@@ -38,7 +38,7 @@ std::string set_name(const search::RankedSet& set, const std::vector<scoring::Ob
 Status status_of(const search::SearchOutcome& outcome) {
   if (outcome.cut_short) return Status::cut_short;
   if (!outcome.front.empty()) return Status::done;
-  return outcome.exhaustive ? Status::proven_none : Status::none_found;
+  return outcome.proof && outcome.proof->complete ? Status::proven_none : Status::none_found;
 }
 
 void add_conflict(Result& result, const search::SearchOutcome& outcome,
@@ -112,7 +112,8 @@ Result make_result(const problem::BoundProblem& bound, const search::SearchOutco
   result.counts = outcome.counts;
   result.seed = options.seed;
   result.effort = effort_name(options.effort);
-  result.exhaustive = outcome.exhaustive;
+  result.proof = outcome.proof;
+  result.check_names = bound.check_names();
   result.cautions = with_standing_cautions(problem.cautions);
 
   std::map<search::Choice, int> numbers;

@@ -7,6 +7,7 @@
 
 #include "dropfront/report/design_slots.hpp"
 #include "dropfront/report/for_people.hpp"
+#include "dropfront/report/proof_text.hpp"
 #include "dropfront/report/ranked_table.hpp"
 #include "dropfront/report/text_table.hpp"
 
@@ -19,13 +20,15 @@ std::string counts_text(const Result& result) {
   std::string text = counted(static_cast<double>(counts.looked)) + " designs looked at, " +
                      counted(static_cast<double>(counts.scored)) + " scored in full, of " +
                      counted(counts.space) + " possible";
-  if (result.exhaustive) text += " (all of them)";
+  if (proven(result) && result.proof->enumerated) text += " (all of them)";
   return text + ".";
 }
 
 std::string nothing_found(const Result& result) {
-  std::string text = result.exhaustive ? "No design of this problem complies: every one was looked at.\n"
-                                       : "No compliant design was found.\n";
+  std::string text = proven(result) && result.proof->enumerated
+                         ? "No design of this problem complies: every one was looked at.\n"
+                     : proven(result) ? "No design of this problem complies.\n"
+                                      : "No compliant design was found.\n";
   if (result.conflict.empty()) return text;
   const auto& worst = result.conflict.front();
   text += wrapped(
@@ -58,9 +61,10 @@ std::string cautions_text(const std::vector<std::string>& cautions) {
 std::string summary_body(const Result& result) {
   std::string text = wrapped(result.problem->title);
   text += std::string(std::min(kTextWidth, display_width(result.problem->title)), '-') + "\n";
-  if (result.status == Status::cut_short)
+  if (result.status == Status::cut_short && !proven(result))
     text += "Cut short: better designs may exist among those not looked at.\n";
   text += wrapped(counts_text(result));
+  if (const std::string proof = proof_text(result); !proof.empty()) text += wrapped(proof);
   if (result.front.empty()) return text + nothing_found(result);
   text += wrapped(counted(static_cast<double>(result.front.size())) +
                   " on the front: no design found is as good in every objective and better in one.");

@@ -84,4 +84,10 @@ bool ChoiceSet::insert(const Choice& choice) {
   return true;
 }
 
+bool ChoiceSet::contains(const Choice& choice) const {
+  std::vector<std::uint64_t> key(stride_);
+  codec_->encode(choice, key.data());
+  return slots_[find(key.data()) * stride_] != empty_slot;
+}
+
 }  // namespace dropfront::search

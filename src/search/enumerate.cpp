@@ -34,9 +34,13 @@ bool worth_enumerating(const Session& session) {
          size <= static_cast<double>(session.plan.looks);
 }
 
-bool enumerate(Session& session) {
-  for (const Slot& slot : session.space.slots)
-    if (slot.size < 1) return true;  // a slot that offers nothing: an empty space
+Proof enumerate(Session& session) {
+  Proof proof;
+  proof.enumerated = true;
+  proof.space = session.space.size();
+  proof.broken.resize(session.evaluator.check_names().size());
+  proof.complete = proof.space < 1;  // a slot that offers nothing: an empty space
+  if (proof.complete) return proof;
   std::vector<Choice> all;
   Choice choice(session.space.slots.size(), 0);
   do {
@@ -45,20 +49,29 @@ bool enumerate(Session& session) {
   std::vector<Looked> waiting = session.look_new(all);
   std::sort(waiting.begin(), waiting.end(), cheaper);
   session.lift_evaluation_limit();
+  constexpr auto exact = static_cast<std::size_t>(BoundKind::exact);
   std::vector<Choice> batch;
   for (std::size_t next = 0; next < waiting.size() && !session.ended();) {
     batch.clear();
     for (; next < waiting.size() && batch.size() < evaluation_batch; ++next) {
       const Looked& design = waiting[next];
-      if (session.ledger.front().rejects(design.objectives, design.choice))
+      if (session.ledger.front().rejects(design.objectives, design.choice)) {
         session.ledger.pass_over(design.choice, design.objectives);
-      else
+        ++proof.dominated[exact];
+      } else {
         batch.push_back(design.choice);
+      }
     }
-    session.evaluate(batch);
+    proof.scored += static_cast<double>(session.evaluate(batch).size());
     session.report("close", static_cast<double>(next) / static_cast<double>(waiting.size()));
   }
-  return !session.ended();
+  const Ledger::TurnedAway& away = session.ledger.turned_away();
+  for (std::size_t c = 0; c < away.broken.size(); ++c) proof.broken[c][exact] += away.broken[c];
+  proof.undefined += away.undefined;
+  proof.dominated[exact] += away.dominated;
+  proof.left = proof.space - proof.settled();
+  proof.complete = proof.left == 0;
+  return proof;
 }
 
 }  // namespace dropfront::search

@@ -24,6 +24,7 @@ Ledger::Ledger(const Evaluator& evaluator)
       passed_over_(evaluator.objective_count(), Shortlist(passed_over_kept)),
       nearest_broken_(broken_kept) {
   counts_.space = evaluator.space().size();
+  turned_away_.broken.resize(evaluator.check_names().size());
 }
 
 void Ledger::note_broken(const Choice& choice, const Evaluation& evaluation) {
@@ -57,9 +58,11 @@ bool Ledger::look(const Choice& choice, const Evaluation& evaluation) {
     Evaluation partial = evaluation;
     partial.complete = false;  // a look never makes all checks
     note_broken(choice, partial);
+    ++(evaluation.broken.empty() ? turned_away_.undefined : turned_away_.broken[evaluation.broken.front()]);
     return false;
   }
   if (!front_.rejects(evaluation.objectives, choice)) return true;
+  ++turned_away_.dominated;
   pass_over(choice, evaluation.objectives);
   return false;
 }

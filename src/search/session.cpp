@@ -27,6 +27,7 @@ Session::Session(const Evaluator& the_evaluator, const SearchOptions& the_option
       record(space),
       compliant_range(the_evaluator.objective_count()),
       seen_(codec),
+      evaluated_(codec),
       categories_(category_slots(space)),
       broken_in_evaluation_(the_evaluator.check_names().size()) {
   if (options.time_s) {
@@ -36,12 +37,16 @@ Session::Session(const Evaluator& the_evaluator, const SearchOptions& the_option
   }
 }
 
-bool Session::ended() {
+bool Session::over() const {
   if (halted_.load(std::memory_order_relaxed)) return true;
   const bool stop = options.stop && options.stop->load(std::memory_order_relaxed);
-  const bool late = options.time_s && std::chrono::steady_clock::now() >= deadline_;
-  if (stop || late) halted_.store(true, std::memory_order_relaxed);
-  return stop || late;
+  return stop || (options.time_s && std::chrono::steady_clock::now() >= deadline_);
+}
+
+bool Session::ended() {
+  const bool over = this->over();
+  if (over) halted_.store(true, std::memory_order_relaxed);
+  return over;
 }
 
 void Session::lift_evaluation_limit() { plan.evaluations = evaluations_ + (std::int64_t{1} << 60); }
@@ -122,6 +127,7 @@ std::vector<Merged> Session::evaluate(const std::vector<Choice>& choices) {
     for (std::size_t i = 0; i < count; ++i) {
       const Choice& choice = choices[start + i];
       learn(choice, results[i]);
+      evaluated_.insert(choice);
       merged.push_back(Merged{choice, ledger.merge(choice, results[i]), quantities_of(results[i])});
     }
     evaluations_ += static_cast<std::int64_t>(count);

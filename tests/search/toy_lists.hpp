@@ -227,11 +227,13 @@ inline std::vector<Choice> every_choice(const Space& space) {
 
 /// The definition of the front, written down plainly: of each set of equal keys the least (raw, choice), then
 /// whatever no other key dominates.
-inline std::vector<Candidate> front_by_definition(const Lists& lists) {
+inline std::vector<Candidate> front_by_definition(const Evaluator& lists) {
   std::map<std::vector<double>, Candidate> best;
   for (const Choice& c : every_choice(lists.space())) {
-    const Evaluation e = lists.exact(c);
+    const Evaluation e = lists.evaluate(c, Dominated{});
     if (e.outcome != Outcome::compliant) continue;
+    // What is not a number has no place on a front.
+    if (std::any_of(e.objectives.begin(), e.objectives.end(), [](double x) { return std::isnan(x); })) continue;
     const auto keys = objective_keys(e.objectives, lists.resolution());
     const auto found = best.find(keys);
     if (found == best.end()) {

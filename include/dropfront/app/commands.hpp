@@ -14,6 +14,7 @@ namespace dropfront::app {
 struct SearchArguments {
   std::vector<std::string> problems;
   std::string out = "results";
+  bool prove = false;                 ///< prove the fronts, whatever the size
   std::optional<std::string> effort;  ///< quick, normal, deep; unset: as the problem says
   std::optional<int> top;
   std::optional<std::uint64_t> seed;

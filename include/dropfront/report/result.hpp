@@ -41,7 +41,8 @@ struct Result {
   search::SearchCounts counts;
   std::uint64_t seed = 1;
   std::string effort = "normal";
-  bool exhaustive = false;
+  std::optional<search::Proof> proof;    ///< of a proof made or tried
+  std::vector<std::string> check_names;  ///< of its counts by limit
   std::vector<Entry> front;
   std::vector<Entry> extras;  ///< ranked, not on the front
   std::vector<RankedList> ranked;
@@ -59,6 +60,9 @@ struct Result {
   std::vector<Conflict> conflict;  ///< most often failed first; filled when nothing complies
   std::vector<std::string> cautions;
 };
+
+/// Whether every design of the space is accounted for.
+bool proven(const Result& result);
 
 /// The entry of that number, on the front or off it; null if there is none.
 const Entry* find_entry(const Result& result, int number);

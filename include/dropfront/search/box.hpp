@@ -17,25 +17,30 @@ struct Box {
 /// How a bound is known; the weakest class used names the certificate.
 enum class BoundKind { exact, theorem, monotone };
 
-/// What no member of a box can beat.
+/// What no member of a box can beat, as evaluated: less than any figure the evaluator could give a member,
+/// whatever its solver's stop tolerance does to the last digits.
 struct Bounds {
   std::vector<double> objectives;  ///< one an objective, in its own unit, minimised; -infinity: not known
   std::vector<BoundKind> kinds;    ///< one an objective
   int broken = -1;                 ///< index into the evaluator's check names that every member breaks
   BoundKind broken_kind = BoundKind::theorem;
+  bool undefined = false;  ///< every member lacks a figure without which it cannot comply (exact)
 };
 
 /// The bridge from boxes to whatever is being designed. Total, thread-safe, depends on its arguments only.
-/// A box it is asked about holds one option in every category slot.
+/// A box it is asked about holds, in every slot, options of one group (see Slot) only.
 class Bounder {
  public:
   virtual ~Bounder() = default;
   /// `depth` 0: what needs no solving; 1: solving allowed. A deeper bound is never looser.
   virtual Bounds bound(const Box& box, int depth) const = 0;
   /// Drops options that another option of the same slot replaces at no loss in every member (equal in what
-  /// the circuit sees, not dearer, not larger, ratings no worse where they could matter in this box).
-  /// Options equal in everything stay. Returns how many designs were dropped.
+  /// the circuit sees, not dearer, not larger, ratings no worse where they could matter in this box). Where
+  /// the objectives that are asked for do not tell the two apart, the smaller index must be the one that
+  /// stays: it is the representative of equal vectors. Returns how many designs were dropped.
   virtual double reduce(Box& box) const = 0;
+  /// How it is known that what reduce() drops is no loss.
+  virtual BoundKind reduce_kind() const { return BoundKind::theorem; }
 };
 
 }  // namespace dropfront::search

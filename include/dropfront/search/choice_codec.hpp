@@ -32,6 +32,8 @@ class ChoiceSet {
   explicit ChoiceSet(const ChoiceCodec& codec);
   /// True when the choice is new (and now held).
   bool insert(const Choice& choice);
+  /// Safe from several threads at once while nobody inserts.
+  bool contains(const Choice& choice) const;
   std::int64_t size() const { return size_; }
 
  private:

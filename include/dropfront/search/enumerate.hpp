@@ -1,4 +1,5 @@
 #pragma once
+#include "dropfront/search/proof.hpp"
 #include "dropfront/search/session.hpp"
 
 namespace dropfront::search {
@@ -7,7 +8,7 @@ namespace dropfront::search {
 bool worth_enumerating(const Session& session);
 
 /// Looks at every design of the space and evaluates, in order of what the looks tell (cheapest first), all
-/// that the front does not reject. True when it came to the end: the front is then the front of the space.
-bool enumerate(Session& session);
+/// that the front does not reject. Complete when it came to the end.
+Proof enumerate(Session& session);
 
 }  // namespace dropfront::search

@@ -25,6 +25,14 @@ class Ledger {
   /// Takes a look; false when the design is out: a check is broken, or no completion can reach the front.
   bool look(const Choice& choice, const Evaluation& evaluation);
 
+  /// What became of the designs that look() turned away.
+  struct TurnedAway {
+    std::vector<double> broken;  ///< by the first limit they break, one entry a check name
+    double undefined = 0;
+    double dominated = 0;
+  };
+  const TurnedAway& turned_away() const { return turned_away_; }
+
   /// Takes an evaluation.
   Entered merge(const Choice& choice, const Evaluation& evaluation);
 
@@ -48,6 +56,7 @@ class Ledger {
   ParetoArchive front_;
   std::vector<Candidate> compliant_;
   SearchCounts counts_;
+  TurnedAway turned_away_;
   std::vector<CheckTally> tallies_;
   NearMisses near_misses_;
   std::vector<Shortlist> passed_over_;

@@ -7,6 +7,7 @@
 #include <vector>
 
 #include "dropfront/search/evaluation.hpp"
+#include "dropfront/search/proof.hpp"
 
 namespace dropfront::search {
 
@@ -17,7 +18,8 @@ struct SearchOptions {
   std::uint64_t seed = 1;
   int threads = 0;                                       ///< 0: all cores; the answer never depends on it
   int top = 5;                                           ///< designs a ranked set
-  std::optional<std::int64_t> budget;                    ///< most designs looked at
+  bool prove = false;                                    ///< prove the front, whatever the space's size
+  std::optional<std::int64_t> budget;                    ///< most designs looked at and boxes bounded
   std::optional<double> time_s;                          ///< the only clock that may decide anything
   const std::atomic<bool>* stop = nullptr;               ///< set by a signal handler
   std::function<void(const struct Progress&)> progress;  ///< called from one thread
@@ -29,7 +31,7 @@ struct SearchOptions {
 };
 
 struct Progress {
-  std::string stage;  ///< relax, snap, close, rank
+  std::string stage;  ///< relax, snap, close, prove, rank
   double fraction = 0;
   std::int64_t looked = 0, scored = 0, front = 0;
 };
@@ -69,7 +71,10 @@ struct SearchCounts {
 struct SearchOutcome {
   bool cut_short = false;   ///< ended by the stop flag, the time or the budget given in the options
   bool exhaustive = false;  ///< every design of the space was looked at, none left out but by exact reasoning
-  bool closed = false;      ///< exhaustive, or no one-part change of a front member was left untried
+  /// Of a proof that was asked for or made because the space is small. Complete: `front` is the front of the
+  /// whole space, design for design, and an empty one means that no design complies.
+  std::optional<Proof> proof;
+  bool closed = false;  ///< exhaustive, or no one-part change of a front member was left untried
   SearchCounts counts;
   std::vector<Candidate> front;       ///< sorted by objectives in order, then choice
   std::vector<RankedSet> ranked;      ///< one an objective, then balanced
@@ -77,7 +82,10 @@ struct SearchOutcome {
   std::vector<CheckTally> tallies;    ///< one a check name
 };
 
-/// Stages relax, snap, close, rank. Same evaluator, options and seed: same outcome with any thread count.
-SearchOutcome run_search(const Evaluator& evaluator, const SearchOptions& options);
+/// Stages relax, snap, close, prove, rank. Spaces up to the effort's limit are enumerated instead. Without a
+/// `bounder` (it must know the evaluator's space) nothing larger can be proven. Same evaluator, bounder,
+/// options and seed: same outcome with any thread count.
+SearchOutcome run_search(const Evaluator& evaluator, const SearchOptions& options,
+                         const Bounder* bounder = nullptr);
 
 }  // namespace dropfront::search

@@ -59,7 +59,13 @@ class Session {
 
   /// True once the stop flag is set or the given time is over. Asks the clock only when a time was given.
   bool ended();
+  /// The same, without taking note: safe from several threads.
+  bool over() const;
   const std::atomic<bool>& halted() const { return halted_; }
+  /// Whether a design was looked at, or its evaluation begun, by look_new() and evaluate(). Safe from several
+  /// threads at once while neither runs.
+  bool seen(const Choice& choice) const { return seen_.contains(choice); }
+  bool evaluated(const Choice& choice) const { return evaluated_.contains(choice); }
   bool may_look() const { return ledger.counts().looked < plan.looks; }
   bool may_evaluate() const { return evaluations_ < plan.evaluations; }
   std::int64_t evaluations() const { return evaluations_; }
@@ -87,7 +93,7 @@ class Session {
  private:
   void learn(const Choice& choice, const Evaluation& evaluation);
 
-  ChoiceSet seen_;
+  ChoiceSet seen_, evaluated_;
   std::vector<int> categories_;
   std::vector<std::int64_t> broken_in_evaluation_;
   std::int64_t evaluations_ = 0;

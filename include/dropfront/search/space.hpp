@@ -13,6 +13,9 @@ struct Slot {
   int size = 0;
   bool category = false;
   std::vector<double> coordinate;  ///< size entries, or empty for category slots and slots of one option
+  /// size entries, or empty: options of one group may share a box of the proof. Left empty, those of a
+  /// category slot may not and all others may.
+  std::vector<int> group;
 };
 
 /// A choice: one option index a slot.

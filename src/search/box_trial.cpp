@@ -1,0 +1,119 @@
+#include "dropfront/search/box_trial.hpp"
+
+#include <algorithm>
+#include <cmath>
+#include <limits>
+
+namespace dropfront::search {
+namespace {
+
+constexpr double unknown = -std::numeric_limits<double>::infinity();
+
+Choice least_choice(const Box& box) {
+  Choice choice;
+  for (const auto& list : box.options) choice.push_back(list.front());
+  return choice;
+}
+
+// Keeps the better of what was known and what is found now.
+void sharpen(OpenBox& open, const Bounds& found) {
+  for (std::size_t k = 0; k < open.bound.size() && k < found.objectives.size(); ++k) {
+    if (!(found.objectives[k] > open.bound[k])) continue;  // NaN: nothing was found
+    open.bound[k] = found.objectives[k];
+    open.kinds[k] = k < found.kinds.size() ? found.kinds[k] : BoundKind::monotone;
+  }
+}
+
+// Steps to the next member, last slot fastest; false after the last one.
+bool advance(std::vector<std::size_t>& at, const Box& box) {
+  for (std::size_t s = at.size(); s-- > 0;) {
+    if (++at[s] < box.options[s].size()) return true;
+    at[s] = 0;
+  }
+  return false;
+}
+
+}  // namespace
+
+OpenBox open_box(Box box, int objectives) {
+  OpenBox open;
+  open.box = std::move(box);
+  open.bound.assign(static_cast<std::size_t>(objectives), unknown);
+  open.kinds.assign(static_cast<std::size_t>(objectives), BoundKind::exact);
+  return open;
+}
+
+bool BoxTrial::discard(OpenBox& open, int depth, Tried& tried) const {
+  const Bounds found = bounder_.bound(open.box, depth);
+  if (found.broken >= 0) {
+    tried.fate = Tried::Fate::broken;
+    tried.check = found.broken;
+    tried.kind = found.broken_kind;
+    return true;
+  }
+  if (found.undefined) {
+    tried.fate = Tried::Fate::undefined;
+    return true;
+  }
+  sharpen(open, found);
+  const Choice least = least_choice(open.box);
+  if (!front_.rejects(open.bound, least)) return false;
+  tried.fate = Tried::Fate::dominated;
+  // The strongest reasoning that suffices.
+  for (const BoundKind kind : {BoundKind::exact, BoundKind::theorem, BoundKind::monotone}) {
+    std::vector<double> bound = open.bound;
+    for (std::size_t k = 0; k < bound.size(); ++k)
+      if (open.kinds[k] > kind) bound[k] = unknown;
+    tried.kind = kind;
+    if (front_.rejects(bound, least)) break;
+  }
+  return true;
+}
+
+void BoxTrial::settle(const Box& box, Tried& tried) const {
+  tried.fate = Tried::Fate::settled;
+  std::vector<std::size_t> at(box.options.size(), 0);
+  do {
+    Tried::Single single;
+    for (std::size_t s = 0; s < at.size(); ++s) single.choice.push_back(box.options[s][at[s]]);
+    const Choice& choice = single.choice;
+    single.evaluated = session_.evaluated(choice);
+    single.seen = single.evaluated || session_.seen(choice);
+    if (!single.evaluated) {
+      single.look = session_.evaluator.look(choice);
+      if (single.look.outcome == Outcome::compliant) {
+        single.rejected = front_.rejects(single.look.objectives, choice);
+        if (!single.rejected)
+          single.evaluation = session_.evaluator.evaluate(choice, [&](const std::vector<double>& objectives) {
+            return front_.rejects(objectives, choice);
+          });
+      }
+    }
+    tried.singles.push_back(std::move(single));
+  } while (advance(at, box));
+}
+
+Tried BoxTrial::run(OpenBox open, const std::vector<double>& extent) const {
+  Tried tried;
+  if (session_.over()) {
+    tried.rest = std::move(open);
+    return tried;
+  }
+  const double before = open.box.members();
+  if (!discard(open, 0, tried)) {
+    bounder_.reduce(open.box);
+    tried.reduced = before - open.box.members();
+    if (open.box.members() <= most_singles)
+      settle(open.box, tried);
+    else if (!discard(open, 1, tried)) {
+      tried.fate = Tried::Fate::split;
+      auto halves = splitter_.split(open.box, splitter_.widest(open.box, extent));
+      tried.halves.push_back(OpenBox{std::move(halves.first), open.bound, open.kinds});
+      tried.halves.push_back(OpenBox{std::move(halves.second), open.bound, open.kinds});
+    }
+  }
+  tried.members = before - tried.reduced;
+  return tried;
+}
+
+}  // namespace dropfront::search
