@@ -1,0 +1,59 @@
+#include "dropfront/scoring/bounds/bound_table.hpp"
+
+namespace dropfront::scoring {
+
+namespace {
+
+constexpr auto kExact = BoundClass::exact;
+constexpr auto kTheorem = BoundClass::theorem;
+constexpr const char* kAny = "any box";
+constexpr const char* kCharge = "the four plainly clamped arrangements";
+constexpr const char* kCrest = "the four plainly clamped arrangements, odd harmonics only";
+constexpr const char* kSeries = "as before, w·Rs·C < 1 over the box";
+
+BoundRule objective(std::string_view id, BoundClass known, int depth, std::string_view range,
+                    bounds::ObjectiveBound* rule) {
+  return {id, known, depth, range, rule, nullptr};
+}
+BoundRule limit(std::string_view id, std::string_view range, bounds::LimitBound* rule) {
+  return {id, kTheorem, 0, range, nullptr, rule};
+}
+
+}  // namespace
+
+const std::vector<BoundRule>& bound_table() {
+  static const std::vector<BoundRule> table{
+      objective("cost", kExact, 0, kAny, bounds::cost),
+      objective("board_area", kExact, 0, kAny, bounds::board_area),
+      limit("dropper.series_rated", kAny, bounds::dropper_series_rated),
+      limit("dropper.class", kAny, bounds::dropper_class),
+      limit("dropper.voltage", kAny, bounds::dropper_voltage),
+      limit("rectifier.reverse", kAny, bounds::rectifier_reverse),
+      limit("resistor.pulse_voltage", kAny, bounds::resistor_pulse_voltage),
+      limit("resistor.opens", kAny, bounds::resistor_opens),
+      limit("board.height", kAny, bounds::board_height),
+      limit("reservoir.life", kAny, bounds::reservoir_life),
+      limit("dropper.slew", kCharge, bounds::dropper_slew),
+      limit("discharge.voltage", kCharge, bounds::discharge_voltage),
+      objective("current_margin", kTheorem, 0, kCharge, bounds::margin_by_charge),
+      limit("supply.start", kCharge, bounds::supply_start),
+      objective("standby_loss", kTheorem, 0, kCrest, bounds::standby_by_charge),
+      limit("resistor.power", kSeries, bounds::resistor_power),
+      limit("resistor.voltage", kSeries, bounds::resistor_voltage),
+      limit("discharge.power", kSeries, bounds::discharge_power),
+      limit("discharge.working_voltage", kSeries, bounds::discharge_working_voltage),
+      limit("clamp.power", kCrest, bounds::clamp_power),
+      limit("clamp.junction", kCrest, bounds::clamp_junction),
+      limit("rail.max", kCrest, bounds::rail_max),
+      limit("reservoir.voltage", kCrest, bounds::reservoir_voltage),
+      limit("output_stage.input", kCrest, bounds::output_stage_input),
+      limit("output_stage.junction", kCrest, bounds::output_stage_junction),
+      limit("output.band", kAny, bounds::output_band),
+      limit("resistor.pulse", kCrest, bounds::resistor_pulse),
+      limit("rectifier.surge", kCrest, bounds::rectifier_surge),
+      limit("rail.transient", kCrest, bounds::rail_transient),
+  };
+  return table;
+}
+
+}  // namespace dropfront::scoring

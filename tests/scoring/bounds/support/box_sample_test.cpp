@@ -1,0 +1,242 @@
+#include "scoring/bounds/support/box_sample.hpp"
+
+#include <algorithm>
+
+#include "dropfront/scoring/board_area.hpp"
+#include "dropfront/scoring/check_table.hpp"
+#include "dropfront/scoring/cost.hpp"
+#include "dropfront/scoring/evidence.hpp"
+#include "support/catch.hpp"
+
+namespace dropfront::scoring::test {
+
+namespace {
+
+Supply supply_of(double volt, double hertz) {
+  return {"", {0.9 * volt, volt, 1.1 * volt}, {hertz - 0.5, hertz, hertz + 0.5}, {}, false, false};
+}
+
+Requirement requirement_of(double output_V, const Supply& supply) {
+  Requirement requirement;
+  requirement.supplies.push_back(supply);
+  requirement.output.voltage_V = output_V;
+  requirement.output.loads.push_back({"asleep", false, 0.2e-3, {}, {}, {}});
+  requirement.output.loads.push_back({"awake", false, 6e-3, {}, {}, {}});
+  requirement.output.standby_load = 0;
+  requirement.output.start_load_A = 1e-3;
+  requirement.limits.standby_power_W = 0.5;
+  requirement.limits.current_margin = 0.1;
+  requirement.limits.discharge = DischargeRule{34, 1, 0.1e-6, ""};
+  requirement.limits.series_rated = true;
+  requirement.surroundings.max_height_mm = 14;
+  requirement.surroundings.life_years = 25;
+  requirement.volume = 1000;
+  requirement.placement_cost_micro = 4000;
+  return requirement;
+}
+
+std::vector<Requirement> make_requirements() {
+  std::vector<Requirement> all;
+  all.push_back(requirement_of(5, supply_of(230, 50)));
+  all.push_back(requirement_of(12, supply_of(120, 60)));
+  all.back().surroundings.enclosure_K_per_W = 15;
+  all.back().surroundings.ambient_degC = {-20, 25, 60};
+  all.push_back(requirement_of(3.3, supply_of(230, 50)));
+  all.back().supplies.front().harmonics = {{3, 0.03, 0}, {5, 0.02, 3.14159}};
+  all.back().supplies.front().harmonics_given = true;
+  all.back().surroundings.ambient_degC = {25, 25, 25};
+  all.back().output.loads.push_back({"relay", true, 1e-3, 6.0, {}, {}});
+  all.push_back(requirement_of(5, supply_of(120, 60)));
+  all.back().supplies.push_back(supply_of(230, 50));
+  all.back().surroundings.enclosure_K_per_W = 8;
+  return all;
+}
+
+template <class Part>
+std::vector<const Part*> pick(const std::vector<Part>& from, std::size_t count,
+                              values::RandomStream& random) {
+  std::vector<const Part*> picked;
+  while (picked.size() < std::min(count, from.size())) {
+    const Part* part = &from[random.below(from.size())];
+    if (std::find(picked.begin(), picked.end(), part) == picked.end()) picked.push_back(part);
+  }
+  return picked;
+}
+
+/// The parts of a list that pass a test.
+template <class Part, class Test>
+std::vector<Part> those(const std::vector<Part>& from, Test test) {
+  std::vector<Part> left;
+  std::copy_if(from.begin(), from.end(), std::back_inserter(left), test);
+  return left;
+}
+
+bool feeds(const parts::Resistor& part, std::string_view slot) {
+  return part.slots.empty() || std::find(part.slots.begin(), part.slots.end(), slot) != part.slots.end();
+}
+
+/// The lists a box draws from.
+struct Offers {
+  std::vector<parts::Resistor> series, chain;
+  std::vector<parts::OutputStage> stages[3];
+};
+
+const Offers& offers() {
+  static const Offers made = [] {
+    const auto& all = demo_parts();
+    Offers o;
+    o.series = those(all.resistors, [](const auto& r) { return feeds(r, "series_resistor"); });
+    o.chain = those(all.resistors,
+                    [](const auto& r) { return feeds(r, "discharge") && r.resistance_ohm >= 100e3; });
+    for (int kind = 0; kind < 3; ++kind) {
+      o.stages[kind] =
+          those(all.output_stages, [kind](const auto& s) { return static_cast<int>(s.kind) == kind; });
+    }
+    return o;
+  }();
+  return made;
+}
+
+}  // namespace
+
+const parts::Catalogue& demo_parts() {
+  static const parts::Catalogue catalogue = [] {
+    parts::Catalogue read;
+    parts::read_parts_folder(std::string(DROPFRONT_SOURCE_DIR) + "/problems/parts/demo", read);
+    return read;
+  }();
+  return catalogue;
+}
+
+const std::vector<Requirement>& requirements() {
+  static const std::vector<Requirement> all = make_requirements();
+  return all;
+}
+
+DesignBox random_box(const circuit::Arrangement& arrangement, const Requirement& requirement,
+                     int most_members, values::RandomStream& random) {
+  const auto& all = demo_parts();
+  DesignBox box;
+  box.arrangement = &arrangement;
+  double left = most_members;
+  // A coin a list: some slots are open, the others hold one part.
+  const auto size = [&]() -> std::size_t {
+    const std::size_t wanted = random.below(3) == 0 ? 1 : 2 + random.below(2);
+    const auto allowed = static_cast<std::size_t>(std::max(1.0, left));
+    const std::size_t taken = std::min(wanted, allowed);
+    left /= static_cast<double>(taken);
+    return taken;
+  };
+  const bool first_half = random.below(2) == 0;  // so that each slot is often open
+  if (first_half) box.reservoirs = pick(all.reservoirs, size(), random);
+  const auto kind = random.below(3);
+  const auto fitting = [&](const parts::OutputStage& stage) {
+    return stage.output_voltage_V <= 1.2 * requirement.output.voltage_V;
+  };
+  auto stages = pick(offers().stages[kind], offers().stages[kind].size(), random);
+  std::stable_sort(stages.begin(), stages.end(),
+                   [&](const auto* a, const auto* b) { return fitting(*a) > fitting(*b); });
+  stages.resize(std::min(stages.size(), size()));
+  box.output_stages = stages;
+  box.clamps = pick(all.clamps, size(), random);
+  box.series_resistors = pick(offers().series, size(), random);
+  box.droppers = pick(all.droppers, size(), random);
+  box.rectifiers = pick(all.rectifiers, size(), random);
+  const std::size_t chains = size();
+  for (std::size_t i = 0; i < chains; ++i) {
+    const auto* element = &offers().chain[random.below(offers().chain.size())];
+    const int count = static_cast<int>(random.below(4));
+    box.discharges.push_back(count == 0 ? Chain{} : Chain{element, count});
+  }
+  if (!first_half) box.reservoirs = pick(all.reservoirs, size(), random);
+  box.varistors = {nullptr};
+  box.fuses = {nullptr, &all.fuses[random.below(all.fuses.size())]};
+  if (left < 2) box.fuses = {random.below(2) == 0 ? nullptr : box.fuses[1]};
+  box.ceramics = {nullptr};
+  box.thyristors = {nullptr};
+  box.gate_resistors = {nullptr};
+  return box;
+}
+
+std::vector<Design> members_of(const DesignBox& box) {
+  std::vector<Design> members{Design{}};
+  members.front().arrangement = box.arrangement;
+  const auto cross = [&members](const auto& list, auto set) {
+    std::vector<Design> next;
+    for (const auto& design : members) {
+      for (const auto& entry : list) {
+        next.push_back(design);
+        set(next.back(), entry);
+      }
+    }
+    members = std::move(next);
+  };
+  cross(box.output_stages, [](Design& d, const auto* p) { d.output_stage = p; });
+  cross(box.droppers, [](Design& d, const auto* p) { d.dropper = p; });
+  cross(box.series_resistors, [](Design& d, const auto* p) { d.series_resistor = p; });
+  cross(box.clamps, [](Design& d, const auto* p) { d.clamp = p; });
+  cross(box.reservoirs, [](Design& d, const auto* p) { d.reservoir = p; });
+  cross(box.discharges, [](Design& d, const Chain& c) {
+    d.discharge = c.element;
+    d.discharge_count = c.count;
+  });
+  cross(box.rectifiers, [](Design& d, const auto* p) { d.rectifier = p; });
+  cross(box.varistors, [](Design& d, const auto* p) { d.varistor = p; });
+  cross(box.fuses, [](Design& d, const auto* p) { d.fuse = p; });
+  cross(box.ceramics, [](Design& d, const auto* p) { d.ceramic = p; });
+  return members;
+}
+
+std::vector<MemberFigures> figures_of(const Design& member, const BoundContext& context) {
+  std::vector<MemberFigures> by_supply;
+  for (const auto& supply : context.supplies) {
+    Evidence evidence(member, *context.requirement, *supply.supply, supply.shapes);
+    MemberFigures figures;
+    if (const auto cost = cost_micro(member, *context.requirement)) figures.cost = static_cast<double>(*cost);
+    if (const auto area = board_area_um2(member, *context.requirement)) {
+      figures.board_area = static_cast<double>(*area);
+    }
+    if (evidence.standby_worst().state.usable()) {
+      figures.standby_loss_W = evidence.standby_worst().state.input_power_W;
+    }
+    if (evidence.lean().usable) figures.current_margin_A = evidence.lean().margin_A;
+    for (const auto& rule : check_table()) {
+      const auto check = rule.evaluate(evidence);
+      Use use;
+      if (!check) {
+        use.known = true;
+      } else if (!check->unsolved) {
+        use.known = !check->pass || check->value.has_value();
+        if (check->pass && check->value && check->limit) {
+          use.share = check->at_most ? *check->value / *check->limit : *check->limit / *check->value;
+        }
+      }
+      figures.uses.push_back(use);
+    }
+    by_supply.push_back(std::move(figures));
+  }
+  return by_supply;
+}
+
+std::vector<ScoredBox> scored_boxes(const circuit::Arrangement& arrangement, int count, int most_members,
+                                    std::uint64_t seed) {
+  static const std::vector<BoundContext> contexts = [] {
+    std::vector<BoundContext> made;
+    for (const auto& requirement : requirements()) made.emplace_back(requirement);
+    return made;
+  }();
+  std::vector<ScoredBox> boxes;
+  const values::RandomStream all(seed);
+  for (int i = 0; i < count; ++i) {
+    auto random = all.split(static_cast<std::uint64_t>(i));
+    const auto& context = contexts[static_cast<std::size_t>(i) % contexts.size()];
+    ScoredBox scored;
+    scored.context = &context;
+    scored.box = random_box(arrangement, *context.requirement, most_members, random);
+    for (const auto& member : members_of(scored.box)) scored.members.push_back(figures_of(member, context));
+    boxes.push_back(std::move(scored));
+  }
+  return boxes;
+}
+
+}  // namespace dropfront::scoring::test
