@@ -7,6 +7,7 @@
 #include "dropfront/app/problem_files.hpp"
 #include "dropfront/app/progress_line.hpp"
 #include "dropfront/problem/binding.hpp"
+#include "dropfront/problem/box_binding.hpp"
 #include "dropfront/report/candidates_json.hpp"
 #include "dropfront/report/cautions.hpp"
 #include "dropfront/report/folder_writer.hpp"
@@ -102,7 +103,8 @@ class Run {
     ProgressLine line(console_.err, console_.progress && !arguments_.quiet, name);
     options.progress = [&line](const search::Progress& progress) { line.show(progress); };
     const auto bound = problem::bind(problem);
-    const auto outcome = search::run_search(*bound, options);
+    const auto bounds = problem::bind_bounds(problem);
+    const auto outcome = search::run_search(*bound, options, bounds.get());
     auto result = report::make_result(*bound, outcome, options, DROPFRONT_VERSION);
     none_ = none_ || result.front.empty();
     cautions_.insert(cautions_.end(), problem.cautions.begin(), problem.cautions.end());

@@ -61,6 +61,8 @@ SlotSpace make_space(const Offers& offers) {
   Builder build(out);
   build.add(SlotId::arrangement, "arrangement", offers.arrangements.size(), {}, true);
   build.add(SlotId::output_stage, "output_stage", offers.output_stages.size(), {}, true);
+  for (const parts::OutputStage* stage : offers.output_stages)
+    out.space.slots.back().group.push_back(static_cast<int>(stage->kind));
   build.add(SlotId::dropper, "dropper", offers.droppers.size(),
             logs(offers.droppers, &parts::Dropper::capacitance_F));
   build.add(SlotId::series_resistor, "series_resistor", offers.series_resistors.size(),

@@ -43,53 +43,69 @@ OpenBox open_box(Box box, int objectives) {
   return open;
 }
 
-bool BoxTrial::discard(OpenBox& open, int depth, Tried& tried) const {
+bool BoxTrial::discard(OpenBox& open, int depth, Verdict& verdict) const {
   const Bounds found = bounder_.bound(open.box, depth);
   if (found.broken >= 0) {
-    tried.fate = Tried::Fate::broken;
-    tried.check = found.broken;
-    tried.kind = found.broken_kind;
+    verdict.fate = Fate::broken;
+    verdict.check = found.broken;
+    verdict.kind = found.broken_kind;
     return true;
   }
   if (found.undefined) {
-    tried.fate = Tried::Fate::undefined;
+    verdict.fate = Fate::undefined;
     return true;
   }
   sharpen(open, found);
   const Choice least = least_choice(open.box);
   if (!front_.rejects(open.bound, least)) return false;
-  tried.fate = Tried::Fate::dominated;
+  verdict.fate = Fate::dominated;
   // The strongest reasoning that suffices.
   for (const BoundKind kind : {BoundKind::exact, BoundKind::theorem, BoundKind::monotone}) {
     std::vector<double> bound = open.bound;
     for (std::size_t k = 0; k < bound.size(); ++k)
       if (open.kinds[k] > kind) bound[k] = unknown;
-    tried.kind = kind;
+    verdict.kind = kind;
     if (front_.rejects(bound, least)) break;
   }
   return true;
 }
 
+Tried::Single BoxTrial::settle(const Choice& choice) const {
+  Tried::Single single;
+  single.choice = choice;
+  single.fate = Fate::settled;
+  single.seen = session_.seen(choice);
+  if (session_.evaluated(choice)) {
+    single.seen = true;
+    return single;
+  }
+  single.look = session_.evaluator.look(choice);
+  if (!single.look.broken.empty()) {
+    single.fate = Fate::broken;
+    single.check = single.look.broken.front();
+  } else if (single.look.outcome != Outcome::compliant) {
+    single.fate = Fate::undefined;
+  } else if (front_.rejects(single.look.objectives, choice)) {
+    single.fate = Fate::dominated;
+  } else {
+    Box box;
+    for (const auto option : choice) box.options.push_back({option});
+    OpenBox open = open_box(std::move(box), session_.evaluator.objective_count());
+    // An evaluation costs more than the deepest bound.
+    if (discard(open, 1, single)) return single;
+    single.evaluation = session_.evaluator.evaluate(
+        choice, [&](const std::vector<double>& objectives) { return front_.rejects(objectives, choice); });
+  }
+  return single;
+}
+
 void BoxTrial::settle(const Box& box, Tried& tried) const {
-  tried.fate = Tried::Fate::settled;
+  tried.fate = Fate::settled;
   std::vector<std::size_t> at(box.options.size(), 0);
   do {
-    Tried::Single single;
-    for (std::size_t s = 0; s < at.size(); ++s) single.choice.push_back(box.options[s][at[s]]);
-    const Choice& choice = single.choice;
-    single.evaluated = session_.evaluated(choice);
-    single.seen = single.evaluated || session_.seen(choice);
-    if (!single.evaluated) {
-      single.look = session_.evaluator.look(choice);
-      if (single.look.outcome == Outcome::compliant) {
-        single.rejected = front_.rejects(single.look.objectives, choice);
-        if (!single.rejected)
-          single.evaluation = session_.evaluator.evaluate(choice, [&](const std::vector<double>& objectives) {
-            return front_.rejects(objectives, choice);
-          });
-      }
-    }
-    tried.singles.push_back(std::move(single));
+    Choice choice;
+    for (std::size_t s = 0; s < at.size(); ++s) choice.push_back(box.options[s][at[s]]);
+    tried.singles.push_back(settle(choice));
   } while (advance(at, box));
 }
 
@@ -106,7 +122,7 @@ Tried BoxTrial::run(OpenBox open, const std::vector<double>& extent) const {
     if (open.box.members() <= most_singles)
       settle(open.box, tried);
     else if (!discard(open, 1, tried)) {
-      tried.fate = Tried::Fate::split;
+      tried.fate = Fate::split;
       auto halves = splitter_.split(open.box, splitter_.widest(open.box, extent));
       tried.halves.push_back(OpenBox{std::move(halves.first), open.bound, open.kinds});
       tried.halves.push_back(OpenBox{std::move(halves.second), open.bound, open.kinds});

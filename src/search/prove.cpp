@@ -61,45 +61,45 @@ class Prover {
     // What the first box fell into comes to the end of the stack, so that it is taken up first.
     for (std::size_t i = count; i-- > 0;) {
       for (std::size_t h = tried[i].halves.size(); h-- > 0;) open_.push_back(std::move(tried[i].halves[h]));
-      if (tried[i].fate == Tried::Fate::untried) open_.push_back(std::move(tried[i].rest));
+      if (tried[i].fate == Fate::untried) open_.push_back(std::move(tried[i].rest));
     }
   }
 
   void merge(const Tried& tried) {
-    if (tried.fate == Tried::Fate::untried) return;
+    if (tried.fate == Fate::untried) return;
     ++proof_.boxes;
     proof_.reduced[index(bounder_.reduce_kind())] += tried.reduced;
-    switch (tried.fate) {
-      case Tried::Fate::broken:
-        proof_.broken[tried.check][index(tried.kind)] += tried.members;
-        break;
-      case Tried::Fate::undefined:
-        proof_.undefined += tried.members;
-        break;
-      case Tried::Fate::dominated:
-        proof_.dominated[index(tried.kind)] += tried.members;
-        break;
-      case Tried::Fate::settled:
-        for (const Tried::Single& single : tried.singles) merge(single);
-        break;
-      case Tried::Fate::untried:
-      case Tried::Fate::split:
-        break;
-    }
+    if (tried.fate == Fate::settled)
+      for (const Tried::Single& single : tried.singles) merge(single);
+    else
+      count(tried, tried.members);
   }
 
   void merge(const Tried::Single& single) {
     Ledger& ledger = session_.ledger;
+    count(single, 1);
     if (!single.seen) ledger.look(single.choice, single.look);
-    if (single.evaluated || single.evaluation)
-      ++proof_.scored;
-    else if (single.rejected)
-      ++proof_.dominated[index(BoundKind::exact)];
-    else if (!single.look.broken.empty())
-      ++proof_.broken[single.look.broken.front()][index(BoundKind::exact)];
-    else
-      ++proof_.undefined;
     if (single.evaluation) ledger.merge(single.choice, *single.evaluation);
+  }
+
+  void count(const Verdict& verdict, double members) {
+    switch (verdict.fate) {
+      case Fate::broken:
+        proof_.broken[verdict.check][index(verdict.kind)] += members;
+        break;
+      case Fate::undefined:
+        proof_.undefined += members;
+        break;
+      case Fate::dominated:
+        proof_.dominated[index(verdict.kind)] += members;
+        break;
+      case Fate::settled:
+        proof_.scored += members;
+        break;
+      case Fate::untried:
+      case Fate::split:
+        break;
+    }
   }
 
   void leave(const OpenBox& open) {

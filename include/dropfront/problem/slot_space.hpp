@@ -24,7 +24,7 @@ enum class SlotId {
 
 /// The offers as the search sees them: slots that offer something, in the order of SlotId. Coordinates are
 /// natural logarithms of capacitance, resistance, voltage, and of the chain's total resistance; an empty
-/// discharge slot stands a factor e above the greatest chain.
+/// discharge slot stands a factor e above the greatest chain. Output stages are grouped by kind.
 struct SlotSpace {
   search::Space space;
   std::vector<SlotId> ids;  ///< one a slot of the space

@@ -17,23 +17,33 @@ struct OpenBox {
 /// A box of which nothing is known.
 OpenBox open_box(Box box, int objectives);
 
-/// What was done with one box.
-struct Tried {
-  enum class Fate { untried, broken, undefined, dominated, split, settled };
+enum class Fate {
+  untried,    ///< the end came first
+  broken,     ///< every member breaks a limit
+  undefined,  ///< every member lacks a figure
+  dominated,  ///< the front dominates what any member could be at best
+  split,      ///< in two halves
+  settled     ///< design by design; of a design: evaluated
+};
+
+/// What became of a box or a design, and why.
+struct Verdict {
   Fate fate = Fate::untried;
-  double reduced = 0;                 ///< members dropped first
-  double members = 0;                 ///< those that remained
-  int check = -1;                     ///< the limit that all break
+  int check = -1;                     ///< fate broken: the limit
   BoundKind kind = BoundKind::exact;  ///< of the reasoning that discarded it
-  std::vector<OpenBox> halves;        ///< fate split
-  OpenBox rest;                       ///< fate untried: the box as it is now
-  struct Single {
+};
+
+/// What was done with one box.
+struct Tried : Verdict {
+  double reduced = 0;           ///< members dropped first
+  double members = 0;           ///< those that remained
+  std::vector<OpenBox> halves;  ///< fate split
+  OpenBox rest;                 ///< fate untried: the box as it was
+  struct Single : Verdict {
     Choice choice;
-    bool seen = false;       ///< looked at before the proof
-    bool evaluated = false;  ///< evaluated before the proof
-    Evaluation look;
-    bool rejected = false;                 ///< by the front, from its look
-    std::optional<Evaluation> evaluation;  ///< neither of the three
+    bool seen = false;  ///< looked at before the proof
+    Evaluation look;    ///< empty when evaluated before the proof
+    std::optional<Evaluation> evaluation;
   };
   std::vector<Single> singles;  ///< fate settled
 };
@@ -51,8 +61,9 @@ class BoxTrial {
   static constexpr int most_singles = 8;
 
  private:
-  bool discard(OpenBox& open, int depth, Tried& tried) const;
+  bool discard(OpenBox& open, int depth, Verdict& verdict) const;
   void settle(const Box& box, Tried& tried) const;
+  Tried::Single settle(const Choice& choice) const;
 
   const Session& session_;
   const Bounder& bounder_;

@@ -1,0 +1,97 @@
+#include "dropfront/problem/box_binding.hpp"
+
+#include <algorithm>
+#include <limits>
+
+#include "dropfront/problem/design_box.hpp"
+#include "dropfront/problem/score_view.hpp"
+#include "dropfront/scoring/bounds/box_bounder.hpp"
+
+namespace dropfront::problem {
+namespace {
+
+constexpr double kUnknown = -std::numeric_limits<double>::infinity();
+
+/// More than twice what the stop tolerances of steady states and of the available current leave uncertain in
+/// a member's own figures, and orders below any resolution worth asking for.
+constexpr double kSlack = 2e-8;
+
+search::BoundKind kind_of(scoring::BoundClass known) {
+  switch (known) {
+    case scoring::BoundClass::exact:
+      return search::BoundKind::exact;
+    case scoring::BoundClass::theorem:
+      return search::BoundKind::theorem;
+    case scoring::BoundClass::monotone:
+      break;
+  }
+  return search::BoundKind::monotone;
+}
+
+class Boxes : public search::Bounder {
+ public:
+  explicit Boxes(const Problem& problem)
+      : problem_(problem),
+        slots_(make_space(problem.offers)),
+        view_(problem.requirement),
+        bounder_(problem.requirement) {}
+
+  search::Bounds bound(const search::Box& box, int depth) const override {
+    const scoring::BoxBound found = bounder_.bound(design_box(problem_.offers, slots_.ids, box), depth);
+    search::Bounds out;
+    for (const scoring::Objective objective : problem_.requirement.objectives) add(objective, found, out);
+    const auto& names = view_.check_names();
+    const auto broken = std::find(names.begin(), names.end(), found.broken);
+    if (!found.broken.empty() && broken != names.end()) {
+      out.broken = static_cast<int>(broken - names.begin());
+      out.broken_kind = kind_of(found.broken_class);
+    }
+    return out;
+  }
+
+  double reduce(search::Box& box) const override {
+    scoring::DesignBox parts = design_box(problem_.offers, slots_.ids, box);
+    const double before = box.members();
+    if (!(bounder_.reduce(parts) > 0)) return 0;
+    keep_parts(problem_.offers, slots_.ids, parts, box);
+    return before - box.members();
+  }
+
+ private:
+  static void add(scoring::Objective objective, const scoring::BoxBound& found, search::Bounds& out) {
+    using search::BoundKind;
+    const auto put = [&](bool known, double value, BoundKind kind) {
+      out.objectives.push_back(known ? value : kUnknown);
+      out.kinds.push_back(kind);
+    };
+    // Divided as in ScoreView: equal integers give equal doubles.
+    const auto millionths = [&](const std::optional<std::int64_t>& sum) {
+      put(sum.has_value(), static_cast<double>(sum.value_or(0)) / 1e6, BoundKind::exact);
+    };
+    switch (objective) {
+      case scoring::Objective::cost:
+        return millionths(found.cost_micro);
+      case scoring::Objective::board_area:
+        return millionths(found.board_area_um2);
+      case scoring::Objective::standby_loss:
+        return put(found.standby_loss_W.has_value(), found.standby_loss_W.value_or(0) - kSlack,
+                   kind_of(found.standby_class));
+      case scoring::Objective::current_margin:
+        return put(found.current_margin_A.has_value(), -found.current_margin_A.value_or(0) - kSlack,
+                   kind_of(found.margin_class));
+    }
+  }
+
+  const Problem& problem_;
+  SlotSpace slots_;
+  ScoreView view_;
+  scoring::BoxBounder bounder_;
+};
+
+}  // namespace
+
+std::unique_ptr<search::Bounder> bind_bounds(const Problem& problem) {
+  return std::make_unique<Boxes>(problem);
+}
+
+}  // namespace dropfront::problem
