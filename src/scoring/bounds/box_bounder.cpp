@@ -66,10 +66,14 @@ BoxBound BoxBounder::bound(const DesignBox& box, int depth) const {
   BoxBound bound;
   if (box.arrangement == nullptr || any_empty(box)) return bound;
   const BoxEnds ends(box, context_);
+  std::vector<BoxQuestion> questions;
+  questions.reserve(context_.supplies.size());
+  for (const auto& supply : context_.supplies) {
+    questions.emplace_back(box, ends, context_, supply).verdict_only = true;
+  }
   for (const auto& rule : bound_table()) {
     if (rule.depth > depth) continue;
-    for (const auto& supply : context_.supplies) {
-      const BoxQuestion question{box, ends, context_, supply};
+    for (const auto& question : questions) {
       if (rule.objective != nullptr) {
         const auto value = rule.objective(question);
         if (value && std::isfinite(*value)) take_objective(rule, *value, context_, bound);

@@ -139,9 +139,12 @@ void BoxEnds::take_air(const DesignBox& box, const BoundContext& context) {
 void BoxEnds::take_warm_figures(const DesignBox& box, const BoundContext& context) {
   const double hot_degC = context.ambient_high_degC();
   for (const auto* part : box.droppers) {
-    for (const double degC : {context.ambient_low_degC(), hottest_air_degC_}) {
-      take(Figure::lean_F, dropper_F(*part, End::low, true, degC));
-    }
+    const auto lean_F = [&](double degC) { return dropper_F(*part, End::low, true, degC); };
+    const double warmed_K = hottest_air_degC_ - hot_degC;
+    const double cold_degC = context.ambient_low_degC();
+    const double cold_F = std::max(lean_F(cold_degC), lean_F(cold_degC + warmed_K));
+    const double hot_F = std::max(lean_F(hot_degC), lean_F(hottest_air_degC_));
+    take(Figure::lean_F, std::min(lean_F(cold_degC), lean_F(hottest_air_degC_)), std::min(cold_F, hot_F));
     for (const double degC : {hot_degC, hottest_air_degC_}) {
       take(Figure::rich_F, dropper_F(*part, End::high, false, degC));
     }

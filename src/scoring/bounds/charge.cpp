@@ -88,6 +88,12 @@ CornerCharge corner_charge(const BoxQuestion& question, BoxCorner corner) {
   return charge;
 }
 
+const CornerCharge& BoxQuestion::charge(BoxCorner corner) const {
+  auto& known = charges_[corner == BoxCorner::rich ? 1 : 0];
+  if (!known) known = corner_charge(*this, corner);
+  return *known;
+}
+
 double load_most_A(const BoxQuestion& question, BoxCorner corner, double share) {
   const auto& loads = question.context.loads;
   const bool rich = corner == BoxCorner::rich;

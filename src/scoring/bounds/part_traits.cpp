@@ -57,7 +57,8 @@ BoxStress::BoxStress(const DesignBox& box, const BoxEnds& ends, const BoundConte
   series_least_ohm = ends.least(Figure::series_low_ohm);
   clamp_W = chain_Vrms = rail_V = 0;
   for (const auto& supply : of.supplies) {
-    const auto charge = corner_charge({box, ends, of, supply}, BoxCorner::rich);
+    const BoxQuestion question{box, ends, of, supply};
+    const auto charge = corner_charge(question, BoxCorner::rich);
     const double clamp_V =
         ends.greatest(Figure::cold_clamp_V) + ends.greatest(Figure::clamp_ohm) * ends.peak_A();
     clamp_W = std::max(clamp_W, (clamp_V + ends.rich_heat().forward_V) * ends.rich_heat().mean_A);

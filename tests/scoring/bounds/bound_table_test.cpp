@@ -61,7 +61,8 @@ double worst_overreach(const BoundRule& rule, const std::vector<test::ScoredBox>
     BoxEnds ends(scored.box, *scored.context);
     if (turn.figure) ends.turn(*turn.figure);
     for (std::size_t s = 0; s < scored.context->supplies.size(); ++s) {
-      const BoxQuestion question{scored.box, ends, *scored.context, scored.context->supplies[s], turn.lists};
+      BoxQuestion question(scored.box, ends, *scored.context, scored.context->supplies[s]);
+      question.lists_turned = turn.lists;
       for (const auto& member : scored.members) {
         std::optional<double> tightness;
         worst = std::max(worst, overreach(rule, question, member[s], tightness));

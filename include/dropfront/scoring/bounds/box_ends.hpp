@@ -9,7 +9,7 @@ namespace dropfront::scoring {
 
 /// Figures of a part (or chain) that bounds take the least or greatest of over a list.
 enum class Figure {
-  lean_F,           ///< dropper, end of life, low end, at the temperature of any lean corner that leaves most
+  lean_F,           ///< dropper, end of life, low end; the most the lesser of both ambients can leave
   new_F,            ///< dropper, high end, new, 20 degC: standby
   rich_F,           ///< dropper, high end, over the temperatures the hot rich corner can reach
   loss_tangent,     ///< of the dropper

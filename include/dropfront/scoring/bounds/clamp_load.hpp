@@ -12,7 +12,7 @@ class ClampLoad {
  public:
   explicit ClampLoad(const BoxQuestion& question)
       : question_(&question),
-        charge_(corner_charge(question, BoxCorner::rich)),
+        charge_(question.charge(BoxCorner::rich)),
         spare_A_(std::max(0.0, charge_.both_A - load_most_A(question, BoxCorner::rich, 0))) {}
 
   double least_W(const parts::Clamp& part) const {

@@ -7,7 +7,7 @@ namespace dropfront::scoring::bounds {
 double clamp_junction(const BoxQuestion& question) {
   if (!question.ends.known_circuit()) return 0;
   const ClampLoad load(question);
-  return question.least_over(question.box.clamps, [&](const parts::Clamp* part) {
+  return question.least_share(question.box.clamps, [&](const parts::Clamp* part) {
     const double resistance_K_per_W = part->thermal_resistance_K_per_W;
     const double limit_degC = part->max_junction_degC - question.context.requirement->derating.junction_K;
     if (!(resistance_K_per_W > 0) || !(limit_degC > 0)) return 0.0;

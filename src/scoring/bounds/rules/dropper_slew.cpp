@@ -10,7 +10,7 @@ double dropper_slew(const BoxQuestion& question) {
   const double series_ohm = question.ends.greatest(Figure::series_low_ohm);
   const double step_V = 2 * question.supply.rich.crest_V;
   const double hot_degC = question.context.ambient_high_degC();
-  return question.least_over(question.box.droppers, [&](const parts::Dropper* part) {
+  return question.least_share(question.box.droppers, [&](const parts::Dropper* part) {
     if (!part->slew_V_per_s) return 0.0;
     return step_V / (series_ohm * dropper_F(*part, End::low, true, hot_degC)) / *part->slew_V_per_s;
   });

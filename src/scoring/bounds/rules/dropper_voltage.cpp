@@ -6,7 +6,7 @@ namespace dropfront::scoring::bounds {
 double dropper_voltage(const BoxQuestion& question) {
   const double derating = question.context.requirement->derating.dropper_voltage;
   const double line_Vrms = question.supply.rich.voltage_Vrms;
-  return question.least_over(question.box.droppers, [&](const parts::Dropper* part) {
+  return question.least_share(question.box.droppers, [&](const parts::Dropper* part) {
     return part == nullptr ? 0 : line_Vrms / (part->rated_voltage_Vrms * derating);
   });
 }

@@ -12,10 +12,10 @@ double output_band(const BoxQuestion& question) {
   const double allowed_V = need.voltage_V * need.tolerance;
   double rail_V = 0;
   if (question.ends.known_circuit()) {
-    const auto charge = corner_charge(question, BoxCorner::rich);
+    const auto charge = question.charge(BoxCorner::rich);
     rail_V = empty_rail_V(question, charge, charge.clamp_V);
   }
-  return question.least_over(question.box.output_stages, [&](const parts::OutputStage* stage) {
+  return question.least_share(question.box.output_stages, [&](const parts::OutputStage* stage) {
     if (stage == nullptr) return 0.0;
     const bool direct = stage->kind == parts::StageKind::direct;
     const double low_V = direct ? need.voltage_V : stage->output_voltage_V * (1 - stage->tolerance);

@@ -8,11 +8,11 @@ namespace dropfront::scoring::bounds {
 /// derating. Theorem.
 double output_stage_junction(const BoxQuestion& question) {
   if (!question.ends.known_circuit()) return 0;
-  const auto charge = corner_charge(question, BoxCorner::rich);
+  const auto charge = question.charge(BoxCorner::rich);
   const double rail_V =
       rail_floor_V(question, BoxCorner::rich, charge, load_most_A(question, BoxCorner::rich, 1));
   const double heaviest_A = question.context.loads.heaviest_output_A();
-  return question.least_over(question.box.output_stages, [&](const parts::OutputStage* stage) {
+  return question.least_share(question.box.output_stages, [&](const parts::OutputStage* stage) {
     if (stage->kind == parts::StageKind::direct || !stage->thermal_resistance_K_per_W ||
         !stage->max_junction_degC) {
       return 0.0;

@@ -11,7 +11,7 @@ namespace dropfront::scoring::bounds {
 double rail_transient(const BoxQuestion& question) {
   const auto& ends = question.ends;
   if (!ends.known_circuit()) return 0;
-  const auto charge = corner_charge(question, BoxCorner::rich);
+  const auto charge = question.charge(BoxCorner::rich);
   const double cold_degC =
       question.context.ambient_low_degC() + ends.hottest_air_degC() - question.context.ambient_high_degC();
   const bool two_ambients = question.context.ambient_low_degC() != question.context.ambient_high_degC();
@@ -20,7 +20,7 @@ double rail_transient(const BoxQuestion& question) {
         const bool rated = has_input_rating(*stage) && stage->input_max_V;
         return rated ? *stage->input_max_V : std::numeric_limits<double>::infinity();
       });
-  return question.least_over(question.box.reservoirs, [&](const parts::Reservoir* part) {
+  return question.least_share(question.box.reservoirs, [&](const parts::Reservoir* part) {
     const double hot_ohm = reservoir_greatest_esr_ohm(*part, true, ends.hottest_air_degC());
     double rail_V = first_moment(question, charge, charge.clamp_V, hot_ohm).rail_V;
     if (two_ambients) {

@@ -7,7 +7,7 @@ namespace dropfront::scoring::bounds {
 /// Wanted life over the life at the mean ambient without ripple or local rise. Theorem.
 double reservoir_life(const BoxQuestion& question) {
   const auto& around = question.context.requirement->surroundings;
-  return question.least_over(question.box.reservoirs, [&](const parts::Reservoir* part) {
+  return question.least_share(question.box.reservoirs, [&](const parts::Reservoir* part) {
     if (part == nullptr || !part->life_h || !part->life_temperature_degC || !part->ripple_current_Arms)
       return 0.0;
     const double life_h = circuit::electrolytic_life_h(*part->life_h, *part->life_temperature_degC,

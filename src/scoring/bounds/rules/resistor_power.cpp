@@ -10,11 +10,11 @@ namespace dropfront::scoring::bounds {
 /// part's own rating at the high ambient (warmer air allows less). Theorem.
 double resistor_power(const BoxQuestion& question) {
   if (!question.ends.known_circuit()) return 0;
-  const auto charge = corner_charge(question, BoxCorner::rich);
+  const auto charge = question.charge(BoxCorner::rich);
   const double heating = question.supply.supply->harmonics_given ? 1 : kUnstatedHarmonicsHeating;
   const double share = circuit::resistor_power_share(question.context.ambient_high_degC()) *
                        question.context.requirement->derating.resistor_power;
-  return question.least_over(question.box.series_resistors, [&](const parts::Resistor* part) {
+  return question.least_share(question.box.series_resistors, [&](const parts::Resistor* part) {
     if (!part->rated_power_W) return 0.0;
     const double series_ohm = resistor_ohm(*part, End::high);
     const double line_Arms = fundamental(question, BoxCorner::rich, charge, series_ohm).line_Arms;

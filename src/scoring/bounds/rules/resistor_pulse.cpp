@@ -36,7 +36,7 @@ double energy_per_F(const BoxQuestion& question, const CornerCharge& charge, dou
 double resistor_pulse(const BoxQuestion& question) {
   const auto& ends = question.ends;
   if (!ends.known_circuit()) return 0;
-  const auto charge = corner_charge(question, BoxCorner::rich);
+  const auto charge = question.charge(BoxCorner::rich);
   const double least_F = ends.least(Figure::rich_F);
   const auto greatest_F = [&](const parts::Dropper& part) {
     return std::max(dropper_F(part, End::high, false, question.context.ambient_low_degC()),
@@ -47,7 +47,7 @@ double resistor_pulse(const BoxQuestion& question) {
                                     dropper_F(*part, End::high, false, question.context.ambient_high_degC()));
     return pulse_F / std::sqrt(greatest_F(*part));
   });
-  return question.least_over(question.box.series_resistors, [&](const parts::Resistor* part) {
+  return question.least_share(question.box.series_resistors, [&](const parts::Resistor* part) {
     if (!part->pulse_energy_J) return 0.0;
     double use = 0;
     for (const End end : {End::low, End::high}) {

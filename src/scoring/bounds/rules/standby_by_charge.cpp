@@ -14,7 +14,7 @@ namespace dropfront::scoring::bounds {
 std::optional<double> standby_by_charge(const BoxQuestion& question) {
   const auto& ends = question.ends;
   if (!ends.known_circuit()) return std::nullopt;
-  const auto charge = corner_charge(question, BoxCorner::standby);
+  const auto charge = question.charge(BoxCorner::standby);
   const double drop_V = charge.drop_least_V;
   const double floor_V =
       rail_floor_V(question, BoxCorner::standby, charge, load_most_A(question, BoxCorner::standby, 1));

@@ -13,7 +13,7 @@ double supply_start(const BoxQuestion& question) {
   const auto& need = question.context.requirement->output;
   const auto& loads = question.context.loads;
   const double beside_A = question.ends.least(Figure::leakage_A) + loads.heaviest_rail_A();
-  return question.least_over(question.box.output_stages, [&](const parts::OutputStage* stage) {
+  return question.least_share(question.box.output_stages, [&](const parts::OutputStage* stage) {
     const bool step_down = stage->kind == parts::StageKind::step_down;
     if (step_down && !stage->input_on_V) return 0.0;
     const double rail_V = step_down ? *stage->input_on_V : required_rail_V(*stage, need, loads).value_or(0);
