@@ -12,18 +12,28 @@
 
 namespace dropfront::scoring::test {
 
-/// The demonstration parts lists, read once.
+/// The demonstration parts lists with some odd parts of our own added, made once.
 const parts::Catalogue& demo_parts();
 
 /// Requirements to bound against: 230 V and 120 V, warm enclosure or none, given harmonics, two supplies;
 /// three output voltages for the three kinds of stage. Invented.
 const std::vector<Requirement>& requirements();
 
+/// One context a requirement, of static life.
+const std::vector<BoundContext>& contexts();
+
+/// A box with three entries in one slot (0: output stages, 1: droppers, 2: series resistors, 3: clamps,
+/// 4: reservoirs, 5: discharge chains, 6: rectifiers) and one in each other.
+DesignBox box_open_in(int slot, const circuit::Arrangement& arrangement, const Requirement& requirement,
+                      values::RandomStream& random);
+
 /// A box of at most `most_members` members; its output stages are of one kind.
 DesignBox random_box(const circuit::Arrangement& arrangement, const Requirement& requirement,
                      int most_members, values::RandomStream& random);
 
 std::vector<Design> members_of(const DesignBox& box);
+/// The box that holds one design only.
+DesignBox box_of(const Design& design);
 
 /// How far a member is from breaking one check on one supply.
 struct Use {

@@ -103,6 +103,23 @@ const parts::Catalogue& demo_parts() {
   static const parts::Catalogue catalogue = [] {
     parts::Catalogue read;
     parts::read_parts_folder(std::string(DROPFRONT_SOURCE_DIR) + "/problems/parts/demo", read);
+    // What the lists do not hold: lossy films, a class for lesser impulses or none, a capacitance that rises
+    // with temperature, ratings left out.
+    for (std::size_t i = 0; i < read.droppers.size(); i += 5) {
+      auto odd = read.droppers[i];
+      odd.loss_tangent = 0.01 + 0.002 * static_cast<double>(i % 7);
+      odd.class_name = i % 2 == 0 ? "X3" : "";
+      if (i % 3 == 0) odd.temperature_coefficient_per_K = 150e-6;
+      if (i % 4 == 0) odd.slew_V_per_s.reset();
+      read.droppers.push_back(odd);
+    }
+    for (std::size_t i = 0; i < read.resistors.size(); i += 9) {
+      auto odd = read.resistors[i];
+      odd.pulse_energy_J.reset();
+      odd.opens_at.reset();
+      if (i % 2 == 0) odd.rated_power_W.reset();
+      read.resistors.push_back(odd);
+    }
     return read;
   }();
   return catalogue;
@@ -111,6 +128,35 @@ const parts::Catalogue& demo_parts() {
 const std::vector<Requirement>& requirements() {
   static const std::vector<Requirement> all = make_requirements();
   return all;
+}
+
+const std::vector<BoundContext>& contexts() {
+  static const std::vector<BoundContext> all = [] {
+    std::vector<BoundContext> made;
+    for (const auto& requirement : requirements()) made.emplace_back(requirement);
+    return made;
+  }();
+  return all;
+}
+
+DesignBox box_open_in(int slot, const circuit::Arrangement& arrangement, const Requirement& requirement,
+                      values::RandomStream& random) {
+  auto box = random_box(arrangement, requirement, 1, random);
+  // Three whole designs are drawn; of two of them only the open slot is kept.
+  for (int i = 0; i < 2; ++i) {
+    const auto other = random_box(arrangement, requirement, 1, random);
+    const auto take = [](auto& list, const auto& from) { list.push_back(from.front()); };
+    if (slot == 0 && other.output_stages.front()->kind == box.output_stages.front()->kind) {
+      take(box.output_stages, other.output_stages);
+    }
+    if (slot == 1) take(box.droppers, other.droppers);
+    if (slot == 2) take(box.series_resistors, other.series_resistors);
+    if (slot == 3) take(box.clamps, other.clamps);
+    if (slot == 4) take(box.reservoirs, other.reservoirs);
+    if (slot == 5) take(box.discharges, other.discharges);
+    if (slot == 6) take(box.rectifiers, other.rectifiers);
+  }
+  return box;
 }
 
 DesignBox random_box(const circuit::Arrangement& arrangement, const Requirement& requirement,
@@ -187,6 +233,24 @@ std::vector<Design> members_of(const DesignBox& box) {
   return members;
 }
 
+DesignBox box_of(const Design& design) {
+  DesignBox box;
+  box.arrangement = design.arrangement;
+  box.output_stages = {design.output_stage};
+  box.droppers = {design.dropper};
+  box.series_resistors = {design.series_resistor};
+  box.clamps = {design.clamp};
+  box.reservoirs = {design.reservoir};
+  box.discharges = {{design.discharge, design.discharge_count}};
+  box.rectifiers = {design.rectifier};
+  box.varistors = {design.varistor};
+  box.fuses = {design.fuse};
+  box.ceramics = {design.ceramic};
+  box.thyristors = {design.thyristor};
+  box.gate_resistors = {design.gate_resistor};
+  return box;
+}
+
 std::vector<MemberFigures> figures_of(const Design& member, const BoundContext& context) {
   std::vector<MemberFigures> by_supply;
   for (const auto& supply : context.supplies) {
@@ -220,16 +284,11 @@ std::vector<MemberFigures> figures_of(const Design& member, const BoundContext& 
 
 std::vector<ScoredBox> scored_boxes(const circuit::Arrangement& arrangement, int count, int most_members,
                                     std::uint64_t seed) {
-  static const std::vector<BoundContext> contexts = [] {
-    std::vector<BoundContext> made;
-    for (const auto& requirement : requirements()) made.emplace_back(requirement);
-    return made;
-  }();
   std::vector<ScoredBox> boxes;
   const values::RandomStream all(seed);
   for (int i = 0; i < count; ++i) {
     auto random = all.split(static_cast<std::uint64_t>(i));
-    const auto& context = contexts[static_cast<std::size_t>(i) % contexts.size()];
+    const auto& context = contexts()[static_cast<std::size_t>(i) % contexts().size()];
     ScoredBox scored;
     scored.context = &context;
     scored.box = random_box(arrangement, *context.requirement, most_members, random);
