@@ -46,7 +46,8 @@ CLI::App* add_search(CLI::App& app, SearchArguments& a) {
   command->add_flag("--prove", a.prove,
                     "Go on until nothing in the lists can do better (small problems: always)");
   command->add_option("--effort", a.effort, "quick, normal or deep (default: as the problem says)")
-      ->check(CLI::IsMember({"quick", "normal", "deep"}));
+      ->check(CLI::IsMember({"quick", "normal", "deep"}))
+      ->type_name("EFFORT");
   command->add_option("--top", a.top, "Designs in each ranked set")
       ->check(CLI::Range(1, 1000))
       ->type_name("N");
@@ -136,7 +137,8 @@ CLI::App* add_start(CLI::App& app, StartArguments& a) {
 }
 
 void refuse_unknown_command(const CLI::App& app, int argc, const char* const* argv) {
-  if (argc < 2 || *argv[1] == '-' || *argv[1] == '\0') return;
+  if (argc < 2) throw values::InputError("dropfront", "", "no command given; dropfront --help lists them");
+  if (*argv[1] == '-' || *argv[1] == '\0') return;
   std::vector<std::string> known;
   for (const CLI::App* one : app.get_subcommands({})) known.push_back(one->get_name());
   if (std::find(known.begin(), known.end(), argv[1]) != known.end()) return;

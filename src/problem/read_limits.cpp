@@ -46,7 +46,7 @@ std::optional<scoring::DischargeRule> read_discharge(ObjectReader& limits, Probl
     return rule;
   }
   if (given->node().kind == Node::Kind::text) {
-    read_word(*given, {"none"});
+    if (given->node().text != "none") throw given->wrong(R"("none" or an object {"voltage", "after"})");
     problem.cautions.push_back(
         "limits.discharge: \"none\"; the voltage left after unplugging is not checked");
     return std::nullopt;
@@ -93,7 +93,7 @@ void read_limits(const Cursor& cursor, Problem& problem) {
   ObjectReader reader(cursor, keys::limits);
   scoring::Limits& limits = problem.requirement.limits;
   limits.standby_power_W =
-      quantity_or_none(problem, reader, "standby_power", Unit::watt, kPositive, "absent: no check");
+      quantity_or_none(problem, reader, "standby_power", Unit::watt, {0, 100, true}, "absent: no check");
   limits.current_margin = quantity_or(problem, reader, "current_margin", Unit::share, {0, 10, false}, 0,
                                       "the worst case already holds ageing and tolerances");
   limits.start_time_s =

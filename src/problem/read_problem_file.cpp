@@ -37,8 +37,8 @@ void note_column_defaults(Problem& problem) {
         continue;
       for (const parts::Column& column : parts::columns_of(kind)) {
         if (column.column_class != parts::ColumnClass::property) continue;
-        problem.defaults.push_back({input.name + " " + column.name, column.default_text,
-                                    "where a row leaves it out: " + column.default_reason});
+        problem.defaults.push_back(
+            {input.name + " " + column.name, column.default_text, column.default_reason});
       }
     }
   }

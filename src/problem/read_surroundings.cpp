@@ -6,14 +6,14 @@
 #include "dropfront/problem/names.hpp"
 #include "dropfront/problem/sections.hpp"
 #include "dropfront/values/quantity.hpp"
+#include "dropfront/values/year.hpp"
 
 namespace dropfront::problem {
 namespace {
 
 using values::Unit;
 
-// 8760 h, as the unit "years" is read.
-constexpr double kYear_s = 31536000;
+constexpr double kDay_s = 86400;  // a bare 10 is ten seconds: no life
 
 void read_ambient(const Cursor& cursor, Problem& problem) {
   constexpr Allowed kWeather{-60, 150, false};
@@ -49,9 +49,10 @@ void read_surroundings(const Cursor& surroundings, Problem& problem) {
   read_ambient(reader.take_object("ambient"), problem);
   s.enclosure_K_per_W =
       quantity_or(problem, reader, "enclosure", Unit::K_per_W, kNotNegative, 0, "open air: no enclosure");
-  s.life_years = quantity_or(problem, reader, "life", Unit::second, {0, 100 * kYear_s, true}, 10 * kYear_s,
-                             "a usual product life") /
-                 kYear_s;
+  s.life_years =
+      quantity_or(problem, reader, "life", Unit::second, {kDay_s, 100 * values::kSecondsPerYear, false},
+                  10 * values::kSecondsPerYear, "a usual product life") /
+      values::kSecondsPerYear;
   if (const auto degree = reader.take("pollution_degree")) {
     s.pollution_degree = static_cast<int>(read_whole(*degree, 1, 3));
   } else {

@@ -34,8 +34,12 @@ double read_quantity(const Cursor& cursor, values::Unit unit, Allowed allowed) {
     }
   }
   const bool high_enough = allowed.least_open ? value > allowed.least : value >= allowed.least;
-  if (!high_enough || !(value <= allowed.most)) throw cursor.wrong(range_text(unit, allowed));
-  return value;
+  if (high_enough && value <= allowed.most) return value;
+  // A bare number may have been meant in another unit: say how it was read.
+  const bool bare = node.kind == Node::Kind::number && unit != values::Unit::count;
+  throw cursor.error(fmt::format("found {}{}; allowed: {}", describe(node),
+                                 bare ? ", that is " + values::format_quantity(value, unit) : "",
+                                 range_text(unit, allowed)));
 }
 
 std::int64_t read_whole(const Cursor& cursor, std::int64_t least, std::int64_t most) {

@@ -98,12 +98,22 @@ void write_evidence(JsonWriter& json, const Result& result) {
   json.end_object();
 }
 
+/// Value and limit of a broken check in its own unit, where it was made.
+void write_side(JsonWriter& json, const std::optional<scoring::Check>& check) {
+  if (!check) return;
+  json.member("value", check->value);
+  json.member("limit", check->limit);
+  json.member("unit", check->unit);
+  json.member("side", check->at_most ? "<=" : ">=");
+}
+
 void write_near_misses(JsonWriter& json, const Result& result) {
   json.begin_array();
   for (const auto& miss : result.near_misses) {
     json.begin_object();
     json.member("check", miss.check);
     json.member("shortfall", miss.shortfall);
+    write_side(json, miss.broken);
     json.key("design");
     write_design(json, miss.design);
     json.end_object();
@@ -118,6 +128,7 @@ void write_conflict(JsonWriter& json, const Result& result) {
     json.member("check", conflict.check);
     json.member("failed", conflict.failed);
     json.member("least_shortfall", conflict.least_shortfall);
+    write_side(json, conflict.closest);
     json.end_object();
   }
   json.end_array();

@@ -14,32 +14,16 @@ using scoring::Evidence;
 
 struct Corner {
   const char* name;
-  const scoring::OperatingPoint& (*point)(Evidence& evidence);
+  const scoring::OperatingPoint& (Evidence::*point)();
 };
 
-constexpr Corner kCorners[] = {{"nominal", [](Evidence& e) -> const auto& {return e.nominal();
-}  // namespace
-}  // namespace dropfront::report
-, {"lean_cold", [](Evidence& e) -> const auto& {return e.lean_cold();
-}
-}
-, {"lean_hot", [](Evidence& e) -> const auto& {return e.lean_hot();
-}
-}
-, {"rich_empty", [](Evidence& e) -> const auto& {return e.rich_empty();
-}
-}
-, {"rich_loaded", [](Evidence& e) -> const auto& {return e.rich_loaded();
-}
-}
-, {"standby", [](Evidence& e) -> const auto& {return e.standby();
-}
-}
-, {
-  "standby_worst", [](Evidence & e) -> const auto& { return e.standby_worst(); }
-}
-}
-;
+constexpr Corner kCorners[] = {{"nominal", &Evidence::nominal},
+                               {"lean_cold", &Evidence::lean_cold},
+                               {"lean_hot", &Evidence::lean_hot},
+                               {"rich_empty", &Evidence::rich_empty},
+                               {"rich_loaded", &Evidence::rich_loaded},
+                               {"standby", &Evidence::standby},
+                               {"standby_worst", &Evidence::standby_worst}};
 
 std::vector<std::string> notes_of(const scoring::OperatingPoint& point) {
   const auto& state = point.state;
@@ -71,7 +55,7 @@ CornerDeck corner_deck(const std::string& title, const scoring::Design& design,
   Evidence evidence(design, requirement, supply);
   for (const Corner& known : kCorners) {
     if (known.name != corner) continue;
-    const scoring::OperatingPoint& point = known.point(evidence);
+    const scoring::OperatingPoint& point = (evidence.*known.point)();
     if (!point.state.usable()) return {false, point.state.reason, ""};
     const circuit::Network network = design.arrangement->build(point.values);
     DeckOptions options;

@@ -41,11 +41,25 @@ Status status_of(const search::SearchOutcome& outcome) {
   return outcome.proof && outcome.proof->complete ? Status::proven_none : Status::none_found;
 }
 
-void add_conflict(Result& result, const search::SearchOutcome& outcome,
-                  const std::vector<std::string>& names) {
-  for (std::size_t i = 0; i < outcome.tallies.size() && i < names.size(); ++i)
-    if (outcome.tallies[i].failed > 0)
-      result.conflict.push_back({names[i], outcome.tallies[i].failed, outcome.tallies[i].least_shortfall});
+/// The check of that name with its value and limit, as a design meets it; empty when it was not made. A score
+/// that may end at the first broken limit mostly gets there, and costs less.
+std::optional<scoring::Check> check_of(const scoring::Scorer& scorer, const scoring::Design& design,
+                                       const std::string& name) {
+  for (const auto depth : {scoring::Depth::compliant, scoring::Depth::full})
+    for (const auto& check : scorer.score(design, depth).checks)
+      if (check.id == name) return check;
+  return std::nullopt;
+}
+
+void add_conflict(Result& result, const problem::BoundProblem& bound, const scoring::Scorer& scorer,
+                  const search::SearchOutcome& outcome) {
+  const auto& names = bound.check_names();
+  for (std::size_t i = 0; i < outcome.tallies.size() && i < names.size(); ++i) {
+    const auto& tally = outcome.tallies[i];
+    if (tally.failed > 0)
+      result.conflict.push_back({names[i], tally.failed, tally.least_shortfall,
+                                 check_of(scorer, bound.design(tally.closest), names[i])});
+  }
   std::stable_sort(result.conflict.begin(), result.conflict.end(),
                    [](const auto& a, const auto& b) { return a.failed > b.failed; });
 }
@@ -159,8 +173,9 @@ Result make_result(const problem::BoundProblem& bound, const search::SearchOutco
   const auto& names = bound.check_names();
   for (const auto& miss : outcome.near_misses)
     if (miss.check >= 0 && miss.check < static_cast<int>(names.size()))
-      result.near_misses.push_back({bound.design(miss.choice), names[miss.check], miss.shortfall});
-  if (result.front.empty()) add_conflict(result, outcome, names);
+      result.near_misses.push_back({bound.design(miss.choice), names[miss.check], miss.shortfall,
+                                    check_of(scorer, bound.design(miss.choice), names[miss.check])});
+  if (result.front.empty()) add_conflict(result, bound, scorer, outcome);
   return result;
 }
 

@@ -68,13 +68,25 @@ std::string asked_text(const scoring::Requirement& need) {
   return table.text() + '\n' + limits.text() + "\n  objectives: " + objectives + "\n";
 }
 
+/// What the problem leaves out, then what rows of the lists may leave out.
+std::string defaults_text(const problem::Problem& problem) {
+  TextTable keys({"filled in", "value", "why"});
+  TextTable columns({"left out in a row", "value", "why"});
+  for (const auto& filled : problem.defaults) {
+    const bool of_lists = filled.key.find(".csv ") != std::string::npos;
+    (of_lists ? columns : keys).row({filled.key, filled.value, filled.reason});
+  }
+  std::string text;
+  for (const TextTable* table : {&keys, &columns})
+    if (!table->empty()) text += '\n' + table->text();
+  return text;
+}
+
 }  // namespace
 
 std::string problem_text(const problem::Problem& problem, const search::Space& space) {
   std::string text = wrapped(problem.title) + asked_text(problem.requirement);
-  if (!problem.defaults.empty()) text += "\n  filled in, and why\n";
-  for (const auto& filled : problem.defaults)
-    text += wrapped(fmt::format("{} = {}: {}", filled.key, filled.value, filled.reason), "    ");
+  text += defaults_text(problem);
   text += '\n' + slots_text(problem, space);
   return text + '\n' + cautions_text(with_standing_cautions(problem.cautions));
 }

@@ -33,6 +33,10 @@ std::string status_text(const Combination& combination) {
   return combination.result ? std::string(status_name(combination.result->status)) : "not searched";
 }
 
+std::string currency_of(const Combination& combination) {
+  return combination.result ? combination.result->problem->requirement.currency : "";
+}
+
 std::optional<double> best_of(const Combination& combination, Objective objective) {
   if (!combination.result) return std::nullopt;
   return best_on_front(*combination.result, objective);
@@ -77,6 +81,7 @@ std::string study_json(const Study& study) {
     json.end_object();
     json.member("status", status_text(combination));
     json.member("front", combination.result ? combination.result->front.size() : 0);
+    json.member("currency", currency_of(combination));
     json.key("best");
     json.begin_object(JsonWriter::Layout::flat);
     json.member("cost", best_of(combination, Objective::cost));
@@ -97,8 +102,8 @@ std::string study_csv(const Study& study) {
   std::vector<std::string> header{"folder"};
   if (!study.combinations.empty())
     for (const auto& [key, value] : study.combinations.front().values) header.push_back(key);
-  for (const char* name : {"status", "front", "least_cost", "least_standby_loss_W", "least_board_area_mm2",
-                           "most_current_margin_A"})
+  for (const char* name : {"status", "front", "currency", "least_cost", "least_standby_loss_W",
+                           "least_board_area_mm2", "most_current_margin_A"})
     header.emplace_back(name);
   CsvWriter csv(header);
   for (const auto& combination : study.combinations) {
@@ -106,6 +111,7 @@ std::string study_csv(const Study& study) {
     for (const auto& [key, value] : combination.values) csv.cell(value);
     csv.cell(status_text(combination));
     csv.cell(combination.result ? static_cast<double>(combination.result->front.size()) : 0.0);
+    csv.cell(currency_of(combination));
     for (const auto objective :
          {Objective::cost, Objective::standby_loss, Objective::board_area, Objective::current_margin})
       csv.cell(best_of(combination, objective));

@@ -20,8 +20,19 @@ std::string values_text(const problem::Variation& values) {
 }
 
 std::string across_text(const Study& study) {
-  TextTable table(
-      {"combination", "status", ">front", ">least cost", ">least mW", ">least mm2", ">most margin mA"});
+  // One currency for all, unless it is what varies.
+  std::string currency;
+  for (const auto& combination : study.combinations) {
+    if (!combination.result) continue;
+    const std::string& own = combination.result->problem->requirement.currency;
+    if (!currency.empty() && own != currency) {
+      currency.clear();
+      break;
+    }
+    currency = own;
+  }
+  TextTable table({"combination", "status", ">front", ">least " + (currency.empty() ? "cost" : currency),
+                   ">least mW", ">least mm2", ">most margin mA"});
   for (const auto& combination : study.combinations) {
     const std::string values = values_text(combination.values);
     if (!combination.result) {

@@ -24,6 +24,26 @@ std::string counts_text(const Result& result) {
   return text + ".";
 }
 
+/// Value and limit of a broken check in its own unit.
+std::string found_text(const std::optional<scoring::Check>& check) {
+  if (!check || !check->value) return "-";
+  return check->yes_or_no() ? "no" : with_unit(*check->value, check->unit);
+}
+
+std::string limit_text(const std::optional<scoring::Check>& check) {
+  if (!check || !check->limit) return "-";
+  if (check->yes_or_no()) return "yes";
+  return (check->at_most ? "<= " : ">= ") + with_unit(*check->limit, check->unit);
+}
+
+std::string closest_text(const Result::Conflict& conflict) {
+  const std::string missed = percent(conflict.least_shortfall);
+  const auto& check = conflict.closest;
+  if (!check || !check->value || !check->limit) return "missed its limit by " + missed;
+  if (check->yes_or_no()) return "answers no where yes is asked";
+  return fmt::format("reaches {} where {} is asked, missed by {}", found_text(check), limit_text(check), missed);
+}
+
 std::string nothing_found(const Result& result) {
   std::string text = proven(result) && result.proof->enumerated
                          ? "No design of this problem complies: every one was looked at.\n"
@@ -31,21 +51,20 @@ std::string nothing_found(const Result& result) {
                                       : "No compliant design was found.\n";
   if (result.conflict.empty()) return text;
   const auto& worst = result.conflict.front();
-  text += wrapped(
-      fmt::format("Failed most often: {}, by {} designs; the best of them missed its limit by {}.",
-                  worst.check, counted(static_cast<double>(worst.failed)), percent(worst.least_shortfall)));
-  TextTable table({"limit broken", ">designs", ">best missed by"});
+  text += wrapped(fmt::format("Failed most often: {}, by {} designs; the best of them {}.", worst.check,
+                              counted(static_cast<double>(worst.failed)), closest_text(worst)));
+  TextTable table({"limit broken", ">designs", ">best value", ">limit", ">missed by"});
   for (const auto& conflict : result.conflict)
-    table.row(
-        {conflict.check, counted(static_cast<double>(conflict.failed)), percent(conflict.least_shortfall)});
+    table.row({conflict.check, counted(static_cast<double>(conflict.failed)), found_text(conflict.closest),
+               limit_text(conflict.closest), percent(conflict.least_shortfall)});
   text += '\n' + table.text();
   if (result.near_misses.empty()) return text;
-  TextTable near({"one limit broken", ">missed by", ">dropper", ">resistor", ">clamp", ">reservoir"});
+  TextTable near({"one limit broken", ">value", ">limit", ">dropper", ">resistor", ">clamp", ">reservoir"});
   for (const auto& miss : result.near_misses) {
     const auto& design = miss.design;
-    near.row({miss.check, percent(miss.shortfall), with_unit(design.dropper->capacitance_F, "F"),
-              short_value(*design.series_resistor), short_value(*design.clamp),
-              short_value(*design.reservoir)});
+    near.row({miss.check, found_text(miss.broken), limit_text(miss.broken),
+              with_unit(design.dropper->capacitance_F, "F"), short_value(*design.series_resistor),
+              short_value(*design.clamp), short_value(*design.reservoir)});
   }
   return text + '\n' + near.text();
 }

@@ -9,6 +9,18 @@ namespace {
 
 bool starts_character(char c) { return (static_cast<unsigned char>(c) & 0xC0) != 0x80; }
 
+constexpr int kLongestWord = 44;  ///< words up to this stay whole in a table
+
+int longest_word(std::string_view text) {
+  int longest = 0;
+  while (!text.empty()) {
+    const auto space = text.find(' ');
+    longest = std::max(longest, display_width(text.substr(0, space)));
+    text.remove_prefix(space == std::string_view::npos ? text.size() : space + 1);
+  }
+  return std::min(longest, kLongestWord);
+}
+
 /// Bytes of the first `count` characters.
 std::size_t prefix_bytes(std::string_view text, int count) {
   for (std::size_t i = 0; i < text.size(); ++i)
@@ -27,33 +39,35 @@ std::string clipped(std::string_view text, int width) {
   return std::string(text.substr(0, prefix_bytes(text, std::max(0, width - 2)))) + "..";
 }
 
-std::string wrapped(std::string_view text, std::string_view first) {
-  const std::string blank(display_width(first), ' ');
-  const int room = kTextWidth - static_cast<int>(blank.size());
-  std::string out;
-  std::string line(first);
-  int used = 0;
-  const auto break_line = [&] {
-    out += line + '\n';
-    line = blank;
-    used = 0;
-  };
+std::vector<std::string> broken(std::string_view text, int room) {
+  std::vector<std::string> lines(1);
   while (!text.empty()) {
     const auto space = text.find(' ');
     std::string_view word = text.substr(0, space);
     text.remove_prefix(space == std::string_view::npos ? text.size() : space + 1);
-    if (used > 0 && used + 1 + display_width(word) > room) break_line();
+    int used = display_width(lines.back());
+    if (used > 0 && used + 1 + display_width(word) > room) {
+      lines.emplace_back();
+      used = 0;
+    }
     while (display_width(word) > room) {
       const auto bytes = prefix_bytes(word, room);
-      line += word.substr(0, bytes);
+      lines.back() += word.substr(0, bytes);
       word.remove_prefix(bytes);
-      break_line();
+      lines.emplace_back();
     }
-    if (used > 0) line += ' ';
-    line += word;
-    used += display_width(word) + (used > 0 ? 1 : 0);
+    if (used > 0) lines.back() += ' ';
+    lines.back() += word;
   }
-  return out + line + '\n';
+  return lines;
+}
+
+std::string wrapped(std::string_view text, std::string_view first) {
+  const std::string blank(display_width(first), ' ');
+  std::string out;
+  for (const auto& line : broken(text, kTextWidth - static_cast<int>(blank.size())))
+    out += (out.empty() ? std::string(first) : blank) + line + '\n';
+  return out;
 }
 
 TextTable::TextTable(const std::vector<std::string>& headings, int indent) : indent_(indent) {
@@ -73,33 +87,49 @@ void TextTable::note(const std::string& text, int indent) {
 }
 
 std::vector<int> TextTable::widths() const {
-  std::vector<int> widths;
+  std::vector<int> widths, least;
   for (std::size_t column = 0; column < headings_.size(); ++column) {
     int width = display_width(headings_[column]);
-    for (const auto& row : rows_) width = std::max(width, display_width(row.cells[column]));
+    int word = longest_word(headings_[column]);
+    for (const auto& row : rows_) {
+      width = std::max(width, display_width(row.cells[column]));
+      word = std::max(word, longest_word(row.cells[column]));
+    }
     widths.push_back(width);
+    least.push_back(word);
   }
   const int gaps = 2 * (static_cast<int>(widths.size()) - 1);
-  const int excess = std::accumulate(widths.begin(), widths.end(), indent_ + gaps) - kTextWidth;
-  if (excess > 0) {
+  for (;;) {
+    const int excess = std::accumulate(widths.begin(), widths.end(), indent_ + gaps) - kTextWidth;
     int widest = -1;
     for (int i = 0; i < static_cast<int>(widths.size()); ++i)
-      if (!right_[i] && (widest < 0 || widths[i] > widths[widest])) widest = i;
-    if (widest >= 0) widths[widest] = std::max(4, widths[widest] - excess);
+      if (!right_[i] && widths[i] > least[i] && (widest < 0 || widths[i] > widths[widest])) widest = i;
+    if (excess <= 0 || widest < 0) return widths;
+    --widths[widest];  // the widest ones come down together
   }
-  return widths;
 }
 
 std::string TextTable::line(const std::vector<std::string>& cells, const std::vector<int>& widths) const {
-  std::string text(indent_, ' ');
+  std::vector<std::vector<std::string>> columns;
+  std::size_t height = 1;
   for (std::size_t i = 0; i < cells.size(); ++i) {
-    if (i > 0) text += "  ";
-    const std::string cell = clipped(cells[i], widths[i]);
-    const std::string blank(std::max(0, widths[i] - display_width(cell)), ' ');
-    text += right_[i] ? blank + cell : cell + blank;
+    columns.push_back(display_width(cells[i]) <= widths[i] ? std::vector<std::string>{cells[i]}
+                                                           : broken(cells[i], widths[i]));
+    height = std::max(height, columns.back().size());
   }
-  text.erase(text.find_last_not_of(' ') + 1);
-  return text + '\n';
+  std::string text;
+  for (std::size_t at = 0; at < height; ++at) {
+    std::string one(indent_, ' ');
+    for (std::size_t i = 0; i < cells.size(); ++i) {
+      if (i > 0) one += "  ";
+      const std::string cell = at < columns[i].size() ? columns[i][at] : "";
+      const std::string blank(std::max(0, widths[i] - display_width(cell)), ' ');
+      one += right_[i] ? blank + cell : cell + blank;
+    }
+    one.erase(one.find_last_not_of(' ') + 1);
+    text += one + '\n';
+  }
+  return text;
 }
 
 std::string TextTable::text() const {

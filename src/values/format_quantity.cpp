@@ -7,6 +7,7 @@
 
 #include "dropfront/values/number_text.hpp"
 #include "dropfront/values/quantity.hpp"
+#include "dropfront/values/year.hpp"
 
 namespace dropfront::values {
 namespace {
@@ -49,7 +50,7 @@ Shown shown_as(double size, Unit unit) {
       if (size >= 1e-6) return {1e-6, "uF"};
       return size >= 1e-9 ? Shown{1e-9, "nF"} : Shown{1e-12, "pF"};
     case Unit::second:
-      if (size >= 31536000) return {31536000, "years"};
+      if (size >= kSecondsPerYear) return {kSecondsPerYear, "years"};
       if (size >= 7200) return {3600, "h"};
       return size >= 120 ? Shown{60, "min"} : prefixed(size, "s");
     case Unit::hour:

@@ -3,6 +3,8 @@
 #include <array>
 #include <utility>
 
+#include "dropfront/values/year.hpp"
+
 namespace dropfront::values {
 namespace {
 
@@ -14,7 +16,6 @@ struct Symbol {
   bool takes_prefix = false;
 };
 
-// A year is 8760 h, as capacitor lives are counted in the trade.
 constexpr Symbol symbols[] = {
     {Unit::volt, "V", 0, 1, true},
     {Unit::volt, "volt"},
@@ -42,8 +43,8 @@ constexpr Symbol symbols[] = {
     {Unit::second, "d", 0, 86400},
     {Unit::second, "day", 0, 86400},
     {Unit::second, "days", 0, 86400},
-    {Unit::second, "year", 0, 31536000},
-    {Unit::second, "years", 0, 31536000},
+    {Unit::second, "year", 0, kSecondsPerYear},
+    {Unit::second, "years", 0, kSecondsPerYear},
     {Unit::hour, "h"},
     {Unit::hour, "hour"},
     {Unit::hour, "hours"},
@@ -52,8 +53,8 @@ constexpr Symbol symbols[] = {
     {Unit::hour, "d", 0, 24},
     {Unit::hour, "day", 0, 24},
     {Unit::hour, "days", 0, 24},
-    {Unit::hour, "year", 0, 8760},
-    {Unit::hour, "years", 0, 8760},
+    {Unit::hour, "year", 0, kHoursPerYear},
+    {Unit::hour, "years", 0, kHoursPerYear},
     {Unit::hertz, "Hz", 0, 1, true},
     {Unit::share, "%", -2},
     {Unit::share, "percent", -2},

@@ -80,11 +80,18 @@ TEST_CASE("a problem without a compliant design is status 1 and names what stand
   const Workshop shop;
   const auto finished = shop.run("search " + kSmall + " --set 'limits.standby_power=50 mW'");
   CHECK(finished.status == 1);
-  CHECK(finished.out.find("Failed most often: ") != std::string::npos);
+  // The conflict speaks in the check's own unit: what the best design reaches, and what is asked.
+  CHECK(finished.out.find("Failed most often: standby.power, by ") != std::string::npos);
+  CHECK(finished.out.find(" mW where <= 50 mW is asked, missed by ") != std::string::npos);
   const auto result = nlohmann::json::parse(shop.read("results/small/candidates.json"));
   CHECK(result["front"].empty());
   CHECK((result["status"] == "none found" || result["status"] == "proven none"));
-  CHECK_FALSE(result["conflict"].empty());
+  REQUIRE_FALSE(result["conflict"].empty());
+  const auto& worst = result["conflict"][0];
+  CHECK(worst["limit"] == 0.05);
+  CHECK(worst["unit"] == "W");
+  CHECK_THAT(worst["value"].get<double>() / 0.05 - 1,
+             Catch::Matchers::WithinRel(worst["least_shortfall"].get<double>(), 1e-12));  // by definition
 }
 
 TEST_CASE("one bad file among good ones: status 2, each mistake named, nothing written") {

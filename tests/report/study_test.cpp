@@ -53,10 +53,10 @@ TEST_CASE("a study's files say the same in JSON, CSV and text") {
   CHECK(document["combinations"][0]["best"]["standby_loss_W"].is_null());
   CHECK(document["combinations"][1]["status"] == "not searched");
   CHECK(study_csv(t.study) ==
-        "folder,output.voltage,status,front,least_cost,least_standby_loss_W,least_board_area_mm2,"
+        "folder,output.voltage,status,front,currency,least_cost,least_standby_loss_W,least_board_area_mm2,"
         "most_current_margin_A\n"
-        "01-3.3-V,3.3 V,done,2,0.5,,,0.002\n"
-        "02-5-V,5 V,not searched,0,,,,\n");
+        "01-3.3-V,3.3 V,done,2,EUR,0.5,,,0.002\n"
+        "02-5-V,5 V,not searched,0,,,,,\n");
   const std::string text = study_text(t.study);
   CHECK(text.find("not searched") != std::string::npos);
   CHECK(text.find("a caution") != std::string::npos);

@@ -43,12 +43,18 @@ TEST_CASE("wrapped lines are never wider than a text may be, and no letter is lo
   }
 }
 
-TEST_CASE("a table too wide for its text is clipped, not broken") {
+TEST_CASE("a cell too wide for its text goes on below itself, broken between words") {
   TextTable table({"name", ">value", "remark"});
-  table.row({std::string(150, 'n'), "12", std::string(30, 'r')});
+  std::string remark = "begin";
+  for (int i = 0; i < 30; ++i) remark += " word" + std::to_string(i);
+  table.row({"part", "12", remark});
+  table.row({std::string(150, 'n'), "12", "short"});
   table.note(std::string(300, 'z'), 6);
-  for (const auto& line : lines_of(table.text())) CHECK(display_width(line) <= kTextWidth);
-  CHECK(table.text().find("n..  ") != std::string::npos);
+  const std::string text = table.text();
+  for (const auto& line : lines_of(text)) CHECK(display_width(line) <= kTextWidth);
+  std::istringstream words(remark);
+  for (std::string word; words >> word;) CHECK(text.find(word) != std::string::npos);
+  CHECK(std::count(text.begin(), text.end(), 'n') >= 150);
 }
 
 TEST_CASE("columns line up under their headings, flush right where asked") {

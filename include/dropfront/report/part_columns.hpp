@@ -2,16 +2,16 @@
 #include <string>
 #include <string_view>
 #include <utility>
-#include <variant>
 #include <vector>
 
 #include "dropfront/parts/catalogue.hpp"
+#include "dropfront/parts/columns.hpp"
 
 namespace dropfront::report {
 
 /// One value of a part under the column name of the parts lists: SI numbers (mm, degC and hours where the
 /// column says so), true/false or text.
-using ColumnValue = std::variant<double, bool, std::string>;
+using parts::ColumnValue;
 using Columns = std::vector<std::pair<std::string, ColumnValue>>;
 
 /// Electrical columns only: what a score can depend on, name, source, sizes and prices apart. Ratings that

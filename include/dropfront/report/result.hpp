@@ -50,12 +50,14 @@ struct Result {
     scoring::Design design;
     std::string check;
     double shortfall = 0;
+    std::optional<scoring::Check> broken;  ///< the check as that design meets it
   };
   std::vector<NearMiss> near_misses;
   struct Conflict {
     std::string check;
     std::int64_t failed = 0;
     double least_shortfall = 0;
+    std::optional<scoring::Check> closest;  ///< the check as the design that came closest meets it
   };
   std::vector<Conflict> conflict;  ///< most often failed first; filled when nothing complies
   std::vector<std::string> cautions;

@@ -11,8 +11,11 @@ inline constexpr int kTextWidth = 100;
 /// Characters of a UTF-8 text (code points, which is columns for the letters used here).
 int display_width(std::string_view text);
 
-/// `text` broken at spaces into lines of at most kTextWidth, each ended by a line break; the first begins
-/// with `first`, the others with as many spaces. A word too long for a line is split.
+/// `text` broken at spaces into lines of at most `room` characters. A word too long for a line is split.
+std::vector<std::string> broken(std::string_view text, int room);
+
+/// The same in lines of at most kTextWidth, each ended by a line break; the first begins with `first`, the
+/// others with as many spaces.
 std::string wrapped(std::string_view text, std::string_view first = "");
 
 /// `text` cut to `width` characters, ended by ".." when something is cut.
@@ -27,7 +30,8 @@ class TextTable {
   /// A wrapped line under the last row, indented by `indent` characters.
   void note(const std::string& text, int indent);
   bool empty() const { return rows_.empty(); }
-  /// Headings and rows. Where the lines would be too wide, the widest flush-left column is clipped.
+  /// Headings and rows. Where the lines would be too wide, the widest flush-left columns are made narrower and
+  /// their cells broken at spaces.
   std::string text() const;
 
  private:

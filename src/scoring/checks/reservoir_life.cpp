@@ -3,6 +3,7 @@
 #include "dropfront/scoring/checks/checks.hpp"
 #include "dropfront/scoring/checks/make_check.hpp"
 #include "dropfront/scoring/checks/stress.hpp"
+#include "dropfront/values/year.hpp"
 
 namespace dropfront::scoring {
 
@@ -23,7 +24,7 @@ std::optional<Check> reservoir_life(Evidence& evidence) {
     At at = at_point(point);
     at.ambient_degC = around.mean_over_life_degC;
     return at_least(
-        "reservoir.life", life, around.life_years * kHoursPerYear, "h", at,
+        "reservoir.life", life, around.life_years * values::kHoursPerYear, "h", at,
         "10 K rule at the mean ambient + local rise, ripple term 2^(-dT/5) with 5 K at the rating");
   };
   return worst_over(loaded_points(evidence), judge);

@@ -14,9 +14,6 @@ namespace dropfront::scoring {
 /// and a real line's harmonics heat more than they lift the crest.
 inline constexpr double kUnstatedHarmonicsHeating = 1.15;
 
-/// Hours in a year of 365.25 days.
-inline constexpr double kHoursPerYear = 8766;
-
 /// Mean power in the output stage with a mean rail voltage and a steady output current: rail power less the
 /// least output power (linear), P_out·(1/efficiency - 1) (step-down), both with the quiescent current. Never
 /// negative; 0 for a direct output.

@@ -1,0 +1,111 @@
+// The search without enumeration against every design of a shipped problem with fewer parts. Reference: the
+// definition of a front, applied to all of its designs; nothing of the search takes part in it.
+#include <algorithm>
+#include <map>
+
+#include "dropfront/problem/binding.hpp"
+#include "dropfront/search/objective_key.hpp"
+#include "dropfront/search/parallel.hpp"
+#include "dropfront/search/search.hpp"
+#include "problem/fixture.hpp"
+#include "support/catch.hpp"
+
+using namespace dropfront;
+using search::Candidate;
+using search::Choice;
+using search::Evaluation;
+
+namespace {
+
+const std::string kRaw = R"(resolution={"cost": 0, "standby_loss": 0, "board_area": 0, "current_margin": 0})";
+
+/// The leak alarm with the parts of its good designs and some that break its limits: 2,400 designs.
+problem::ProblemFile reduced(const std::vector<std::string>& more = {}) {
+  std::vector<std::string> sets{
+      R"(slots={"arrangement": ["half-wave-clamp-ahead", "bridge-clamp-across"],
+                "output_stage": {"only": ["LM5", "BL5"]},
+                "dropper": {"only": ["SR310J-270n", "SR310-330n", "SR310J-470n", "SR275-820n", "SR310J-1u5"]},
+                "series_resistor": {"only": ["WF1-22R", "WF2-47R"]},
+                "clamp": {"only": ["1N4737A", "1N4738A", "ZP-18V", "1N4747A", "ZP-24V", "1N4756A"]},
+                "reservoir": {"only": ["EL35-33u", "EL35-100u", "EL16-470u", "EL50-47u", "EG16-470u"]},
+                "discharge": {"only": ["C0805-1M", "C1206-470k"], "count": [2]},
+                "rectifier": {"only": ["DA-400"]}})"};
+  sets.insert(sets.end(), more.begin(), more.end());
+  return problem::read_problem_file(std::string(DROPFRONT_SOURCE_DIR) + "/problems/leak-alarm.json", sets);
+}
+
+std::vector<Candidate> every_design(const search::Evaluator& evaluator) {
+  std::vector<Candidate> all;
+  const auto& slots = evaluator.space().slots;
+  Choice choice(slots.size(), 0);
+  for (std::size_t s = slots.size(); s > 0;) {
+    all.push_back({choice, {}, true});
+    for (s = slots.size(); s > 0; --s) {
+      if (++choice[s - 1] < slots[s - 1].size) break;
+      choice[s - 1] = 0;
+    }
+  }
+  // Never says "dominated": only a broken limit ends a score early.
+  const search::Dominated nothing = [](const std::vector<double>&) { return false; };
+  search::Workers(2).for_each(
+      all.size(), 16, [&](std::size_t i) { all[i].evaluation = evaluator.evaluate(all[i].choice, nothing); });
+  return all;
+}
+
+bool better(const Candidate& a, const Candidate& b) {
+  return std::make_pair(a.evaluation.objectives, a.choice) <
+         std::make_pair(b.evaluation.objectives, b.choice);
+}
+
+std::vector<Candidate> front_by_definition(const std::vector<Candidate>& all,
+                                           const std::vector<double>& resolution) {
+  std::map<std::vector<double>, Candidate> of_key;
+  for (const Candidate& design : all) {
+    if (design.evaluation.outcome != search::Outcome::compliant) continue;
+    const auto [at, fresh] =
+        of_key.emplace(search::objective_keys(design.evaluation.objectives, resolution), design);
+    if (!fresh && better(design, at->second)) at->second = design;
+  }
+  std::vector<Candidate> front;
+  for (const auto& one : of_key) {
+    const bool beaten = std::any_of(of_key.begin(), of_key.end(), [&](const auto& other) {
+      return search::dominates(other.first, one.first);
+    });
+    if (!beaten) front.push_back(one.second);
+  }
+  std::sort(front.begin(), front.end(), better);
+  return front;
+}
+
+void check_equal(const std::vector<Candidate>& found, const std::vector<Candidate>& exact) {
+  REQUIRE(found.size() == exact.size());
+  for (std::size_t i = 0; i < exact.size(); ++i) {
+    INFO("member " << i + 1 << " of " << exact.size());
+    CHECK(found[i].choice == exact[i].choice);
+    CHECK(found[i].evaluation.objectives == exact[i].evaluation.objectives);
+  }
+}
+
+}  // namespace
+
+TEST_CASE(
+    "on a shipped problem with fewer parts the search finds the front of all designs, design for design") {
+  const auto file = reduced();
+  const auto bound = problem::bind(file.problems[0]);
+  const auto all = every_design(*bound);
+  REQUIRE(all.size() == 2400);
+  for (const bool raw : {true, false}) {
+    const auto again = reduced(raw ? std::vector<std::string>{kRaw} : std::vector<std::string>{});
+    const auto evaluator = problem::bind(again.problems[0]);
+    const auto exact = front_by_definition(all, evaluator->resolution());
+    CHECK(exact.size() >= 10);
+    for (const bool enumerate : {true, false}) {
+      INFO((raw ? "raw, " : "default resolution, ") << (enumerate ? "enumerated" : "searched"));
+      search::SearchOptions options;
+      options.switches.enumerate = enumerate;
+      const auto outcome = search::run_search(*evaluator, options);
+      CHECK(outcome.exhaustive == enumerate);
+      check_equal(outcome.front, exact);
+    }
+  }
+}
