@@ -1,5 +1,7 @@
 #include "dropfront/app/command_line.hpp"
 
+#include <fmt/core.h>
+
 #include <CLI/CLI.hpp>
 #include <algorithm>
 
@@ -152,6 +154,9 @@ ExitStatus command(int argc, const char* const* argv, Console& console) {
   app.require_subcommand(1);
   app.set_version_flag("--version", "dropfront " DROPFRONT_VERSION);
   app.footer("dropfront COMMAND --help shows an example.");
+  app.failure_message([](const CLI::App*, const CLI::Error& error) {
+    return fmt::format("error: {}; dropfront COMMAND --help shows how it is used\n", error.what());
+  });
   Arguments all;
   CLI::App* search = add_search(app, all.search);
   CLI::App* assess = add_assess(app, all.assess);

@@ -62,7 +62,10 @@ class Run {
   void file(const problem::ProblemFile& file) {
     if (!file.study) {
       const auto result = search(file.problems.front(), file.name);
-      if (!result) return;
+      if (!result) {
+        console_.err << "interrupted: " << file.name << " was not searched\n";
+        return;
+      }
       write(file.name, report::result_files(*result), report::summary_body(*result));
       return;
     }
