@@ -1,6 +1,7 @@
 #include "dropfront/circuit/life.hpp"
 #include "dropfront/scoring/bounds/rules.hpp"
 #include "dropfront/scoring/checks/stress.hpp"
+#include "dropfront/values/year.hpp"
 
 namespace dropfront::scoring::bounds {
 
@@ -12,7 +13,7 @@ double reservoir_life(const BoxQuestion& question) {
       return 0.0;
     const double life_h = circuit::electrolytic_life_h(*part->life_h, *part->life_temperature_degC,
                                                        around.mean_over_life_degC, 0);
-    return around.life_years * kHoursPerYear / life_h;
+    return around.life_years * values::kHoursPerYear / life_h;
   });
 }
 
