@@ -30,8 +30,9 @@ ExitStatus check_command(const CheckArguments& arguments, Console& console) {
   for (std::size_t i = 0; i < files->size(); ++i) {
     if (i > 0) console.out << '\n';
     console.out << arguments.problems[i] << ": can be searched\n";
+    const problem::Problem& first = (*files)[i].problems.front();
     for_each_problem((*files)[i], console.out, [&](const auto& problem, const auto& space) {
-      console.out << report::problem_text(problem, space);
+      console.out << report::problem_text(problem, space, &problem == &first ? nullptr : &first);
     });
   }
   return ExitStatus::done;

@@ -2,6 +2,8 @@
 
 #include <fmt/core.h>
 
+#include <algorithm>
+
 #include "dropfront/problem/names.hpp"
 #include "dropfront/report/cautions.hpp"
 #include "dropfront/report/for_people.hpp"
@@ -68,11 +70,18 @@ std::string asked_text(const scoring::Requirement& need) {
   return table.text() + '\n' + limits.text() + "\n  objectives: " + objectives + "\n";
 }
 
-/// What the problem leaves out, then what rows of the lists may leave out.
-std::string defaults_text(const problem::Problem& problem) {
+/// What the problem leaves out, then what rows of the lists may leave out; what `before` says too is left
+/// out.
+std::string defaults_text(const problem::Problem& problem, const problem::Problem* before) {
+  const auto said = [before](const problem::Default& filled) {
+    return before && std::any_of(before->defaults.begin(), before->defaults.end(), [&](const auto& other) {
+             return other.key == filled.key && other.value == filled.value;
+           });
+  };
   TextTable keys({"filled in", "value", "why"});
   TextTable columns({"left out in a row", "value", "why"});
   for (const auto& filled : problem.defaults) {
+    if (said(filled)) continue;
     const bool of_lists = filled.key.find(".csv ") != std::string::npos;
     (of_lists ? columns : keys).row({filled.key, filled.value, filled.reason});
   }
@@ -84,10 +93,12 @@ std::string defaults_text(const problem::Problem& problem) {
 
 }  // namespace
 
-std::string problem_text(const problem::Problem& problem, const search::Space& space) {
+std::string problem_text(const problem::Problem& problem, const search::Space& space,
+                         const problem::Problem* before) {
   std::string text = wrapped(problem.title) + asked_text(problem.requirement);
-  text += defaults_text(problem);
+  text += defaults_text(problem, before);
   text += '\n' + slots_text(problem, space);
+  if (before && before->cautions == problem.cautions) return text;
   return text + '\n' + cautions_text(with_standing_cautions(problem.cautions));
 }
 

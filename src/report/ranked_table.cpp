@@ -28,9 +28,11 @@ std::string rest_of_design(const Entry& entry) {
   return text + tightest_words(entry);
 }
 
-std::string part_names(const Entry& entry) {
+}  // namespace
+
+std::string part_names(const scoring::Design& design) {
   std::string text;
-  for (const SlotPart& part : design_slots(entry.design)) {
+  for (const SlotPart& part : design_slots(design)) {
     if (part.placed == 0) continue;
     if (!text.empty()) text += ", ";
     if (part.placed > 1) text += fmt::format("{} x ", part.placed);
@@ -38,8 +40,6 @@ std::string part_names(const Entry& entry) {
   }
   return text;
 }
-
-}  // namespace
 
 std::string design_table(const std::string& heading, const std::vector<Line>& lines,
                          const std::string& currency) {
@@ -57,7 +57,7 @@ std::string design_table(const std::string& heading, const std::vector<Line>& li
                rounded(thousandfold(objectives.current_margin_A), 2)});
     if (!line.describe) continue;
     table.note(rest_of_design(*line.entry), 6);
-    table.note(part_names(*line.entry), 6);
+    table.note(part_names(line.entry->design), 6);
   }
   return table.text();
 }

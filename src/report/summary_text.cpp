@@ -41,7 +41,8 @@ std::string closest_text(const Result::Conflict& conflict) {
   const auto& check = conflict.closest;
   if (!check || !check->value || !check->limit) return "missed its limit by " + missed;
   if (check->yes_or_no()) return "answers no where yes is asked";
-  return fmt::format("reaches {} where {} is asked, missed by {}", found_text(check), limit_text(check), missed);
+  return fmt::format("reaches {} where {} is asked, missed by {}", found_text(check), limit_text(check),
+                     missed);
 }
 
 std::string nothing_found(const Result& result) {
@@ -65,6 +66,7 @@ std::string nothing_found(const Result& result) {
     near.row({miss.check, found_text(miss.broken), limit_text(miss.broken),
               with_unit(design.dropper->capacitance_F, "F"), short_value(*design.series_resistor),
               short_value(*design.clamp), short_value(*design.reservoir)});
+    near.note(part_names(design), 6);
   }
   return text + '\n' + near.text();
 }

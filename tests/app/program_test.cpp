@@ -12,6 +12,7 @@
 #include <fstream>
 #include <iterator>
 #include <nlohmann/json.hpp>
+#include <sstream>
 
 #include "support/catch.hpp"
 
@@ -172,6 +173,21 @@ TEST_CASE("the start file is accepted as it is, and never written over") {
   shop.write("mine.json", "mine");
   CHECK(shop.run("start mine.json").status == 2);
   CHECK(shop.read("mine.json") == "mine");
+}
+
+TEST_CASE("check of a study says each default once, and its lines fit 100 columns") {
+  const Workshop shop;
+  const auto finished = shop.run("check problems/sensor-family.json");
+  REQUIRE(finished.status == 0);
+  const auto first = finished.out.find("limits.start_time");
+  REQUIRE(first != std::string::npos);
+  CHECK(finished.out.find("limits.start_time", first + 1) == std::string::npos);
+  std::istringstream lines(finished.out);
+  for (std::string line; std::getline(lines, line);) {
+    INFO(line);
+    // Bytes of UTF-8 that continue a letter take no column.
+    CHECK(std::count_if(line.begin(), line.end(), [](char c) { return (c & 0xC0) != 0x80; }) <= 100);
+  }
 }
 
 }  // namespace

@@ -9,7 +9,9 @@
 namespace dropfront::report {
 
 /// What a problem asks: mains, output, loads, limits; the defaults filled in with their reasons; the slots.
-std::string problem_text(const problem::Problem& problem, const search::Space& space);
+/// In a study, `before` is a combination already shown: its defaults and cautions are not said again.
+std::string problem_text(const problem::Problem& problem, const search::Space& space,
+                         const problem::Problem* before = nullptr);
 
 /// One line a slot: how many options, from which value to which.
 std::string slots_text(const problem::Problem& problem, const search::Space& space);

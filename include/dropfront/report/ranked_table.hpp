@@ -23,4 +23,7 @@ std::string ranked_table(const Result& result, const RankedList& list, std::set<
 /// Heading of a ranked set: "Cheapest", "Lowest standby loss", ...
 std::string ranked_heading(const std::string& name);
 
+/// "SR275-470n, WF2-100R, ...": the placed parts of a design by name, with their number where it is not one.
+std::string part_names(const scoring::Design& design);
+
 }  // namespace dropfront::report

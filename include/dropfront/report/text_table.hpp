@@ -30,8 +30,8 @@ class TextTable {
   /// A wrapped line under the last row, indented by `indent` characters.
   void note(const std::string& text, int indent);
   bool empty() const { return rows_.empty(); }
-  /// Headings and rows. Where the lines would be too wide, the widest flush-left columns are made narrower and
-  /// their cells broken at spaces.
+  /// Headings and rows. Where the lines would be too wide, the widest flush-left columns are made narrower
+  /// and their cells broken at spaces.
   std::string text() const;
 
  private:
