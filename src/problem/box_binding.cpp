@@ -6,6 +6,7 @@
 #include "dropfront/problem/design_box.hpp"
 #include "dropfront/problem/score_view.hpp"
 #include "dropfront/scoring/bounds/box_bounder.hpp"
+#include "dropfront/scoring/bounds/lean_reach.hpp"
 
 namespace dropfront::problem {
 namespace {
@@ -34,10 +35,18 @@ class Boxes : public search::Bounder {
       : problem_(problem),
         slots_(make_space(problem.offers)),
         view_(problem.requirement),
-        bounder_(problem.requirement) {}
+        bounder_(problem.requirement),
+        reach_(problem.requirement),
+        wanted_margin_A_(problem.requirement.limits.current_margin *
+                         scoring::load_profile(problem.requirement.output).heaviest_output_A()) {}
 
   search::Bounds bound(const search::Box& box, int depth) const override {
-    const scoring::BoxBound found = bounder_.bound(design_box(problem_.offers, slots_.ids, box), depth);
+    const scoring::DesignBox parts = design_box(problem_.offers, slots_.ids, box);
+    scoring::BoxBound found = bounder_.bound(parts, depth);
+    if (depth > 0 && found.broken.empty() && reach_.out_of_reach(parts, wanted_margin_A_)) {
+      found.broken = "supply.margin";
+      found.broken_class = scoring::BoundClass::monotone;
+    }
     search::Bounds out;
     for (const scoring::Objective objective : problem_.requirement.objectives) add(objective, found, out);
     const auto& names = view_.check_names();
@@ -86,6 +95,8 @@ class Boxes : public search::Bounder {
   SlotSpace slots_;
   ScoreView view_;
   scoring::BoxBounder bounder_;
+  scoring::LeanReach reach_;
+  double wanted_margin_A_;
 };
 
 }  // namespace

@@ -119,9 +119,10 @@ Tried BoxTrial::run(OpenBox open, const std::vector<double>& extent) const {
   if (!discard(open, 0, tried)) {
     bounder_.reduce(open.box);
     tried.reduced = before - open.box.members();
-    if (open.box.members() <= most_singles)
+    if (discard(open, 1, tried)) {
+    } else if (open.box.members() <= most_singles) {
       settle(open.box, tried);
-    else if (!discard(open, 1, tried)) {
+    } else {
       tried.fate = Fate::split;
       auto halves = splitter_.split(open.box, splitter_.widest(open.box, extent));
       tried.halves.push_back(OpenBox{std::move(halves.first), open.bound, open.kinds});

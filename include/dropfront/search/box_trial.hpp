@@ -58,7 +58,7 @@ class BoxTrial {
   Tried run(OpenBox open, const std::vector<double>& extent) const;
 
   /// Boxes of at most so many members are settled design by design.
-  static constexpr int most_singles = 8;
+  static constexpr int most_singles = 2;
 
  private:
   bool discard(OpenBox& open, int depth, Verdict& verdict) const;

@@ -1,0 +1,38 @@
+#pragma once
+#include <vector>
+
+#include "dropfront/scoring/bounds/box.hpp"
+#include "dropfront/scoring/corners/mains_shape.hpp"
+#include "dropfront/scoring/load_profile.hpp"
+#include "dropfront/scoring/requirement.hpp"
+
+namespace dropfront::scoring {
+
+/// Whether a margin is out of reach of every member of a box, by steady states of the lean corner at the load
+/// that goes with it: where the rail falls short at one ambient and one choice of ends, the least over all
+/// falls short too. `requirement` must outlive it; thread-safe.
+///
+/// The rail is solved for the best of everything it is monotone in (class monotone): greatest dropper and
+/// reservoir, greatest low clamp curve, least V_required and overhead, every part at the temperature that
+/// suits it, within what the air and the junction can reach. What it is not monotone in is tried: series
+/// resistor, discharge chain, rectifier and reservoir (for its ESR), at most kMostTries combinations that
+/// differ in values; beyond that nothing is said.
+class LeanReach {
+ public:
+  static constexpr std::size_t kMostTries = 6;
+
+  explicit LeanReach(const Requirement& requirement);
+  /// True: no member has a worst-case margin of `margin_A` or more.
+  bool out_of_reach(const DesignBox& box, double margin_A) const;
+
+ private:
+  struct Parts;
+  bool falls_short(const DesignBox& box, const Parts& parts, const MainsShapes& shapes,
+                   double margin_A) const;
+
+  const Requirement* requirement_;
+  LoadProfile loads_;
+  std::vector<MainsShapes> shapes_;
+};
+
+}  // namespace dropfront::scoring
