@@ -10,26 +10,24 @@ namespace dropfront::scoring {
 
 /// Whether a margin is out of reach of every member of a box, by steady states of the lean corner at the load
 /// that goes with it: where the rail falls short at one ambient and one choice of ends, the least over all
-/// falls short too. `requirement` must outlive it; thread-safe.
+/// ends falls short too. For a step-down stage the load is raised to what the power wants at the rail last
+/// solved, until the rail falls short or the load no longer grows (nothing is then said). `requirement` must
+/// outlive it; thread-safe.
 ///
 /// The rail is solved for the best of everything it is monotone in (class monotone): greatest dropper and
-/// reservoir, greatest low clamp curve, least V_required and overhead, every part at the temperature that
-/// suits it, within what the air and the junction can reach. What it is not monotone in is tried: series
-/// resistor, discharge chain, rectifier and reservoir (for its ESR), at most kMostTries combinations that
-/// differ in values; beyond that nothing is said.
+/// reservoir, greatest low clamp curve, least drop, V_required and overhead, every part at the temperature
+/// that suits it, within what the air and the junction can reach. What it is not monotone in is tried: every
+/// series resistor, both ends of the list of ESRs and of chains; with more than kMostResistors different
+/// series resistors nothing is said.
 class LeanReach {
  public:
-  static constexpr std::size_t kMostTries = 6;
+  static constexpr std::size_t kMostResistors = 6;
 
   explicit LeanReach(const Requirement& requirement);
   /// True: no member has a worst-case margin of `margin_A` or more.
   bool out_of_reach(const DesignBox& box, double margin_A) const;
 
  private:
-  struct Parts;
-  bool falls_short(const DesignBox& box, const Parts& parts, const MainsShapes& shapes,
-                   double margin_A) const;
-
   const Requirement* requirement_;
   LoadProfile loads_;
   std::vector<MainsShapes> shapes_;

@@ -1,0 +1,58 @@
+#pragma once
+#include <vector>
+
+#include "dropfront/scoring/bounds/box.hpp"
+#include "dropfront/scoring/corners.hpp"
+#include "dropfront/scoring/corners/mains_shape.hpp"
+#include "dropfront/scoring/lean_case.hpp"
+#include "dropfront/scoring/requirement.hpp"
+
+namespace dropfront::scoring {
+
+/// The best that a box's parts could make together in the lean corner: values no member has all of, each the
+/// best of its list and at the temperature that suits it. Series resistor, ESR and chain are given one by
+/// one.
+class LeanComposite {
+ public:
+  /// False where a part that every member must have is missing.
+  static bool possible(const DesignBox& box);
+
+  /// `required_V`: the least of the box. Everything must outlive it.
+  LeanComposite(const DesignBox& box, const Requirement& requirement, const MainsShapes& shapes,
+                double required_V, bool stepping);
+
+  /// Those that differ in value.
+  const std::vector<const parts::Resistor*>& series_resistors() const { return series_resistors_; }
+  /// Whether both ends of the list of ESRs (chains) are to be tried: {false} where they are one.
+  const std::vector<bool>& esr_ends() const { return esr_ends_; }
+  const std::vector<bool>& chain_ends() const { return chain_ends_; }
+  /// Ambients, the more telling one first.
+  const std::vector<bool>& ambients() const { return ambients_; }
+
+  /// With the ends that decide most often; load left out.
+  circuit::ElementValues values(const parts::Resistor& series_resistor, bool high_esr, bool high_chain,
+                                bool hot) const;
+
+ private:
+  /// Temperatures a part can have.
+  struct Span {
+    double cool_degC, warm_degC;
+  };
+  double greatest_F(const Span& air, const parts::Dropper*& which) const;
+  circuit::ClampCurve greatest_curve(const Span& junction) const;
+  double esr_ohm(bool greatest, double air_degC) const;
+
+  const DesignBox* box_;
+  const Requirement* requirement_;
+  const MainsShapes* shapes_;
+  double required_V_;
+  LeanEnds ends_;
+  std::vector<const parts::Resistor*> series_resistors_;
+  std::vector<bool> esr_ends_{false}, chain_ends_{false}, ambients_;
+  Chain least_chain_, greatest_chain_;
+};
+
+/// No rail stands higher: the clamp's curve at no less than the greatest line current.
+double rail_ceiling_V(const circuit::ElementValues& values);
+
+}  // namespace dropfront::scoring
