@@ -10,6 +10,9 @@ constexpr const char* kAny = "any box";
 constexpr const char* kCharge = "the four plainly clamped arrangements";
 constexpr const char* kCrest = "the four plainly clamped arrangements, odd harmonics only";
 constexpr const char* kSeries = "as before, w·Rs·C < 1 over the box";
+constexpr const char* kStandby =
+    "w·Rs·C <= 0.4; behind the dropper at most 0.5 (bridge 0.42 - 0.5·w·Rs·C) of the crest; at most four "
+    "reservoirs times rectifiers";
 
 BoundRule objective(std::string_view id, BoundClass known, int depth, std::string_view range,
                     bounds::ObjectiveBound* rule) {
@@ -52,6 +55,7 @@ const std::vector<BoundRule>& bound_table() {
       limit("resistor.pulse", kCrest, bounds::resistor_pulse),
       limit("rectifier.surge", kCrest, bounds::rectifier_surge),
       limit("rail.transient", kCrest, bounds::rail_transient),
+      objective("standby_loss", BoundClass::monotone, 1, kStandby, bounds::standby_by_engine),
   };
   return table;
 }

@@ -62,7 +62,7 @@ BoxEnds::BoxEnds(const DesignBox& box, const BoundContext& context) {
 }
 
 /// What does not depend on how warm the box gets.
-void BoxEnds::take_cold_figures(const DesignBox& box, const BoundContext&) {
+void BoxEnds::take_cold_figures(const DesignBox& box, const BoundContext& context) {
   constexpr double kFilmReference_degC = 20;
   constexpr double kReference_degC = 25;
   for (const auto* part : box.droppers) {
@@ -94,7 +94,7 @@ void BoxEnds::take_cold_figures(const DesignBox& box, const BoundContext&) {
     take(Figure::leakage_A, part->leakage_A);
   }
   for (const auto* part : box.output_stages) {
-    take(Figure::quiescent_A, quiescent_A(*part, Quiescent::data), quiescent_A(*part, Quiescent::dropout));
+    take(Figure::required_V, required_rail_V(*part, context.requirement->output, context.loads).value_or(0));
   }
 }
 

@@ -28,8 +28,8 @@ enum class Figure {
   new_can_ohm,      ///< its ESR, nominal
   aged_can_F,       ///< reservoir, least at end of life at the high ambient
   aged_can_ohm,     ///< its ESR then
+  required_V,       ///< rail voltage the output stage needs
   leakage_A,        ///< of the reservoir
-  quiescent_A,      ///< of the output stage, in dropout: the greatest it takes
   count
 };
 

@@ -18,6 +18,7 @@ ObjectiveBound cost;
 ObjectiveBound board_area;
 ObjectiveBound margin_by_charge;
 ObjectiveBound standby_by_charge;
+ObjectiveBound standby_by_engine;
 
 LimitBound board_height;
 LimitBound clamp_junction;

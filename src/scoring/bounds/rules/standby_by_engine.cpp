@@ -1,0 +1,78 @@
+#include <algorithm>
+#include <array>
+
+#include "dropfront/circuit/steady_state.hpp"
+#include "dropfront/scoring/bounds/charge.hpp"
+#include "dropfront/scoring/bounds/rules.hpp"
+
+namespace dropfront::scoring::bounds {
+
+namespace {
+
+constexpr int kMostTried = 4;  // steady states one bound may cost
+
+/// Where the input power was found to grow with C, Rs, clamp and 1/Rb and to fall with the load.
+bool in_range(const BoxQuestion& question, const CornerCharge& charge) {
+  const auto& ends = question.ends;
+  const double phase =
+      question.supply.standby.omega * ends.greatest(Figure::series_high_ohm) * ends.greatest(Figure::new_F);
+  const double share = question.full_wave() ? 0.42 - 0.5 * phase : 0.5;
+  return phase <= 0.4 && charge.node_most_V <= share * question.supply.standby.crest_V;
+}
+
+/// Whether one entry of a list stands for another in the standby corner.
+bool alike(const parts::Reservoir& a, const parts::Reservoir& b) {
+  return a.capacitance_F == b.capacitance_F && a.esr_ohm == b.esr_ohm;
+}
+bool alike(const parts::Rectifier& a, const parts::Rectifier& b) {
+  return a.threshold_voltage_V == b.threshold_voltage_V && a.slope_resistance_ohm == b.slope_resistance_ohm;
+}
+
+template <class Part>
+std::vector<const Part*> unlike(const std::vector<const Part*>& list) {
+  std::vector<const Part*> kept;
+  for (const auto* part : list) {
+    const auto same = [part](const Part* other) { return alike(*part, *other); };
+    if (std::none_of(kept.begin(), kept.end(), same)) kept.push_back(part);
+    if (kept.size() > kMostTried) break;
+  }
+  return kept;
+}
+
+}  // namespace
+
+/// Input power of a steady state with the least C, Rs, clamp threshold and slope, the greatest chain and the
+/// greatest load of the box; reservoirs and rectifiers are tried. Monotone by test, in the range of
+/// `in_range`; a state that does not converge shows nothing.
+std::optional<double> standby_by_engine(const BoxQuestion& question) {
+  const auto& ends = question.ends;
+  if (!ends.known_circuit() || !in_range(question, question.charge(BoxCorner::standby))) return std::nullopt;
+  const auto reservoirs = unlike(question.box.reservoirs);
+  const auto rectifiers = unlike(question.box.rectifiers);
+  if (reservoirs.size() * rectifiers.size() > kMostTried) return std::nullopt;
+  circuit::ElementValues values;
+  values.mains = question.supply.shapes.nominal;
+  values.series_resistor_ohm = ends.least(Figure::series_high_ohm);
+  values.dropper_F = ends.least(Figure::new_F);
+  values.dropper_esr_ohm = ends.least(Figure::loss_tangent) / (values.mains.omega() * values.dropper_F);
+  values.discharge_ohm = ends.greatest(Figure::chain_low_ohm);
+  values.clamp.main = {ends.least(Figure::new_clamp_V), ends.least(Figure::clamp_ohm)};
+  values.rail_current_A = load_most_A(question, BoxCorner::standby, 1);
+  values.load_cutoff_V = 0.5 * ends.least(Figure::required_V);
+  std::optional<double> least_W;
+  for (const auto* reservoir : reservoirs) {
+    values.reservoir_F = reservoir->capacitance_F;
+    values.reservoir_esr_ohm = reservoir->esr_ohm;
+    for (const auto* rectifier : rectifiers) {
+      values.rectifier = {rectifier->threshold_voltage_V, rectifier->slope_resistance_ohm};
+      const auto state = circuit::solve_steady_state(question.box.arrangement->build(values),
+                                                     {.peaks = false, .multipliers = false});
+      if (!state.usable()) return std::nullopt;
+      least_W = std::min(least_W.value_or(state.input_power_W), state.input_power_W);
+    }
+  }
+  // The score settles its load to a millionth and the energy law closes to one.
+  return *least_W * (1 - 5e-6);
+}
+
+}  // namespace dropfront::scoring::bounds
