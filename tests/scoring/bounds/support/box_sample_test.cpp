@@ -264,9 +264,16 @@ std::vector<MemberFigures> figures_of(const Design& member, const BoundContext& 
       figures.standby_loss_W = evidence.standby_worst().state.input_power_W;
     }
     if (evidence.lean().usable) figures.current_margin_A = evidence.lean().margin_A;
+    // Where a corner has no answer, what its check shows is another corner's figure.
+    bool solved = evidence.rich_empty().state.usable();
+    for (const auto& point : evidence.rich_loads()) solved = solved && point.state.usable();
     for (const auto& rule : check_table()) {
       const auto check = rule.evaluate(evidence);
       Use use;
+      if (!solved && (rule.tier == Tier::steady || rule.tier == Tier::transient)) {
+        figures.uses.push_back(use);
+        continue;
+      }
       if (!check) {
         use.known = true;
       } else if (!check->unsolved) {
