@@ -126,6 +126,7 @@ Result make_result(const problem::BoundProblem& bound, const search::SearchOutco
   result.counts = outcome.counts;
   result.seed = options.seed;
   result.effort = effort_name(options.effort);
+  result.closed = outcome.closed;
   result.proof = outcome.proof;
   result.check_names = bound.check_names();
   result.cautions = with_standing_cautions(problem.cautions);

@@ -85,6 +85,10 @@ std::string summary_body(const Result& result) {
   if (result.status == Status::cut_short && !proven(result))
     text += "Cut short: better designs may exist among those not looked at.\n";
   text += wrapped(counts_text(result));
+  if (!result.closed && !proven(result) && result.status != Status::cut_short)
+    text += wrapped(fmt::format(
+        "The {} effort was spent before the search had run out of promising designs: {}.", result.effort,
+        result.effort == "deep" ? "better ones may exist" : "a greater --effort may find better ones"));
   if (const std::string proof = proof_text(result); !proof.empty()) text += wrapped(proof);
   if (result.front.empty()) return text + nothing_found(result);
   text += wrapped(counted(static_cast<double>(result.front.size())) +

@@ -174,6 +174,13 @@ TEST_CASE("where nothing complies, the text names the limit broken most often an
   CHECK(document["front"].empty());
 }
 
+TEST_CASE("a search that its effort ended says so, one that ran out of designs does not") {
+  auto m = made(false);
+  CHECK(summary_text(m.result).find("The normal effort was spent") != std::string::npos);
+  m.result.closed = true;
+  CHECK(summary_text(m.result).find("effort was spent") == std::string::npos);
+}
+
 TEST_CASE("every text output fits its width and warns; none of them calls a design safe or approved") {
   for (const bool nothing : {false, true}) {
     const auto m = made(nothing);

@@ -41,6 +41,7 @@ struct Result {
   search::SearchCounts counts;
   std::uint64_t seed = 1;
   std::string effort = "normal";
+  bool closed = true;                    ///< no one-part change of a front member was left untried
   std::optional<search::Proof> proof;    ///< of a proof made or tried
   std::vector<std::string> check_names;  ///< of its counts by limit
   std::vector<Entry> front;
