@@ -1,3 +1,5 @@
+#include <unistd.h>
+
 #include <filesystem>
 #include <map>
 #include <ostream>
@@ -45,9 +47,15 @@ class Run {
   Run(const SearchArguments& arguments, Console& console)
       : arguments_(arguments), console_(console), time_s_(time_limit(arguments)) {}
 
-  /// True when every result folder may be written.
+  /// True when every result folder may be written: said before the work, not after it.
   bool places_are_free(const std::vector<problem::ProblemFile>& files) {
     bool free = true;
+    fs::path there = fs::absolute(arguments_.out).lexically_normal();
+    while (!fs::exists(fs::status(there)) && there.has_relative_path()) there = there.parent_path();
+    if (!fs::is_directory(there))
+      throw report::DiskFault("--out: " + there.string() + " is a file, a folder is wanted");
+    if (::access(there.c_str(), W_OK) != 0)
+      throw report::DiskFault("--out: " + there.string() + " may not be written to");
     for (const auto& file : files) {
       const fs::path folder = fs::path(arguments_.out) / file.name;
       if (report::place_at(folder) != report::Place::foreign) continue;

@@ -94,6 +94,15 @@ TEST_CASE("a problem without a compliant design is status 1 and names what stand
              Catch::Matchers::WithinRel(worst["least_shortfall"].get<double>(), 1e-12));  // by definition
 }
 
+TEST_CASE("a place that cannot be written to is refused before the search") {
+  const Workshop shop;
+  shop.write("taken", "a file");
+  const auto finished = shop.run("search " + kSmall + " --out taken/results");
+  CHECK(finished.status == 3);
+  CHECK(finished.out.empty());
+  CHECK(finished.err.find("taken is a file, a folder is wanted") != std::string::npos);
+}
+
 TEST_CASE("one bad file among good ones: status 2, each mistake named, nothing written") {
   const Workshop shop;
   shop.write("bad.json", "{\"title\": \"x\", \"mians\": {}}");
