@@ -4,6 +4,8 @@
 #include "dropfront/problem/names.hpp"
 #include "dropfront/problem/sections.hpp"
 #include "dropfront/problem/support.hpp"
+#include "dropfront/scoring/discharge_rules.hpp"
+#include "dropfront/values/suggest.hpp"
 
 namespace dropfront::problem {
 namespace {
@@ -14,10 +16,7 @@ using values::Unit;
 std::optional<scoring::DischargeRule> default_rule(ConnectionKind kind) {
   switch (kind) {
     case ConnectionKind::plug:
-      return scoring::DischargeRule{
-          34, 1, 0.1e-6,
-          "IEC 60335-1 clause 22.5: plug pins at most 34 V, 1 s after disconnection, not below 0.1 uF "
-          "(as restated, copy not kept)"};
+      return scoring::discharge_rule("60335-1");
     case ConnectionKind::switched:
       return scoring::DischargeRule{
           60, 5, 0, "IEC 60204-1 clause 6.2.4: at most 60 V within 5 s (as restated, copy not kept)"};
@@ -46,7 +45,14 @@ std::optional<scoring::DischargeRule> read_discharge(ObjectReader& limits, Probl
     return rule;
   }
   if (given->node().kind == Node::Kind::text) {
-    if (given->node().text != "none") throw given->wrong(R"("none" or an object {"voltage", "after"})");
+    std::vector<std::string> words = scoring::discharge_rule_names();
+    words.emplace_back("none");
+    const std::string& word = given->node().text;
+    if (auto rule = scoring::discharge_rule(word)) return rule;
+    if (word != "none") {
+      throw given->error(fmt::format(R"(found {}{}; allowed: {} or an object {{"voltage", "after"}})",
+                                     describe(given->node()), values::did_you_mean(word, words), either(words)));
+    }
     problem.cautions.push_back(
         "limits.discharge: \"none\"; the voltage left after unplugging is not checked");
     return std::nullopt;

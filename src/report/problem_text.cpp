@@ -39,8 +39,10 @@ void limit_rows(TextTable& table, const scoring::Limits& limits) {
   limit(fmt::format("current margin >= {} of the heaviest load", percent(limits.current_margin)));
   if (limits.start_time_s) limit(fmt::format("start time <= {}", with_unit(*limits.start_time_s, "s")));
   if (const auto& rule = limits.discharge)
-    limit(fmt::format("discharged to {} after {}", with_unit(rule->voltage_V, "V"),
-                      with_unit(rule->after_s, "s")));
+    limit(fmt::format("discharged to {} after {}{}",
+                      rule->share_of_start ? percent(*rule->share_of_start) + " of the crest"
+                                           : with_unit(rule->voltage_V, "V"),
+                      with_unit(rule->after_s, "s"), rule->name.empty() ? "" : " (" + rule->name + ")"));
   if (const auto& surge = limits.surge)
     limit(fmt::format("surge {} behind {}", with_unit(surge->voltage_V, "V"),
                       with_unit(surge->source_ohm, "ohm")));

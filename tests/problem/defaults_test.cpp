@@ -2,6 +2,7 @@
 #include <set>
 
 #include "dropfront/scoring/check_table.hpp"
+#include "dropfront/scoring/discharge_rules.hpp"
 #include "problem/fixture.hpp"
 #include "support/catch.hpp"
 
@@ -143,6 +144,19 @@ TEST_CASE("the discharge rule follows the kind of connection") {
   REQUIRE(cautions.size() == 1);
   CHECK(cautions[0].find("fixed connection") != std::string::npos);
   CHECK(bench.problem().cautions.empty());
+}
+
+TEST_CASE("a discharge rule is asked for by the number of its standard, in figures, or not at all") {
+  const Bench bench;
+  const auto asked = [&](const std::string& value) {
+    return bench.problem({"limits.discharge=" + value}).requirement.limits.discharge;
+  };
+  for (const auto& name : scoring::discharge_rule_names()) CHECK(asked("\"" + name + "\"").value().name == name);
+  CHECK(asked("62368-1").value().more_when_small);  // as a person types it after --set
+  CHECK(asked(R"({"voltage": "42 V", "after": "3 s"})").value().voltage_V == 42);
+  CHECK_FALSE(asked("\"none\""));
+  CHECK(bench.refusal(kProblem, {"limits.discharge=\"62368\""}).find("did you mean '62368-1'") !=
+        std::string::npos);
 }
 
 TEST_CASE("a limit whose check is not registered carries a caution") {

@@ -55,11 +55,16 @@ struct Connection {
   int plug_ins = 1000;
 };
 
+/// What may be left on the dropper after unplugging. `allowed_voltage_V` (discharge_rules.hpp) gives the limit
+/// for one dropper on one line.
 struct DischargeRule {
   double voltage_V = 34;
   double after_s = 1;
   double not_below_F = 0.1e-6;  ///< no rule when the greatest dropper capacitance is <= this
   std::string basis;            ///< named source, and how it is known
+  std::string name;             ///< of the named rule; empty for one in figures
+  std::optional<double> share_of_start;  ///< set: the limit is this share of the crest, not voltage_V
+  bool more_when_small = false;          ///< small capacitors may hold more than voltage_V, by a table
 };
 
 struct Surge {

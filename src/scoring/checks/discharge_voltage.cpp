@@ -2,6 +2,7 @@
 #include "dropfront/scoring/checks/checks.hpp"
 #include "dropfront/scoring/checks/make_check.hpp"
 #include "dropfront/scoring/corners.hpp"
+#include "dropfront/scoring/discharge_rules.hpp"
 
 namespace dropfront::scoring {
 
@@ -14,10 +15,11 @@ std::optional<Check> discharge_voltage(Evidence& evidence) {
   const double greatest_F = design.dropper->capacitance_F * (1 + design.dropper->tolerance);
   if (greatest_F <= rule->not_below_F) return std::nullopt;
   const double cold_degC = evidence.requirement().surroundings.ambient_degC.low;
-  const double left =
-      circuit::discharged_voltage_V(evidence.shapes().rich.crest_V(), discharge_ohm(design, End::high),
-                                    dropper_F(*design.dropper, End::high, false, cold_degC), rule->after_s);
-  return at_most("discharge.voltage", left, rule->voltage_V, "V",
+  const double crest_V = evidence.shapes().rich.crest_V();
+  const double cold_F = dropper_F(*design.dropper, End::high, false, cold_degC);
+  const double left_V =
+      circuit::discharged_voltage_V(crest_V, discharge_ohm(design, End::high), cold_F, rule->after_s);
+  return at_most("discharge.voltage", left_V, allowed_voltage_V(*rule, cold_F, crest_V), "V",
                  at_corner("unplug", cold_degC, "dropper high, discharge high"),
                  "Vcrest·exp(-t/(Rb·C)) at the asked time; " + rule->basis);
 }
