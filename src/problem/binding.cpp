@@ -62,7 +62,8 @@ class Bound : public BoundProblem {
       value = 0;
       if (requirement.objectives[k] == scoring::Objective::standby_loss) {
         // The most real power a capacitor in series with a resistance can take: half of V·I.
-        value = stress_.line_Vrms() * stress_.current_Arms(design.dropper->capacitance_F) / 2;
+        value = stress_.line_Vrms() *
+                stress_.current_Arms(design.dropper_count * design.dropper->capacitance_F) / 2;
       } else if (requirement.objectives[k] == scoring::Objective::current_margin) {
         for (const scoring::Load& load : requirement.output.loads) value = std::max(value, load.current_A);
       }

@@ -28,7 +28,9 @@ const KeySet harmonic{"harmonic", {"order", "percent"}, {"phase_deg"}};
 const KeySet output{"output", {"voltage", "loads"}, {"tolerance", "standby_load", "start_load"}};
 const KeySet load{"load", {"name", "current"}, {"at", "min_voltage", "for", "every"}};
 const KeySet surroundings{
-    "surroundings", {}, {"ambient", "enclosure", "life", "pollution_degree", "material_group", "max_height"}};
+    "surroundings",
+    {},
+    {"ambient", "enclosure", "life", "pollution_degree", "material_group", "max_height", "ripple_life"}};
 const KeySet ambient{"ambient", {}, {"low", "nominal", "high", "mean_over_life"}};
 const KeySet connection{"connection", {}, {"kind", "plug_ins"}};
 const KeySet limits{

@@ -19,22 +19,22 @@ const Part* optional_part(ObjectReader& reader, const char* slot, Problem& probl
   return cursor ? read_part<Part>(*cursor, problem) : nullptr;
 }
 
-/// A chain is a part's name (one element), {"part": name, "count": n} or an inline object with "count".
-void read_chain(const Cursor& cursor, Problem& problem, scoring::Design& design) {
-  design.discharge_count = 1;
+/// Equal parts that act as one: a part's name (one piece), {"part": name, "count": n} or an inline object
+/// with "count".
+template <class Part>
+const Part* read_counted(const Cursor& cursor, Problem& problem, int& count) {
+  count = 1;
   const Node& node = cursor.node();
   if (node.kind == Node::Kind::object) {
     const Node* part = node.find("part");
     for (std::size_t i = 0; i < node.keys.size(); ++i) {
       if (node.keys[i].name != "count") continue;
-      design.discharge_count = static_cast<int>(read_whole(cursor.member(i), 1, 20));
-      if (part && part->kind == Node::Kind::text && node.keys.size() == 2) {
-        design.discharge = require_part<parts::Resistor>(cursor.member(1 - i), part->text, problem);
-        return;
-      }
+      count = static_cast<int>(read_whole(cursor.member(i), 1, 20));
+      if (part && part->kind == Node::Kind::text && node.keys.size() == 2)
+        return require_part<Part>(cursor.member(1 - i), part->text, problem);
     }
   }
-  design.discharge = read_part<parts::Resistor>(cursor, problem, {"count"});
+  return read_part<Part>(cursor, problem, {"count"});
 }
 
 void refuse_unused(ObjectReader& reader, const char* slot, const scoring::Design& design) {
@@ -49,13 +49,16 @@ scoring::Design read_design(const Cursor& cursor, Problem& problem) {
   ObjectReader reader(cursor, keys::design);
   scoring::Design design;
   design.arrangement = read_arrangement(reader.require("arrangement"));
-  design.dropper = read_part<parts::Dropper>(reader.require("dropper"), problem);
-  design.series_resistor = read_part<parts::Resistor>(reader.require("series_resistor"), problem);
+  using parts::Resistor;
+  design.dropper = read_counted<parts::Dropper>(reader.require("dropper"), problem, design.dropper_count);
+  design.series_resistor =
+      read_counted<Resistor>(reader.require("series_resistor"), problem, design.series_resistor_count);
   design.clamp = read_part<parts::Clamp>(reader.require("clamp"), problem);
   design.reservoir = read_part<parts::Reservoir>(reader.require("reservoir"), problem);
   design.rectifier = read_part<parts::Rectifier>(reader.require("rectifier"), problem);
   design.output_stage = read_part<parts::OutputStage>(reader.require("output_stage"), problem);
-  if (const auto chain = reader.take("discharge")) read_chain(*chain, problem, design);
+  if (const auto chain = reader.take("discharge"))
+    design.discharge = read_counted<Resistor>(*chain, problem, design.discharge_count);
   design.varistor = optional_part<parts::Varistor>(reader, "varistor", problem);
   design.fuse = optional_part<parts::Fuse>(reader, "fuse", problem);
   design.ceramic = optional_part<parts::Ceramic>(reader, "ceramic", problem);

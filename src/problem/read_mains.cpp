@@ -5,6 +5,7 @@
 
 #include "dropfront/problem/defaults.hpp"
 #include "dropfront/problem/sections.hpp"
+#include "dropfront/scoring/corners/mains_shape.hpp"
 #include "dropfront/values/quantity.hpp"
 
 namespace dropfront::problem {
@@ -54,6 +55,31 @@ circuit::Harmonic read_harmonic(const Cursor& cursor, Problem& problem) {
   return harmonic;
 }
 
+/// Above the first a caution, above the second no supply that harmonics describe: three odd harmonics of a
+/// square wave reach 1.85, and its edges would go on adding.
+constexpr double kUnusualCurrent = 1.3;
+constexpr double kSquareCurrent = 1.75;
+
+void judge_waveform(const Cursor& cursor, const scoring::Supply& supply, Problem& problem) {
+  const double factor = scoring::current_factor(supply.harmonics);
+  if (!(factor <= kSquareCurrent)) {
+    throw cursor.error(
+        fmt::format("these harmonics raise the dropper's r.m.s. current to {:.2f} times a sine's and the "
+                    "series resistor's "
+                    "loss to {:.1f} times; allowed: up to {} times. A square or stepped wave (k = 3, 5, 7 "
+                    "... at 1/k) has "
+                    "edges that no list of harmonics holds: a capacitor dropper does not belong on it",
+                    factor, factor * factor, kSquareCurrent));
+  }
+  if (!(factor <= kUnusualCurrent)) {
+    problem.cautions.push_back(
+        fmt::format("{}: these harmonics raise the dropper's r.m.s. current to {:.2f} times a sine's (its "
+                    "losses to {:.1f} "
+                    "times; a public line stays below {}): check slew and resistor loss on the real waveform",
+                    cursor.dotted(), factor, factor * factor, kUnusualCurrent));
+  }
+}
+
 scoring::Supply read_supply(const Cursor& cursor, bool named, Problem& problem) {
   ObjectReader reader(cursor, keys::supply);
   scoring::Supply supply;
@@ -74,6 +100,7 @@ scoring::Supply read_supply(const Cursor& cursor, bool named, Problem& problem) 
       }
     }
     supply.harmonics_given = true;
+    judge_waveform(*harmonics, supply, problem);
   } else {
     note_default(problem, cursor, "harmonics",
                  "none at nominal; third, 3 %, flat-topped or peaked at the ends",

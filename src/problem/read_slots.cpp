@@ -66,11 +66,9 @@ std::vector<const Part*> extra_slot(ObjectReader& slots, const char* name, Probl
   return offered;
 }
 
-void only_one(ObjectReader& reader, const char* key, const char* what) {
+int read_pieces(ObjectReader& reader, const char* key) {
   const auto given = reader.take(key);
-  if (given && read_whole(*given, 1, 2) != 1) {
-    throw given->error(fmt::format("found 2; {} is not offered by this version; allowed: 1", what));
-  }
+  return given ? static_cast<int>(read_whole(*given, 1, 2)) : 1;
 }
 
 void read_arrangements(ObjectReader& slots, Problem& problem) {
@@ -158,10 +156,10 @@ void read_slots(const Cursor& cursor, Problem& problem) {
   keep_stages_in_band(slots.has("output_stage") ? slots.require("output_stage") : cursor, problem);
   offers.droppers = slot<parts::Dropper>(
       slots, "dropper", problem, any<parts::Dropper>,
-      [](ObjectReader& reader) { only_one(reader, "parallel", "two droppers in parallel"); });
+      [&](ObjectReader& reader) { offers.dropper_parallel = read_pieces(reader, "parallel"); });
   offers.series_resistors = slot<Resistor>(
       slots, "series_resistor", problem, [](const Resistor& part) { return serves(part, "series_resistor"); },
-      [](ObjectReader& reader) { only_one(reader, "split", "a split series resistor"); });
+      [&](ObjectReader& reader) { offers.series_resistor_split = read_pieces(reader, "split"); });
   offers.clamps = slot<parts::Clamp>(slots, "clamp", problem);
   offers.reservoirs = slot<parts::Reservoir>(slots, "reservoir", problem);
   read_discharges(slots, problem);

@@ -5,6 +5,7 @@
 #include "dropfront/problem/defaults.hpp"
 #include "dropfront/problem/names.hpp"
 #include "dropfront/problem/sections.hpp"
+#include "dropfront/scoring/ripple_life.hpp"
 #include "dropfront/values/quantity.hpp"
 #include "dropfront/values/year.hpp"
 
@@ -63,6 +64,15 @@ void read_surroundings(const Cursor& surroundings, Problem& problem) {
     s.material_group = groups[read_word(*group, groups)];
   } else {
     note_default(problem, surroundings, "material_group", "IIIa", "plain board material (IEC 60664-1)");
+  }
+  std::vector<std::string> laws;
+  for (const auto& law : scoring::ripple_life_laws()) laws.emplace_back(law.name);
+  if (const auto law = reader.take("ripple_life")) {
+    s.ripple_life = scoring::ripple_life_laws()[read_word(*law, laws)].law;
+  } else {
+    note_default(problem, surroundings, "ripple_life", laws.front(),
+                 "the most cautious of the published terms up to the rated current (" +
+                     std::string(scoring::ripple_life_laws().front().basis) + ")");
   }
   const auto height_m = quantity_or_none(problem, reader, "max_height", Unit::metre, kPositive, "no check");
   if (height_m) s.max_height_mm = std::round(*height_m * 1e6) / 1e3;  // lengths are kept to 1 um

@@ -65,7 +65,7 @@ scoring::Design RelaxedDesigns::make(const search::Choice& categories, const std
       },
       [](const parts::Dropper& part) { return part.rated_voltage_Vrms; });
   design.dropper = &parts.dropper;
-  const double most_F = parts.dropper.capacitance_F * (1 + parts.dropper.tolerance);
+  const double most_F = design.dropper_count * parts.dropper.capacitance_F * (1 + parts.dropper.tolerance);
 
   parts.series_resistor = series_resistors_.at(
       position_of(SlotId::series_resistor, position),

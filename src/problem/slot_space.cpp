@@ -87,6 +87,8 @@ SlotSpace make_space(const Offers& offers) {
 scoring::Design design_of(const Offers& offers, const std::vector<SlotId>& ids,
                           const search::Choice& choice) {
   scoring::Design design;
+  design.dropper_count = offers.dropper_parallel;
+  design.series_resistor_count = offers.series_resistor_split;
   for (std::size_t slot = 0; slot < ids.size(); ++slot) {
     const auto i = static_cast<std::size_t>(choice[slot]);
     switch (ids[slot]) {

@@ -1,5 +1,7 @@
 #include "dropfront/report/assess_text.hpp"
 
+#include <fmt/format.h>
+
 #include <algorithm>
 
 #include "dropfront/report/cautions.hpp"
@@ -7,6 +9,7 @@
 #include "dropfront/report/for_people.hpp"
 #include "dropfront/report/summary_text.hpp"
 #include "dropfront/report/text_table.hpp"
+#include "dropfront/scoring/check_formulas.hpp"
 
 namespace dropfront::report {
 
@@ -24,16 +27,25 @@ std::string parts_text(const scoring::Design& design, const scoring::Requirement
   return table.text();
 }
 
-std::string objectives_text(const scoring::Score& score, const std::string& currency) {
+std::string margin_year_text(const scoring::Score& score) {
+  if (!score.current_margin_horizon_years) return "";
+  if (score.current_margin_zero_year) return "; gone in year " + rounded(score.current_margin_zero_year, 1);
+  return "; not gone within " + rounded(score.current_margin_horizon_years, 0) + " years";
+}
+
+std::string objectives_text(const scoring::Score& score, const std::string& currency, bool several) {
+  const auto on = [several](const std::string& supply) { return several ? " on " + supply : std::string(); };
   const auto& o = score.objectives;
   const auto amount = [](const std::optional<double>& value, std::string_view unit) {
     return value ? with_unit(*value, unit) : std::string("unknown");
   };
   const std::string cost = cost_units(o) ? rounded(cost_units(o), 3) + " " + currency : "unknown";
   const std::string area = area_mm2(o) ? rounded(area_mm2(o), 0) + " mm2" : "unknown";
-  return wrapped("cost " + cost + ", standby loss " + amount(o.standby_loss_W, "W") + ", board area " + area +
-                     ", current margin " + amount(o.current_margin_A, "A") + " (" +
-                     amount(score.current_margin_new_A, "A") + " with new parts)",
+  return wrapped("cost " + cost + ", standby loss " + amount(o.standby_loss_W, "W") +
+                     on(score.standby_supply) + ", board area " + area + ", current margin " +
+                     amount(o.current_margin_A, "A") + on(score.margin_supply) + " (" +
+                     amount(score.current_margin_new_A, "A") + " with new parts" + margin_year_text(score) +
+                     ")",
                  "  ");
 }
 
@@ -69,6 +81,14 @@ std::string place_text(const scoring::At& at, bool several_supplies) {
   return text;
 }
 
+/// Names and numbers, in four figures each: the JSON document has them exactly.
+std::string figures_text(const std::vector<scoring::Figure>& figures) {
+  std::string text;
+  for (const auto& figure : figures)
+    text += fmt::format("{}{} {:.4g}", text.empty() ? "" : ", ", figure.name, figure.value);
+  return text;
+}
+
 std::string result_word(const scoring::Check& check) {
   if (check.unsolved) return "UNSOLVED";
   if (!check.pass) return "not given";
@@ -91,6 +111,9 @@ std::string checks_text(const scoring::Score& score, const AssessTextOptions& op
     const std::string place = place_text(check.at, several_supplies);
     if (!place.empty()) table.note("at " + place, 6);
     if (!check.basis.empty()) table.note(check.basis, 6);
+    table.note("formula: " + std::string(scoring::check_formula(check.id)), 6);
+    if (!check.figures.empty()) table.note("took " + figures_text(check.figures), 6);
+    if (!check.at.values.empty()) table.note("corner " + figures_text(check.at.values), 6);
   }
   return table.text();
 }
@@ -124,7 +147,7 @@ std::string assess_text(const std::string& title, const scoring::Design& design,
   std::string text = wrapped(title) + verdict_text(score);
   if (design.arrangement) text += "\nParts, " + std::string(design.arrangement->name) + "\n";
   text += parts_text(design, requirement);
-  text += "\nObjectives\n" + objectives_text(score, requirement.currency);
+  text += "\nObjectives\n" + objectives_text(score, requirement.currency, several);
   text += "\nOperation\n";
   for (const auto& supply : score.operations) text += operations_text(supply, several);
   text += "\nChecks\n" + checks_text(score, options, several) + "\n";

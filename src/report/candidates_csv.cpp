@@ -11,7 +11,7 @@ namespace dropfront::report {
 
 namespace {
 
-void write_row(CsvWriter& csv, const Entry& entry) {
+void write_row(CsvWriter& csv, const Entry& entry, bool several_supplies) {
   csv.cell(entry.number).cell(entry.on_front ? "true" : "false");
   const auto parts = design_slots(entry.design);
   for (const auto slot : slot_names()) {
@@ -23,7 +23,7 @@ void write_row(CsvWriter& csv, const Entry& entry) {
         std::find_if(parts.begin(), parts.end(), [slot](const auto& p) { return p.slot == slot; });
     const bool filled = part != parts.end();
     csv.cell(filled ? std::string_view(part->info->name) : std::string_view());
-    if (slot == "discharge") csv.cell(filled ? part->in_series : 0);
+    if (slot == "discharge") csv.cell(filled ? part->counted : 0);
   }
   csv.cell(cost_units(entry.objectives))
       .cell(entry.objectives.standby_loss_W)
@@ -31,6 +31,7 @@ void write_row(CsvWriter& csv, const Entry& entry) {
       .cell(entry.objectives.current_margin_A)
       .cell(entry.tightest_check)
       .cell(entry.tightest_headroom);
+  if (several_supplies) csv.cell(entry.tightest_supply).cell(entry.standby_supply).cell(entry.margin_supply);
   csv.end_row();
 }
 
@@ -69,9 +70,11 @@ std::string candidates_csv(const Result& result) {
   for (const char* name :
        {"standby_loss_W", "board_area_mm2", "current_margin_A", "tightest_check", "tightest_headroom"})
     header.emplace_back(name);
+  const bool several = result.problem->requirement.supplies.size() > 1;
+  if (several) header.insert(header.end(), {"tightest_supply", "standby_supply", "margin_supply"});
   CsvWriter csv(header);
-  for (const auto& entry : result.front) write_row(csv, entry);
-  for (const auto& entry : result.extras) write_row(csv, entry);
+  for (const auto& entry : result.front) write_row(csv, entry, several);
+  for (const auto& entry : result.extras) write_row(csv, entry, several);
   return csv.take();
 }
 

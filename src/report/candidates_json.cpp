@@ -60,6 +60,7 @@ void write_entries(JsonWriter& json, const std::vector<Entry>& entries) {
       json.begin_object(kFlat);
       json.member("check", entry.tightest_check);
       json.member("headroom", entry.tightest_headroom);
+      if (!entry.tightest_supply.empty()) json.member("supply", entry.tightest_supply);
       json.end_object();
     }
     json.key("alternatives");

@@ -12,6 +12,13 @@ void add(std::vector<SlotPart>& slots, std::string_view name, const Part* part, 
   slots.push_back({name, &part->info, 1, placed, short_value(*part), electrical_columns(*part)});
 }
 
+/// Equal parts that act as one, as the last slot.
+void count_last(std::vector<SlotPart>& slots, int count) {
+  slots.back().counted = count;
+  slots.back().placed = count;
+  if (count > 1) slots.back().value = std::to_string(count) + " x " + slots.back().value;
+}
+
 }  // namespace
 
 const std::vector<std::string_view>& slot_names() {
@@ -25,14 +32,14 @@ const std::vector<std::string_view>& slot_names() {
 std::vector<SlotPart> design_slots(const scoring::Design& d) {
   std::vector<SlotPart> slots;
   add(slots, "dropper", d.dropper);
+  if (d.dropper) count_last(slots, d.dropper_count);
   add(slots, "series_resistor", d.series_resistor);
+  if (d.series_resistor) count_last(slots, d.series_resistor_count);
   add(slots, "clamp", d.clamp, d.arrangement ? d.arrangement->clamp_count : 1);
   add(slots, "reservoir", d.reservoir);
   if (d.discharge_count > 0 && d.discharge != nullptr) {
-    add(slots, "discharge", d.discharge, d.discharge_count);
-    slots.back().in_series = d.discharge_count;
-    if (d.discharge_count > 1)
-      slots.back().value = std::to_string(d.discharge_count) + " x " + slots.back().value;
+    add(slots, "discharge", d.discharge);
+    count_last(slots, d.discharge_count);
   }
   add(slots, "rectifier", d.rectifier, d.arrangement ? d.arrangement->rectifier_count : 1);
   const bool stage_placed = d.output_stage && d.output_stage->kind != parts::StageKind::direct;

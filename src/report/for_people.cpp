@@ -41,6 +41,8 @@ std::optional<double> thousandfold(const std::optional<double>& value) {
   return 1000 * *value;
 }
 
+std::string times(int count) { return count > 1 ? std::to_string(count) + " x " : std::string(); }
+
 std::string percent(const std::optional<double>& share) {
   if (!share) return "-";
   const double value = 100 * *share;

@@ -166,7 +166,10 @@ Result make_result(const problem::BoundProblem& bound, const search::SearchOutco
     if (const scoring::Check* tightest = tightest_check(score)) {
       entry.tightest_check = tightest->id;
       entry.tightest_headroom = tightest->headroom();
+      entry.tightest_supply = tightest->at.supply;
     }
+    entry.standby_supply = score.standby_supply;
+    entry.margin_supply = score.margin_supply;
     entry.alternatives = sources.of(entry.design);
     if (full) entry.evidence = std::move(score);
   });

@@ -14,7 +14,11 @@ namespace {
 
 std::string tightest_words(const Entry& entry) {
   if (entry.tightest_check.empty()) return "";
-  return fmt::format("; tightest {} {}", entry.tightest_check, percent(entry.tightest_headroom));
+  std::string text = fmt::format("; tightest {} {}", entry.tightest_check, percent(entry.tightest_headroom));
+  if (!entry.tightest_supply.empty()) text += " on " + entry.tightest_supply;
+  if (entry.standby_supply.empty()) return text;
+  return text +
+         fmt::format("; standby decided by {}, margin by {}", entry.standby_supply, entry.margin_supply);
 }
 
 /// Arrangement, output stage, discharge chain and optional parts: what the columns leave out.
@@ -49,12 +53,15 @@ std::string design_table(const std::string& heading, const std::vector<Line>& li
   for (const Line& line : lines) {
     const auto& design = line.entry->design;
     const auto& objectives = line.entry->objectives;
-    table.row({line.label, design.dropper ? with_unit(design.dropper->capacitance_F, "F") : "-",
-               design.series_resistor ? short_value(*design.series_resistor) : "-",
-               design.clamp ? short_value(*design.clamp) : "-",
-               design.reservoir ? short_value(*design.reservoir) : "-", rounded(cost_units(objectives), 3),
-               rounded(thousandfold(objectives.standby_loss_W), 0), rounded(area_mm2(objectives), 0),
-               rounded(thousandfold(objectives.current_margin_A), 2)});
+    table.row(
+        {line.label,
+         design.dropper ? times(design.dropper_count) + with_unit(design.dropper->capacitance_F, "F") : "-",
+         design.series_resistor ? times(design.series_resistor_count) + short_value(*design.series_resistor)
+                                : "-",
+         design.clamp ? short_value(*design.clamp) : "-",
+         design.reservoir ? short_value(*design.reservoir) : "-", rounded(cost_units(objectives), 3),
+         rounded(thousandfold(objectives.standby_loss_W), 0), rounded(area_mm2(objectives), 0),
+         rounded(thousandfold(objectives.current_margin_A), 2)});
     if (!line.describe) continue;
     table.note(rest_of_design(*line.entry), 6);
     table.note(part_names(line.entry->design), 6);

@@ -3,6 +3,7 @@
 #include "dropfront/report/cautions.hpp"
 #include "dropfront/report/design_json.hpp"
 #include "dropfront/report/for_people.hpp"
+#include "dropfront/scoring/check_formulas.hpp"
 
 namespace dropfront::report {
 
@@ -62,6 +63,14 @@ void write_operations(JsonWriter& json, const std::vector<scoring::Operation>& o
   json.end_object();
 }
 
+void write_figures(JsonWriter& json, std::string_view name, const std::vector<scoring::Figure>& figures) {
+  if (figures.empty()) return;
+  json.key(name);
+  json.begin_object(kFlat);
+  for (const auto& figure : figures) json.member(figure.name, figure.value);
+  json.end_object();
+}
+
 void write_check(JsonWriter& json, const scoring::Check& check) {
   json.begin_object(kFlat);
   json.member("id", check.id);
@@ -80,8 +89,11 @@ void write_check(JsonWriter& json, const scoring::Check& check) {
   if (!at.load.empty()) json.member("load", at.load);
   if (at.phase_deg) json.member("phase_deg", *at.phase_deg);
   if (!at.ends.empty()) json.member("ends", at.ends);
+  write_figures(json, "values", at.values);
   json.end_object();
   json.member("basis", check.basis);
+  json.member("formula", scoring::check_formula(check.id));
+  write_figures(json, "figures", check.figures);
   json.end_object();
 }
 
@@ -141,7 +153,16 @@ void write_score(JsonWriter& json, const scoring::Design& design, const scoring:
   json.member("verdict", verdict_name(score.verdict));
   json.key("objectives");
   write_objectives(json, score.objectives);
+  if (requirement.supplies.size() > 1) {
+    json.key("decided_by");
+    json.begin_object(kFlat);
+    json.member("standby_loss_W", score.standby_supply);
+    json.member("current_margin_A", score.margin_supply);
+    json.end_object();
+  }
   json.member("current_margin_new_A", score.current_margin_new_A);
+  json.member("current_margin_zero_year", score.current_margin_zero_year);
+  json.member("current_margin_horizon_years", score.current_margin_horizon_years);
   json.key("operation");
   const auto& supplies = requirement.supplies;
   if (supplies.size() == 1) {

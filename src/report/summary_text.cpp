@@ -64,7 +64,8 @@ std::string nothing_found(const Result& result) {
   for (const auto& miss : result.near_misses) {
     const auto& design = miss.design;
     near.row({miss.check, found_text(miss.broken), limit_text(miss.broken),
-              with_unit(design.dropper->capacitance_F, "F"), short_value(*design.series_resistor),
+              times(design.dropper_count) + with_unit(design.dropper->capacitance_F, "F"),
+              times(design.series_resistor_count) + short_value(*design.series_resistor),
               short_value(*design.clamp), short_value(*design.reservoir)});
     near.note(part_names(design), 6);
   }

@@ -21,6 +21,7 @@ const std::vector<CheckRule>& check_table() {
       {"resistor.pulse", Tier::transient, resistor_pulse},
       {"resistor.pulse_voltage", Tier::list, resistor_pulse_voltage},
       {"resistor.opens", Tier::list, resistor_opens},
+      {"resistor.body", Tier::steady, resistor_body},
       {"clamp.power", Tier::steady, clamp_power},
       {"clamp.junction", Tier::steady, clamp_junction},
       {"clamp.pulse", Tier::transient, clamp_pulse},

@@ -3,6 +3,8 @@
 #include <algorithm>
 #include <limits>
 
+#include "dropfront/circuit/discharge.hpp"
+
 namespace dropfront::scoring {
 
 namespace {
@@ -19,6 +21,18 @@ double resistor_ohm(const parts::Resistor& part, End end) {
   return ended(part.resistance_ohm, part.tolerance, end);
 }
 
+double series_resistor_ohm(const Design& design, End end) {
+  return design.series_resistor_count * resistor_ohm(*design.series_resistor, end);
+}
+
+double series_resistor_share(const Design& design) {
+  return circuit::greatest_voltage_share(design.series_resistor_count, design.series_resistor->tolerance);
+}
+
+double all_droppers_F(const Design& design, End end, double aged, double local_degC) {
+  return design.dropper_count * dropper_F(*design.dropper, end, aged, local_degC);
+}
+
 double discharge_ohm(const Design& design, End end) {
   if (design.discharge == nullptr || design.discharge_count <= 0) {
     return std::numeric_limits<double>::infinity();
@@ -26,9 +40,9 @@ double discharge_ohm(const Design& design, End end) {
   return design.discharge_count * resistor_ohm(*design.discharge, end);
 }
 
-double dropper_F(const parts::Dropper& part, End end, bool aged, double local_degC) {
+double dropper_F(const parts::Dropper& part, End end, double aged, double local_degC) {
   constexpr double kReference_degC = 20;  // at which film capacitance is stated (IEC 60384-1, from memory)
-  const double loss = aged && end == End::low ? 1 - part.end_of_life_loss : 1;
+  const double loss = end == End::low ? left_of(part.end_of_life_loss, aged) : 1;
   const double warm = 1 + part.temperature_coefficient_per_K * (local_degC - kReference_degC);
   return ended(part.capacitance_F, part.tolerance, end) * loss * warm;
 }
@@ -56,8 +70,8 @@ circuit::ElementValues corner_values(const Design& design, const Recipe& recipe,
   const auto& can = *design.reservoir;
   circuit::ElementValues values;
   values.mains = *recipe.mains;
-  values.series_resistor_ohm = resistor_ohm(*design.series_resistor, recipe.series_resistor);
-  values.dropper_F = dropper_F(*design.dropper, recipe.dropper, recipe.aged, film_degC);
+  values.series_resistor_ohm = series_resistor_ohm(design, recipe.series_resistor);
+  values.dropper_F = all_droppers_F(design, recipe.dropper, recipe.aged, film_degC);
   values.dropper_esr_ohm = dropper_esr_ohm(*design.dropper, values.dropper_F, values.mains.frequency_Hz());
   values.discharge_ohm = discharge_ohm(design, recipe.discharge);
   values.rectifier = rectifier_curve(*design.rectifier, recipe.drops, air_degC);

@@ -42,22 +42,33 @@ const LeanAnswer& Evidence::lean() {
   lean->hot_decides = found.where.ambient_degC == impl_->ambient_degC(true);
   lean->ends = ends_text(found.where.ends, impl_->bled());
   lean->available_A = found.available_A;
+  const auto warm = found.rises.over(lean->ambient_degC);
+  lean->local_degC = warm.local_degC;
+  lean->clamp_junction_degC = warm.clamp_junction_degC;
   if (!found.usable) return *lean;
-  lean->capability_A = impl_->lean_search.solver().capability_A(found);
+  auto& solver = impl_->lean_search.solver();
+  lean->values = impl_->points.values(solver.recipe(found.where.ends), found.rises, lean->ambient_degC);
+  lean->values.rail_current_A = found.best_A;
+  lean->capability_A = solver.capability_A(found);
   lean->margin_A = lean->capability_A - impl_->loads.heaviest_output_A();
   return *lean;
 }
 
-std::optional<double> Evidence::margin_new_A() {
-  auto& margin = impl_->margin_new;
-  if (margin) return *margin;
-  margin.emplace();
-  if (!impl_->required) return *margin;
-  LeanSearch fresh(impl_->points, impl_->shapes->lean, impl_->overhead_A(Quiescent::data), false);
-  const auto& found = fresh.least();
-  if (found.usable) *margin = fresh.solver().capability_A(found) - impl_->loads.heaviest_output_A();
-  return *margin;
+std::optional<double> Evidence::margin_at_A(double age) {
+  if (age == 1) return lean().usable ? std::optional(lean().margin_A) : std::nullopt;
+  auto& known = impl_->margin_new;
+  if (age == 0 && known) return *known;
+  std::optional<double> margin;
+  if (impl_->required) {
+    LeanSearch search(impl_->points, impl_->shapes->lean, impl_->overhead_A(Quiescent::data), age);
+    const auto& found = search.least();
+    if (found.usable) margin = search.solver().capability_A(found) - impl_->loads.heaviest_output_A();
+  }
+  if (age == 0) known = margin;
+  return margin;
 }
+
+std::optional<double> Evidence::margin_new_A() { return margin_at_A(0); }
 
 const OperatingPoint& Evidence::lean_cold() { return impl_->lean_point(false); }
 const OperatingPoint& Evidence::lean_hot() { return impl_->lean_point(true); }

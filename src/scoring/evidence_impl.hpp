@@ -24,7 +24,7 @@ struct Evidence::Impl {
         loads(load_profile(r.output)),
         required(scoring::required_rail_V(*d.output_stage, r.output, loads)),
         points(design, r, required.value_or(0)),
-        lean_search(points, shapes->lean, overhead_A(Quiescent::data), true) {}
+        lean_search(points, shapes->lean, overhead_A(Quiescent::data), 1) {}
 
   double overhead_A(Quiescent quiescent) const {
     return quiescent_A(*design.output_stage, quiescent) + design.reservoir->leakage_A +

@@ -34,7 +34,7 @@ std::string ends_text(const LeanEnds& ends, bool bled) {
 }
 
 LeanCaseSolver::LeanCaseSolver(PointSolver& points, const circuit::Waveform& lean_mains, double overhead_A,
-                               bool aged)
+                               double aged)
     : points_(&points), mains_(&lean_mains), overhead_A_(overhead_A), aged_(aged) {}
 
 Recipe LeanCaseSolver::recipe(const LeanEnds& ends) const {

@@ -16,7 +16,8 @@ End flipped(End end) { return end == End::low ? End::high : End::low; }
 
 }  // namespace
 
-LeanSearch::LeanSearch(PointSolver& points, const circuit::Waveform& lean_mains, double overhead_A, bool aged)
+LeanSearch::LeanSearch(PointSolver& points, const circuit::Waveform& lean_mains, double overhead_A,
+                       double aged)
     : solver_(points, lean_mains, overhead_A, aged) {}
 
 /// Whether the clamp stands so little above the required rail that the cold end of its curve decides: its

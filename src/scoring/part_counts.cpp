@@ -18,8 +18,8 @@ std::vector<PlacedPart> placed_parts(const Design& design) {
       design.output_stage != nullptr && design.output_stage->kind != parts::StageKind::direct;
   const auto* wiring = design.arrangement;
   add(placed, placed_stage ? design.output_stage : nullptr, 1, false);
-  add(placed, design.dropper, 1, true);
-  add(placed, design.series_resistor, 1, true);
+  add(placed, design.dropper, design.dropper_count, true);
+  add(placed, design.series_resistor, design.series_resistor_count, true);
   add(placed, design.clamp, wiring != nullptr ? wiring->clamp_count : 1, false);
   add(placed, design.reservoir, 1, false);
   add(placed, design.discharge, design.discharge_count, true);

@@ -81,6 +81,9 @@ Tried try_plug_in(const PointSolver& points, const Recipe& recipe, const Operati
   tried.plug.run =
       circuit::run_transient(network, left_charged(network, values.mains.crest_V(), full_V), options);
   tried.plug.ambient_degC = rest.ambient_degC;
+  tried.plug.values = values;
+  tried.plug.local_degC = rest.local_degC;
+  tried.plug.clamp_junction_degC = rest.clamp_junction_degC;
   tried.plug.ends = recipe.series_resistor == End::low ? "series_resistor low" : "series_resistor high";
   tried.resistor = series_resistor(network, tried.plug.run);
   tried.rectifier_peak_A = greatest_of(network.branches, tried.plug.run.branch_peak_A, Owner::rectifier);

@@ -12,7 +12,7 @@ Recipe rich_recipe(const MainsShapes& shapes) {
   recipe.reservoir = End::low;
   recipe.esr = End::high;
   recipe.drops = Drops::least;
-  recipe.aged = true;
+  recipe.aged = 1;
   recipe.temperature = true;
   return recipe;
 }

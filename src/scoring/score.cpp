@@ -10,6 +10,7 @@
 #include "dropfront/scoring/checks/make_check.hpp"
 #include "dropfront/scoring/cost.hpp"
 #include "dropfront/scoring/evidence.hpp"
+#include "dropfront/scoring/margin_age.hpp"
 #include "dropfront/scoring/operations.hpp"
 #include "dropfront/scoring/verdict.hpp"
 
@@ -35,6 +36,11 @@ void keep_finite(std::optional<double>& figure) {
   if (figure && !std::isfinite(*figure)) figure.reset();
 }
 
+void keep_finite(std::vector<Figure>& figures) {
+  const auto odd = [](const Figure& figure) { return !std::isfinite(figure.value); };
+  figures.erase(std::remove_if(figures.begin(), figures.end(), odd), figures.end());
+}
+
 /// Worst of one rule over all supplies; absent where it applies to none.
 std::optional<Check> judge(const CheckRule& rule, const Evidences& evidences) {
   std::optional<Check> worst;
@@ -45,28 +51,34 @@ std::optional<Check> judge(const CheckRule& rule, const Evidences& evidences) {
     check->at.supply = evidence->supply().name;
     keep_finite(check->value);
     keep_finite(check->limit);
+    keep_finite(check->figures);
+    keep_finite(check->at.values);
     worst = worst ? worse(std::move(*worst), std::move(*check)) : std::move(check);
   }
   return worst;
 }
 
-std::optional<double> greatest_standby_W(const Evidences& evidences) {
+std::optional<double> greatest_standby_W(const Evidences& evidences, std::string& where) {
   std::optional<double> greatest;
   for (const auto& evidence : evidences) {
     const auto& point = evidence->standby_worst();
     if (!point.state.usable()) return std::nullopt;
-    greatest = std::max(greatest.value_or(0), point.state.input_power_W);
+    if (greatest && !(point.state.input_power_W > *greatest)) continue;
+    greatest = point.state.input_power_W;
+    where = evidence->supply().name;
   }
   keep_finite(greatest);
   return greatest;
 }
 
-std::optional<double> least_margin_A(const Evidences& evidences) {
+std::optional<double> least_margin_A(const Evidences& evidences, std::string& where) {
   std::optional<double> least;
   for (const auto& evidence : evidences) {
     const auto& lean = evidence->lean();
     if (!lean.usable) return std::nullopt;
-    least = least ? std::min(*least, lean.margin_A) : lean.margin_A;
+    if (least && !(lean.margin_A < *least)) continue;
+    least = lean.margin_A;
+    where = evidence->supply().name;
   }
   keep_finite(least);
   return least;
@@ -81,6 +93,18 @@ std::optional<double> least_margin_new_A(const Evidences& evidences) {
   }
   keep_finite(least);
   return least;
+}
+
+/// The first year without margin on any supply, and how far it was looked for.
+void find_margin_year(const Evidences& evidences, double life_years, Score& score) {
+  std::optional<double> first;
+  for (const auto& evidence : evidences) {
+    const auto age = margin_zero_age(*evidence);
+    if (!age.known) return;
+    if (age.year) first = first ? std::min(*first, *age.year) : *age.year;
+  }
+  score.current_margin_zero_year = first;
+  score.current_margin_horizon_years = kHorizonLives * life_years;
 }
 
 /// Runs the checks of one tier; false: one failed and `stop_at_failure`.
@@ -131,9 +155,9 @@ bool run_stages(Score& score, Depth depth, const Stop& stop, const Evidences& ev
       return false;
     }
   }
-  score.objectives.standby_loss_W = greatest_standby_W(evidences);
+  score.objectives.standby_loss_W = greatest_standby_W(evidences, score.standby_supply);
   if (!run_tier(Tier::standby, evidences, stop_at_failure, found) || stopped()) return false;
-  score.objectives.current_margin_A = least_margin_A(evidences);
+  score.objectives.current_margin_A = least_margin_A(evidences, score.margin_supply);
   if (!run_tier(Tier::lean, evidences, stop_at_failure, found) || stopped()) return false;
   if (depth == Depth::screen) return false;
   return run_tier(Tier::steady, evidences, stop_at_failure, found) &&
@@ -168,6 +192,7 @@ Score Scorer::score(const Design& design, Depth depth, const Stop& stop) const {
   }
   if (depth == Depth::full && score.complete) {
     score.current_margin_new_A = least_margin_new_A(evidences);
+    find_margin_year(evidences, requirement_->surroundings.life_years, score);
     for (const auto& evidence : evidences) score.operations.push_back(operations_of(*evidence));
   }
   score.verdict = verdict_of(score, *requirement_);

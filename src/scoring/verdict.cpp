@@ -1,5 +1,7 @@
 #include "dropfront/scoring/verdict.hpp"
 
+#include <fmt/format.h>
+
 #include <algorithm>
 #include <cmath>
 
@@ -28,6 +30,21 @@ bool known(const Objectives& objectives, Objective which) {
 
 bool accepted(const Check& check, const Requirement& requirement) {
   return requirement.accept_missing_ratings && !check.unsolved;
+}
+
+/// One element of a series chain that opens leaves the whole crest; only a rule that is checked is spoken of.
+void add_open_chain(const Score& score, std::vector<std::string>& cautions) {
+  for (const auto& check : score.checks) {
+    if (check.id != "discharge.voltage" || !check.limit) continue;
+    for (const auto& figure : check.figures) {
+      if (figure.name != "line_crest_V") continue;
+      cautions.push_back(
+          fmt::format("discharge: with any one element of the chain open nothing discharges the dropper, and "
+                      "up to {:.0f} V "
+                      "stay at the plug (the rule allows {:.0f} V)",
+                      figure.value, *check.limit));
+    }
+  }
 }
 
 }  // namespace
@@ -77,8 +94,11 @@ std::vector<std::string> cautions_of(const Design& design, const Score& score,
   if (design.dropper != nullptr && !design.dropper->series_rated) {
     cautions.emplace_back(
         "dropper: not stated for use in series with the mains; its end-of-life loss of capacitance is the "
-        "design's weak point");
+        "design's weak point (such parts were found to have lost 60 to 70 % over 15 to 20 years; as "
+        "restated, "
+        "copy not kept)");
   }
+  if (design.discharge != nullptr) add_open_chain(score, cautions);
   for (const auto& check : score.checks) {
     if (check.pass || check.unsolved || !requirement.accept_missing_ratings) continue;
     cautions.push_back(std::string(check.id) + ": no rating given, not judged (" + check.basis + ")");

@@ -40,6 +40,10 @@ const std::vector<Broken> kProblemRules{
      "\"50 Hz\", \"harmonics\": [{\"order\": 3, \"percent\": 1}, {\"order\": 3, \"percent\": 2}]",
      "order 3 twice"},
     {"phases", "\"50 Hz\"", "\"50 Hz\", \"phases\": \"as given\"", "without harmonics"},
+    {"waveform", "\"50 Hz\"",
+     "\"50 Hz\", \"harmonics\": [{\"order\": 3, \"percent\": 33.3}, {\"order\": 5, \"percent\": 20}, "
+     "{\"order\": 7, \"percent\": 14.3}]",
+     "a square or stepped wave"},
     {"load names", "\"awake\"", "\"asleep\"", "two loads named \"asleep\""},
     {"load above zero",
      "{\"name\": \"asleep\", \"current\": \"0.2 mA\"}, {\"name\": \"awake\", \"current\": \"8 mA\"}",

@@ -3,6 +3,7 @@
 
 #include "dropfront/scoring/check_table.hpp"
 #include "dropfront/scoring/discharge_rules.hpp"
+#include "dropfront/scoring/ripple_life.hpp"
 #include "problem/fixture.hpp"
 #include "support/catch.hpp"
 
@@ -30,6 +31,7 @@ TEST_CASE("every default of the interface is filled in and noted with its reason
       {"surroundings.ambient.mean_over_life", "37.5 °C"},
       {"surroundings.enclosure", "0 K/W"},
       {"surroundings.life", "10 years"},
+      {"surroundings.ripple_life", "2^(-dT/5)"},
       {"surroundings.pollution_degree", "2"},
       {"surroundings.material_group", "IIIa"},
       {"surroundings.max_height", "none"},
@@ -151,12 +153,41 @@ TEST_CASE("a discharge rule is asked for by the number of its standard, in figur
   const auto asked = [&](const std::string& value) {
     return bench.problem({"limits.discharge=" + value}).requirement.limits.discharge;
   };
-  for (const auto& name : scoring::discharge_rule_names()) CHECK(asked("\"" + name + "\"").value().name == name);
+  for (const auto& name : scoring::discharge_rule_names())
+    CHECK(asked("\"" + name + "\"").value().name == name);
   CHECK(asked("62368-1").value().more_when_small);  // as a person types it after --set
   CHECK(asked(R"({"voltage": "42 V", "after": "3 s"})").value().voltage_V == 42);
   CHECK_FALSE(asked("\"none\""));
   CHECK(bench.refusal(kProblem, {"limits.discharge=\"62368\""}).find("did you mean '62368-1'") !=
         std::string::npos);
+}
+
+TEST_CASE("the ripple term is one of the named ones, the most cautious unless said") {
+  const Bench bench;
+  CHECK(bench.problem().requirement.surroundings.ripple_life == scoring::RippleLife::halves_each_5_K);
+  for (const auto& law : scoring::ripple_life_laws()) {
+    const auto p = bench.problem({"surroundings.ripple_life=\"" + std::string(law.name) + "\""});
+    CHECK(p.requirement.surroundings.ripple_life == law.law);
+  }
+  CHECK(bench.refusal(kProblem, {"surroundings.ripple_life=\"2^(-dT/6)\""}).find("2^(-dT/5)") !=
+        std::string::npos);
+}
+
+TEST_CASE("a distorted line is warned of by its current, a square one is refused") {
+  const Bench bench;
+  const auto with_harmonics = [](const std::string& list) {
+    return std::vector<std::string>{"mains.harmonics=[" + list + "]"};
+  };
+  const std::string third = R"({"order": 3, "percent": 33.3})", fifth = R"({"order": 5, "percent": 20})",
+                    seventh = R"({"order": 7, "percent": 14.3})";
+  CHECK(bench.problem(with_harmonics(R"({"order": 5, "percent": 6})")).cautions.empty());
+  const auto cautions = bench.problem(with_harmonics(third + "," + fifth)).cautions;
+  REQUIRE(cautions.size() == 1);
+  // sqrt(3/(1 + 1/9 + 1/25)) = 1.61
+  CHECK(cautions[0].find("1.61 times") != std::string::npos);
+  const auto refused = bench.refusal(kProblem, with_harmonics(third + "," + fifth + "," + seventh));
+  CHECK(refused.find("square or stepped wave") != std::string::npos);
+  CHECK(refused.find("/mains/harmonics") != std::string::npos);
 }
 
 TEST_CASE("a limit whose check is not registered carries a caution") {

@@ -103,3 +103,24 @@ TEST_CASE("mistakes of a design file name file, place and what is meant") {
     CHECK(message.find(row.second) != std::string::npos);
   }
 }
+
+TEST_CASE(
+    "two droppers in parallel and a split series resistor are counted as a chain is, one when not said") {
+  const Bench bench;
+  auto p = bench.problem();
+  const auto one = design(bench, p, kNames);
+  CHECK(one.dropper_count == 1);
+  CHECK(one.series_resistor_count == 1);
+  const auto named = design(bench, p,
+                            with(with(kNames, "\"film-1u\"", R"({"part": "film-470n", "count": 2})"),
+                                 "\"fuse-100R\"", R"({"count": 2, "part": "fuse-47R"})"));
+  CHECK(named.dropper->info.name == "film-470n");
+  CHECK(named.dropper_count == 2);
+  CHECK(named.series_resistor->info.name == "fuse-47R");
+  CHECK(named.series_resistor_count == 2);
+  const auto inlined = design(bench, p, with(kInline, "\"100 R\"", "\"50 R\", \"count\": 2"));
+  CHECK(inlined.series_resistor->resistance_ohm == 50);
+  CHECK(inlined.series_resistor_count == 2);
+  CHECK(refusal(bench, with(kInline, "\"100 R\"", "\"50 R\", \"count\": 0")).find("/series_resistor/count") !=
+        std::string::npos);
+}

@@ -1,5 +1,6 @@
 #include <algorithm>
 
+#include "dropfront/problem/slot_space.hpp"
 #include "dropfront/problem/support.hpp"
 #include "problem/fixture.hpp"
 #include "support/catch.hpp"
@@ -147,4 +148,18 @@ TEST_CASE("arrangements are offered in their own order, one name or several") {
   REQUIRE(p.offers.arrangements.size() == 2);
   CHECK(p.offers.arrangements[0]->name == "half-wave-clamp-ahead");
   CHECK(slots(bench, R"({"arrangement": "bridge-clamp-across"})").offers.arrangements.size() == 1);
+}
+
+TEST_CASE("split and parallel put every design's series resistor and dropper there twice") {
+  const Bench bench;
+  const auto p = slots(bench, R"({"series_resistor": {"split": 2}, "dropper": {"parallel": 2}})");
+  CHECK(p.offers.series_resistor_split == 2);
+  CHECK(p.offers.dropper_parallel == 2);
+  const auto space = problem::make_space(p.offers);
+  const auto d = problem::design_of(p.offers, space.ids, search::Choice(space.ids.size(), 0));
+  CHECK(d.series_resistor_count == 2);
+  CHECK(d.dropper_count == 2);
+  const auto plain = slots(bench, "{}");
+  CHECK(plain.offers.series_resistor_split == 1);
+  CHECK(plain.offers.dropper_parallel == 1);
 }

@@ -4,6 +4,7 @@
 #include <functional>
 #include <map>
 
+#include "dropfront/scoring/check_formulas.hpp"
 #include "scoring/checks/judge.hpp"
 #include "support/catch.hpp"
 
@@ -29,36 +30,15 @@ void each_example(const std::function<void(Example&)>& look) {
 }
 
 TEST_CASE("the checks stand in their documented order, each id once") {
-  const std::vector<std::string_view> documented{"supply.margin",
-                                                 "supply.start",
-                                                 "rail.max",
-                                                 "rail.transient",
-                                                 "output.band",
-                                                 "standby.power",
-                                                 "dropper.voltage",
-                                                 "dropper.class",
-                                                 "dropper.series_rated",
-                                                 "dropper.slew",
-                                                 "resistor.power",
-                                                 "resistor.voltage",
-                                                 "resistor.pulse",
-                                                 "resistor.pulse_voltage",
-                                                 "resistor.opens",
-                                                 "clamp.power",
-                                                 "clamp.junction",
-                                                 "clamp.pulse",
-                                                 "rectifier.reverse",
-                                                 "rectifier.surge",
-                                                 "reservoir.voltage",
-                                                 "reservoir.ripple",
-                                                 "reservoir.life",
-                                                 "reservoir.leakage",
-                                                 "discharge.voltage",
-                                                 "discharge.power",
-                                                 "discharge.working_voltage",
-                                                 "output_stage.junction",
-                                                 "output_stage.input",
-                                                 "board.height"};
+  const std::vector<std::string_view> documented{
+      "supply.margin",         "supply.start",           "rail.max",         "rail.transient",
+      "output.band",           "standby.power",          "dropper.voltage",  "dropper.class",
+      "dropper.series_rated",  "dropper.slew",           "resistor.power",   "resistor.voltage",
+      "resistor.pulse",        "resistor.pulse_voltage", "resistor.opens",   "resistor.body",
+      "clamp.power",           "clamp.junction",         "clamp.pulse",      "rectifier.reverse",
+      "rectifier.surge",       "reservoir.voltage",      "reservoir.ripple", "reservoir.life",
+      "reservoir.leakage",     "discharge.voltage",      "discharge.power",  "discharge.working_voltage",
+      "output_stage.junction", "output_stage.input",     "board.height"};
   std::vector<std::string_view> found;
   for (const CheckRule& rule : check_table()) found.push_back(rule.id);
   CHECK(found == documented);
@@ -87,6 +67,29 @@ TEST_CASE("every check answers under its own id with one unit and one side and a
     }
   });
   CHECK(seen.size() == check_table().size());
+}
+
+TEST_CASE("every check says its formula, and every one that is no yes or no the numbers it took") {
+  std::map<std::string_view, bool> carried;
+  each_example([&](Example& example) {
+    Evidence evidence(example.design(), example.requirement, example.supply());
+    for (const CheckRule& rule : check_table()) {
+      const auto check = rule.evaluate(evidence);
+      if (!check || check->yes_or_no()) continue;
+      for (const auto* list : {&check->figures, &check->at.values})
+        for (const Figure& figure : *list) {
+          INFO(rule.id << " " << figure.name);
+          CHECK_FALSE(figure.name.empty());
+        }
+      carried[rule.id] = carried[rule.id] || (!check->figures.empty() || !check->at.values.empty());
+    }
+  });
+  for (const CheckRule& rule : check_table()) {
+    INFO(rule.id);
+    CHECK_FALSE(check_formula(rule.id).empty());
+    if (carried.count(rule.id) > 0) CHECK(carried[rule.id]);
+  }
+  CHECK(check_formula("supply.nothing").empty());
 }
 
 TEST_CASE("cheap checks need no steady state and no transient") {
@@ -122,6 +125,7 @@ TEST_CASE("a rating that is not given is never a pass") {
       {"resistor.pulse_voltage", [](Example& e) { e.series_resistor.overload_voltage_V.reset(); }},
       {"resistor.opens", [](Example& e) { e.series_resistor.opens_at.reset(); }},
       {"resistor.opens", [](Example& e) { e.series_resistor.rated_power_W.reset(); }},
+      {"resistor.body", [](Example& e) { e.series_resistor.rated_power_W.reset(); }},
       {"clamp.power", [](Example& e) { e.clamp.rated_power_W.reset(); }},
       {"clamp.junction", [](Example& e) { e.clamp.thermal_resistance_K_per_W = 0; }},
       {"clamp.pulse", [](Example& e) { e.clamp.pulse_power_W.reset(); }},

@@ -102,3 +102,20 @@ TEST_CASE("A dropper not stated for series use is a caution") {
   example.dropper.series_rated = false;
   REQUIRE(cautions_of(example.design(), score, example.requirement).size() == 1);
 }
+
+TEST_CASE("A checked chain carries the remark that one open element leaves the whole crest") {
+  test::Example example;
+  const auto cautions = [&](Depth depth) {
+    return score(example.design(), example.requirement, depth).cautions;
+  };
+  REQUIRE(cautions(Depth::full).empty());  // no rule, nothing to say
+  example.requirement.limits.discharge = DischargeRule{};
+  const auto said = cautions(Depth::full);
+  REQUIRE(said.size() == 1);
+  // 253 V peaked by 3 % third harmonic: a crest of about 1.414·253·1.03 = 369 V.
+  REQUIRE(said[0].find("one element of the chain open") != std::string::npos);
+  REQUIRE(said[0].find("368 V") != std::string::npos);
+  REQUIRE(said[0].find("34 V") != std::string::npos);
+  example.discharge_count = 0;
+  REQUIRE(cautions(Depth::full).empty());
+}

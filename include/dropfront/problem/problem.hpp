@@ -47,6 +47,8 @@ struct Offers {
   std::vector<const parts::Ceramic*> ceramics;
   std::vector<const parts::Thyristor*> thyristors;
   std::vector<const parts::Resistor*> gate_resistors;
+  int dropper_parallel = 1;              ///< equal droppers in parallel in every design, 1 or 2
+  int series_resistor_split = 1;         ///< equal series resistors in series in every design, 1 or 2
   bool varistor_before_resistor = true;  ///< line side of the series resistor, else behind it
 };
 

@@ -12,7 +12,8 @@ namespace dropfront::report {
 struct SlotPart {
   std::string_view slot;  ///< as in problem and design files
   const parts::PartInfo* info = nullptr;
-  int in_series = 1;  ///< elements the design file counts itself (discharge chain)
+  int counted = 1;    ///< equal parts the design file counts itself: in series (discharge chain, series
+                      ///< resistor) or in parallel (dropper)
   int placed = 1;     ///< pieces on the board
   std::string value;  ///< for people: "680 nF 275 V", "2 x 470 kohm"
   Columns electrical;

@@ -18,6 +18,8 @@ std::string rounded(const std::optional<double>& value, int decimals);
 std::optional<double> thousandfold(const std::optional<double>& value);
 
 /// A headroom or share as whole percent ("12 %"), one decimal below 10; "-" when absent.
+/// "2 x " before a value for two equal parts, nothing for one.
+std::string times(int count);
 std::string percent(const std::optional<double>& share);
 
 /// 1234567 as "1,234,567"; from 1e15 on "1.2e15".

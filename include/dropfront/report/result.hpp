@@ -19,6 +19,9 @@ struct Entry {
   scoring::Objectives objectives;
   std::string tightest_check;
   std::optional<double> tightest_headroom;
+  std::string tightest_supply;  ///< where that check was worst; empty with one unnamed supply
+  std::string standby_supply;   ///< with the greatest standby loss
+  std::string margin_supply;    ///< with the least margin
   bool on_front = true;
   std::optional<scoring::Score> evidence;  ///< ranked designs only
   struct Alternative {

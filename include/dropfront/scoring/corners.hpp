@@ -20,7 +20,9 @@ struct Recipe {
   End reservoir = End::nominal;  ///< capacitance
   End esr = End::nominal;
   Drops drops = Drops::nominal;
-  bool aged = false;         ///< end-of-life loss of dropper and reservoir, end-of-life ESR
+  /// Age in lives: 0 new, 1 end of life. Loss of dropper and reservoir and the rise of the ESR are straight
+  /// in time, beyond the life too.
+  double aged = 0;
   bool temperature = false;  ///< the temperature laws apply; else every part is at its reference
 };
 
@@ -36,10 +38,17 @@ circuit::ElementValues corner_values(const Design& design, const Recipe& recipe,
 
 /// resistance·(1 ± tolerance).
 double resistor_ohm(const parts::Resistor& part, End end);
+/// The whole series resistor: its parts in series.
+double series_resistor_ohm(const Design& design, End end);
+/// Greatest share of the series resistor's voltage, or of a pulse's energy, that one of its parts takes.
+double series_resistor_share(const Design& design);
+/// All droppers in parallel, as dropper_F.
+double all_droppers_F(const Design& design, End end, double aged, double local_degC);
 /// The whole chain; infinite when there is none.
 double discharge_ohm(const Design& design, End end);
-/// Film capacitor: tolerance end, end-of-life loss (low end only), temperature law about 20 degC.
-double dropper_F(const parts::Dropper& part, End end, bool aged, double local_degC);
+/// One film capacitor: tolerance end, loss with age (low end only), temperature law about 20 degC. `aged` is
+/// the age in lives, as in Recipe.
+double dropper_F(const parts::Dropper& part, End end, double aged, double local_degC);
 /// Equivalent series resistance tan(delta)/(omega·C).
 double dropper_esr_ohm(const parts::Dropper& part, double capacitance_F, double frequency_Hz);
 /// Threshold spans -0.3 V (least: no current, hot) to +2 mV/K below 25 degC (greatest).

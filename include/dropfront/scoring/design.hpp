@@ -9,7 +9,9 @@ namespace dropfront::scoring {
 struct Design {
   const circuit::Arrangement* arrangement = nullptr;
   const parts::Dropper* dropper = nullptr;
+  int dropper_count = 1;  ///< equal parts in parallel, >= 1
   const parts::Resistor* series_resistor = nullptr;
+  int series_resistor_count = 1;  ///< equal parts in series, >= 1
   const parts::Clamp* clamp = nullptr;
   const parts::Reservoir* reservoir = nullptr;
   const parts::Rectifier* rectifier = nullptr;

@@ -43,8 +43,10 @@ class Evidence {
   /// Rail current taken beside the output load: Iq (greatest; in dropout: the greater of the two), leakage,
   /// rail loads with the mean of their bursts.
   double overhead_A(bool in_dropout) const;
-  /// The margin with new parts (no ageing), else as lean().margin_A. Absent: no answer.
-  std::optional<double> margin_new_A();
+  /// The margin with parts of an age in lives (0 new, 1 end of life), else as lean().margin_A. Absent: no
+  /// answer. Solved anew at each call but for the ages 0 and 1.
+  std::optional<double> margin_at_A(double age);
+  std::optional<double> margin_new_A();  ///< at age 0
 
   /// A margin no lean search can exceed, by charge balance alone (theorem): nothing is solved. Infinite where
   /// the rail the stage needs is not known.

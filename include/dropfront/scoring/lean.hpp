@@ -1,6 +1,8 @@
 #pragma once
 #include <string>
 
+#include "dropfront/circuit/element_values.hpp"
+
 namespace dropfront::scoring {
 
 /// The lean corner's answer: the least over both ambients and both ends of series resistor, ESR and discharge
@@ -9,9 +11,12 @@ struct LeanAnswer {
   bool usable = false;
   std::string reason;
   bool hot_decides = false;
-  double ambient_degC = 0;  ///< that decides
-  std::string ends;         ///< that decide
-  double available_A = 0;   ///< largest constant rail load with rail minimum >= V_required, Iq included
+  double ambient_degC = 0;        ///< that decides
+  std::string ends;               ///< that decide
+  circuit::ElementValues values;  ///< there, at the load of the greatest output
+  double local_degC = 25;
+  double clamp_junction_degC = 25;
+  double available_A = 0;  ///< largest constant rail load with rail minimum >= V_required, Iq included
   /// Greatest sustained output current. Step-down: by the power law; else available less Iq, leakage, rail
   /// loads.
   double capability_A = 0;

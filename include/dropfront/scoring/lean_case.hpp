@@ -39,8 +39,9 @@ struct LeanSolution {
 /// Solves single cases of the lean corner: low flat-topped mains, C min, low clamp curve, greatest drops.
 class LeanCaseSolver {
  public:
-  /// `overhead_A`: Iq, leakage and rail loads beside the output. `aged`: end-of-life values.
-  LeanCaseSolver(PointSolver& points, const circuit::Waveform& lean_mains, double overhead_A, bool aged);
+  /// `overhead_A`: Iq, leakage and rail loads beside the output. `aged`: age in lives, 1 for end-of-life
+  /// values.
+  LeanCaseSolver(PointSolver& points, const circuit::Waveform& lean_mains, double overhead_A, double aged);
 
   Recipe recipe(const LeanEnds& ends) const;
   /// Largest load, or for a step-down stage the load of greatest power. The junction's rise settles to 0.1 K.
@@ -63,7 +64,7 @@ class LeanCaseSolver {
   PointSolver* points_;
   const circuit::Waveform* mains_;
   double overhead_A_;
-  bool aged_;
+  double aged_;
 };
 
 }  // namespace dropfront::scoring

@@ -13,7 +13,7 @@ namespace dropfront::scoring {
 /// lower it are taken together and the search is done there; so on until none falls short.
 class LeanSearch {
  public:
-  LeanSearch(PointSolver& points, const circuit::Waveform& lean_mains, double overhead_A, bool aged);
+  LeanSearch(PointSolver& points, const circuit::Waveform& lean_mains, double overhead_A, double aged);
 
   /// Least over both ambients; solved at the first call.
   const LeanSolution& least();

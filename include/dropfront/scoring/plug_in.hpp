@@ -14,6 +14,9 @@ struct PlugIn {
   circuit::Transient run;
   double ambient_degC = 25;
   std::string ends;  ///< of the series resistor
+  circuit::ElementValues values;
+  double local_degC = 25;
+  double clamp_junction_degC = 25;  ///< before the pulse
 };
 
 /// Plug-in figures, each the worst of both ambients and both ends of the series resistor. C max, Rb min,

@@ -38,6 +38,9 @@ struct OutputNeed {
   double start_load_A = 0;          ///< at the output
 };
 
+/// Ripple term of an electrolytic's life; see ripple_life.hpp for the laws and their names.
+enum class RippleLife { halves_each_5_K, excess_over_5_K, excess_over_10_K, two_or_four, none };
+
 struct Surroundings {
   values::Spread ambient_degC{0, 25, 50};
   double mean_over_life_degC = 37.5;
@@ -46,6 +49,7 @@ struct Surroundings {
   int pollution_degree = 2;
   std::string material_group = "IIIa";  ///< I, II, IIIa, IIIb
   std::optional<double> max_height_mm;
+  RippleLife ripple_life = RippleLife::halves_each_5_K;
 };
 
 enum class ConnectionKind { plug, switched, fixed };
@@ -55,16 +59,16 @@ struct Connection {
   int plug_ins = 1000;
 };
 
-/// What may be left on the dropper after unplugging. `allowed_voltage_V` (discharge_rules.hpp) gives the limit
-/// for one dropper on one line.
+/// What may be left on the dropper after unplugging. `allowed_voltage_V` (discharge_rules.hpp) gives the
+/// limit for one dropper on one line.
 struct DischargeRule {
   double voltage_V = 34;
   double after_s = 1;
-  double not_below_F = 0.1e-6;  ///< no rule when the greatest dropper capacitance is <= this
-  std::string basis;            ///< named source, and how it is known
-  std::string name;             ///< of the named rule; empty for one in figures
-  std::optional<double> share_of_start;  ///< set: the limit is this share of the crest, not voltage_V
-  bool more_when_small = false;          ///< small capacitors may hold more than voltage_V, by a table
+  double not_below_F = 0.1e-6;                ///< no rule when the greatest dropper capacitance is <= this
+  std::string basis;                          ///< named source, and how it is known
+  std::string name = {};                      ///< of the named rule; empty for one in figures
+  std::optional<double> share_of_start = {};  ///< set: the limit is this share of the crest, not voltage_V
+  bool more_when_small = false;               ///< small capacitors may hold more than voltage_V, by a table
 };
 
 struct Surge {

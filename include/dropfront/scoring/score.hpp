@@ -53,9 +53,15 @@ struct Score {
   Verdict verdict = Verdict::undefined;
   bool complete = false;  ///< every check and objective was worked out (never at depth cheap and screen)
   Objectives objectives;
+  std::string standby_supply;  ///< name of the supply with the greatest standby loss
+  std::string margin_supply;   ///< and of the one with the least margin; the first where alike
   std::optional<double> current_margin_new_A;  ///< the margin with new parts
-  std::vector<Check> checks;                   ///< in the fixed order of the check table
-  std::vector<SupplyOperations> operations;    ///< Depth::full only
+  /// Year at which the margin reaches zero, the least over supplies; Depth::full only. Absent with a horizon
+  /// set: not before the horizon. Absent without one: no answer.
+  std::optional<double> current_margin_zero_year;
+  std::optional<double> current_margin_horizon_years;
+  std::vector<Check> checks;                 ///< in the fixed order of the check table
+  std::vector<SupplyOperations> operations;  ///< Depth::full only
   std::vector<std::string> cautions;
   /// Graded, finite measure of broken limits: sum over failed checks of the relative shortfall, at least 1
   /// per undefined check. 0 when compliant. For the relaxation only.

@@ -28,8 +28,10 @@ std::optional<Check> board_height(Evidence& evidence) {
   }
   std::vector<std::optional<double>> limits{*allowed};
   if (!missing.empty()) limits.push_back(std::nullopt);
-  return at_most_each("board.height", tallest_mm, limits, "mm", at_corner(""),
-                      missing.empty() ? "tallest part: " + tallest : "height_mm is not given: " + missing);
+  return with(
+      at_most_each("board.height", tallest_mm, limits, "mm", at_corner(""),
+                   missing.empty() ? "tallest part: " + tallest : "height_mm is not given: " + missing),
+      {{"max_height_mm", *allowed}});
 }
 
 }  // namespace dropfront::scoring

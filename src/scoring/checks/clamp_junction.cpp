@@ -17,8 +17,12 @@ std::optional<Check> clamp_junction(Evidence& evidence) {
   const double limit = clamp.max_junction_degC - evidence.requirement().derating.junction_K;
   const auto judge = [&](const OperatingPoint& point) {
     const double power = clamp_power_W(*design.arrangement, point.values, point.state);
-    return at_most("clamp.junction", circuit::temperature_degC(point.local_degC, resistance, power), limit,
-                   "degC", at_point(point), "local ambient + Rth·P; maximum less the derating");
+    return with(at_most("clamp.junction", circuit::temperature_degC(point.local_degC, resistance, power),
+                        limit, "degC", at_point(point), "local ambient + Rth·P; maximum less the derating"),
+                {{"power_W", power},
+                 {"thermal_resistance_K_per_W", resistance},
+                 {"max_junction_degC", clamp.max_junction_degC},
+                 {"derating_K", evidence.requirement().derating.junction_K}});
   };
   return worst_over(hot_points(evidence), judge);
 }

@@ -12,8 +12,13 @@ std::optional<Check> clamp_power(Evidence& evidence) {
   if (design.clamp->rated_power_W)
     limit = *design.clamp->rated_power_W * evidence.requirement().derating.clamp_power;
   const auto judge = [&](const OperatingPoint& point) {
-    return at_most("clamp.power", clamp_power_W(*design.arrangement, point.values, point.state), limit, "W",
-                   at_point(point), "mean power in one clamp, both directions; rating x derating");
+    Check check =
+        at_most("clamp.power", clamp_power_W(*design.arrangement, point.values, point.state), limit, "W",
+                at_point(point), "mean power in one clamp, both directions; rating x derating");
+    check.figures = {{"clamp_parts", static_cast<double>(design.arrangement->clamp_count)},
+                     {"derating", evidence.requirement().derating.clamp_power}};
+    add_figure(check, "rated_power_W", design.clamp->rated_power_W);
+    return check;
   };
   return worst_over(hot_points(evidence), judge);
 }

@@ -20,9 +20,14 @@ std::optional<Check> clamp_pulse(Evidence& evidence) {
   const PlugInAnswer& plug_in = evidence.plug_in();
   const circuit::PulseRating rating{*clamp.pulse_power_W, *clamp.pulse_time_s, clamp.max_junction_degC};
   const double stress = circuit::pulse_stress_W_sqrt_s(plug_in.clamp_trace, kShortestPulse_s);
-  const Check check = at_most("clamp.pulse", circuit::pulse_use(stress, rating, plug_in.clamp_junction_degC),
-                              1.0, "", at_plug_in(plug_in.clamp),
-                              "share of the single-pulse rating by heat diffusion, from the warm junction");
+  Check check = at_most("clamp.pulse", circuit::pulse_use(stress, rating, plug_in.clamp_junction_degC), 1.0,
+                        "", at_plug_in(plug_in.clamp),
+                        "share of the single-pulse rating by heat diffusion, from the warm junction");
+  check.figures = {{"stress_W_sqrt_s", stress},
+                   {"rated_pulse_power_W", rating.power_W},
+                   {"rated_pulse_s", rating.time_s},
+                   {"max_junction_degC", rating.max_junction_degC},
+                   {"shortest_pulse_s", kShortestPulse_s}};
   return plug_in.usable ? check : unsolved(check, plug_in.reason);
 }
 

@@ -17,8 +17,16 @@ std::optional<Check> discharge_power(Evidence& evidence) {
     std::optional<double> limit;
     if (part.rated_power_W)
       limit = *part.rated_power_W * circuit::resistor_power_share(point.local_degC) * share;
-    return at_most("discharge.power", power, limit, "W", at_point(point),
-                   "worst element of the chain; rating x ambient line x derating");
+    Check check = at_most("discharge.power", power, limit, "W", at_point(point),
+                          "worst element of the chain; rating x ambient line x derating");
+    check.figures = {{"chain_Vrms", discharge_chain_Vrms(point)},
+                     {"elements", static_cast<double>(design.discharge_count)},
+                     {"element_ohm", part.resistance_ohm},
+                     {"tolerance", part.tolerance},
+                     {"ambient_line", circuit::resistor_power_share(point.local_degC)},
+                     {"derating", share}};
+    add_figure(check, "rated_power_W", part.rated_power_W);
+    return check;
   };
   return worst_over(hot_points(evidence), judge);
 }

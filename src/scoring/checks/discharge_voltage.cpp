@@ -12,16 +12,21 @@ std::optional<Check> discharge_voltage(Evidence& evidence) {
   const auto& rule = evidence.requirement().limits.discharge;
   const Design& design = evidence.design();
   if (!rule) return std::nullopt;
-  const double greatest_F = design.dropper->capacitance_F * (1 + design.dropper->tolerance);
+  const double greatest_F =
+      design.dropper_count * design.dropper->capacitance_F * (1 + design.dropper->tolerance);
   if (greatest_F <= rule->not_below_F) return std::nullopt;
   const double cold_degC = evidence.requirement().surroundings.ambient_degC.low;
   const double crest_V = evidence.shapes().rich.crest_V();
-  const double cold_F = dropper_F(*design.dropper, End::high, false, cold_degC);
-  const double left_V =
-      circuit::discharged_voltage_V(crest_V, discharge_ohm(design, End::high), cold_F, rule->after_s);
-  return at_most("discharge.voltage", left_V, allowed_voltage_V(*rule, cold_F, crest_V), "V",
-                 at_corner("unplug", cold_degC, "dropper high, discharge high"),
-                 "Vcrest·exp(-t/(Rb·C)) at the asked time; " + rule->basis);
+  const double cold_F = all_droppers_F(design, End::high, 0, cold_degC);
+  const double chain_ohm = discharge_ohm(design, End::high);
+  const double left_V = circuit::discharged_voltage_V(crest_V, chain_ohm, cold_F, rule->after_s);
+  return with(at_most("discharge.voltage", left_V, allowed_voltage_V(*rule, cold_F, crest_V), "V",
+                      at_corner("unplug", cold_degC, "dropper high, discharge high"),
+                      "Vcrest·exp(-t/(Rb·C)) at the asked time; " + rule->basis),
+              {{"line_crest_V", crest_V},
+               {"discharge_chain_ohm", chain_ohm},
+               {"dropper_F", cold_F},
+               {"after_s", rule->after_s}});
 }
 
 }  // namespace dropfront::scoring

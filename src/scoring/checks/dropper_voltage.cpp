@@ -8,9 +8,11 @@ namespace dropfront::scoring {
 /// the crest: the whole line r.m.s. is the safe side, and needs no solution.
 std::optional<Check> dropper_voltage(Evidence& evidence) {
   const parts::Dropper& dropper = *evidence.design().dropper;
-  return at_most("dropper.voltage", evidence.shapes().rich.voltage_Vrms(),
-                 dropper.rated_voltage_Vrms * evidence.requirement().derating.dropper_voltage, "V",
-                 at_corner("rich_empty"), "whole line r.m.s. at the high end, harmonics included");
+  const double share = evidence.requirement().derating.dropper_voltage;
+  return with(
+      at_most("dropper.voltage", evidence.shapes().rich.voltage_Vrms(), dropper.rated_voltage_Vrms * share,
+              "V", at_corner("rich_empty"), "whole line r.m.s. at the high end, harmonics included"),
+      {{"rated_voltage_Vrms", dropper.rated_voltage_Vrms}, {"derating", share}});
 }
 
 }  // namespace dropfront::scoring

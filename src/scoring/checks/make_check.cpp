@@ -4,6 +4,8 @@
 #include <cmath>
 #include <utility>
 
+#include "dropfront/scoring/corner_figures.hpp"
+
 namespace dropfront::scoring {
 namespace {
 
@@ -52,6 +54,15 @@ Check must_be(std::string_view id, std::optional<bool> yes, At at, std::string b
   return at_least(id, *yes ? 1.0 : 0.0, 1.0, "", std::move(at), std::move(basis));
 }
 
+Check with(Check check, std::vector<Figure> figures) {
+  check.figures.insert(check.figures.end(), figures.begin(), figures.end());
+  return check;
+}
+
+void add_figure(Check& check, std::string_view name, const std::optional<double>& value) {
+  if (value) check.figures.push_back({name, *value});
+}
+
 Check unsolved(Check check, const std::string& reason) {
   check.value.reset();
   check.limit.reset();
@@ -80,12 +91,15 @@ At at_point(const OperatingPoint& point) {
   at.ambient_degC = point.ambient_degC;
   at.load = point.load;
   at.ends = point.ends;
+  at.values = corner_figures(point.values, point.local_degC, point.clamp_junction_degC);
+  at.values.push_back({"load_current_A", point.load_current_A});
   return at;
 }
 
 At at_lean(const LeanAnswer& lean, const std::string& load) {
   At at = at_corner(lean.hot_decides ? "lean_hot" : "lean_cold", lean.ambient_degC, lean.ends);
   at.load = load;
+  if (lean.usable) at.values = corner_figures(lean.values, lean.local_degC, lean.clamp_junction_degC);
   return at;
 }
 
@@ -93,6 +107,7 @@ At at_plug_in(const PlugIn& run) {
   At at = at_corner("plug_in", run.ambient_degC, run.ends);
   at.load = "none";
   at.phase_deg = 90;
+  at.values = corner_figures(run.values, run.local_degC, run.clamp_junction_degC);
   return at;
 }
 

@@ -25,16 +25,23 @@ std::optional<Check> output_band(Evidence& evidence) {
   if (stage.kind != parts::StageKind::direct) {
     const double distance = distance_V(need, stage.output_voltage_V * (1 - stage.tolerance),
                                        stage.output_voltage_V * (1 + stage.tolerance));
-    return at_most("output.band", distance, allowed, "V", at_corner(""),
-                   "the stage's own tolerance against the asked band, in regulation");
+    return with(at_most("output.band", distance, allowed, "V", at_corner(""),
+                        "the stage's own tolerance against the asked band, in regulation"),
+                {{"asked_voltage_V", need.voltage_V},
+                 {"asked_tolerance", need.tolerance},
+                 {"stage_voltage_V", stage.output_voltage_V},
+                 {"stage_tolerance", stage.tolerance}});
   }
   // The rail is the output: least at the heaviest load in the lean corner, greatest unloaded.
   const auto judge = [&](const OperatingPoint& point) {
     const bool rich = &point == &evidence.rich_empty();
     const double low = rich ? need.voltage_V : point.state.rail_min_V;
     const double high = rich ? point.rail_greatest_V : need.voltage_V;
-    return at_most("output.band", distance_V(need, low, high), allowed, "V", at_point(point),
-                   "the rail is the output: its farther end from the asked voltage");
+    return with(at_most("output.band", distance_V(need, low, high), allowed, "V", at_point(point),
+                        "the rail is the output: its farther end from the asked voltage"),
+                {{"asked_voltage_V", need.voltage_V},
+                 {"asked_tolerance", need.tolerance},
+                 {"rail_V", rich ? high : low}});
   };
   return worst_over({&evidence.lean_cold(), &evidence.lean_hot(), &evidence.rich_empty()}, judge);
 }

@@ -15,9 +15,14 @@ std::optional<Check> output_stage_junction(Evidence& evidence) {
   const double limit = *stage.max_junction_degC - evidence.requirement().derating.junction_K;
   const auto judge = [&](const OperatingPoint& point) {
     const double power = stage_loss_W(stage, point.state.rail_mean_V, point.load_current_A);
-    return at_most("output_stage.junction",
-                   circuit::temperature_degC(point.local_degC, *stage.thermal_resistance_K_per_W, power),
-                   limit, "degC", at_point(point), "local ambient + Rth·P; maximum less the derating");
+    return with(at_most("output_stage.junction",
+                        circuit::temperature_degC(point.local_degC, *stage.thermal_resistance_K_per_W, power),
+                        limit, "degC", at_point(point), "local ambient + Rth·P; maximum less the derating"),
+                {{"power_W", power},
+                 {"rail_mean_V", point.state.rail_mean_V},
+                 {"thermal_resistance_K_per_W", *stage.thermal_resistance_K_per_W},
+                 {"max_junction_degC", *stage.max_junction_degC},
+                 {"derating_K", evidence.requirement().derating.junction_K}});
   };
   return worst_over(loaded_points(evidence), judge);
 }

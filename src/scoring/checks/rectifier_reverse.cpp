@@ -9,8 +9,9 @@ std::optional<Check> rectifier_reverse(Evidence& evidence) {
   const Design& design = evidence.design();
   const double crest = evidence.shapes().rich.crest_V();
   const bool bridge = design.arrangement->full_wave;
-  return at_most("rectifier.reverse", bridge ? crest : 2 * crest, design.rectifier->reverse_voltage_V, "V",
-                 at_corner("fault"), bridge ? "clamp open: Vcrest" : "clamp open: 2·Vcrest");
+  return with(at_most("rectifier.reverse", bridge ? crest : 2 * crest, design.rectifier->reverse_voltage_V,
+                      "V", at_corner("fault"), bridge ? "clamp open: Vcrest" : "clamp open: 2·Vcrest"),
+              {{"line_crest_V", crest}});
 }
 
 }  // namespace dropfront::scoring

@@ -15,8 +15,9 @@ std::optional<Check> reservoir_leakage(Evidence& evidence) {
     spare *= stage.output_voltage_V / (stage.efficiency.value_or(1) * design.clamp->voltage_max_V);
   const At at = at_lean(lean, evidence.loads().heaviest_name);
   const double leakage = design.reservoir->leakage_A;
-  const Check check = at_most("reservoir.leakage", leakage, leakage + spare, "A", at,
-                              "data leakage against what the lean corner can spare for it");
+  Check check = at_most("reservoir.leakage", leakage, leakage + spare, "A", at,
+                        "data leakage against what the lean corner can spare for it");
+  check.figures = {{"current_margin_A", lean.margin_A}, {"spare_rail_current_A", spare}};
   return lean.usable ? check : unsolved(check, lean.reason);
 }
 

@@ -21,8 +21,15 @@ std::optional<Check> resistor_opens(Evidence& evidence) {
     basis = design.fuse ? "not a fusible part: only the fuse can open when the dropper shorts"
                         : "not a fusible part and no fuse: nothing is known to open when the dropper shorts";
   }
-  return at_least("resistor.opens", line * line / resistor_ohm(part, End::high), limit, "W",
-                  at_corner("shorted", std::nullopt, "series_resistor high"), basis);
+  const double resistance_ohm = series_resistor_ohm(design, End::high);
+  const double count = design.series_resistor_count;
+  Check check = at_least("resistor.opens", line * line / resistance_ohm / count, limit, "W",
+                         at_corner("shorted", std::nullopt, "series_resistor high"), basis);
+  check.figures = {
+      {"line_voltage_Vrms", line}, {"series_resistor_ohm", resistance_ohm}, {"parts_in_series", count}};
+  add_figure(check, "opens_at", part.opens_at);
+  add_figure(check, "rated_power_W", part.rated_power_W);
+  return check;
 }
 
 }  // namespace dropfront::scoring

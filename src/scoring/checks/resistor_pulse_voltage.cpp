@@ -1,12 +1,15 @@
 #include "dropfront/scoring/checks/checks.hpp"
 #include "dropfront/scoring/checks/make_check.hpp"
+#include "dropfront/scoring/corners.hpp"
 
 namespace dropfront::scoring {
 
 std::optional<Check> resistor_pulse_voltage(Evidence& evidence) {
-  return at_most("resistor.pulse_voltage", 2 * evidence.shapes().rich.crest_V(),
-                 evidence.design().series_resistor->overload_voltage_V, "V", at_corner("plug_in"),
-                 "2·Vcrest across it at the first moment, whatever its value; overload voltage");
+  const double crest_V = evidence.shapes().rich.crest_V(), share = series_resistor_share(evidence.design());
+  return with(at_most("resistor.pulse_voltage", 2 * crest_V * share,
+                      evidence.design().series_resistor->overload_voltage_V, "V", at_corner("plug_in"),
+                      "2·Vcrest across it at the first moment, whatever its value; overload voltage"),
+              {{"line_crest_V", crest_V}, {"share_of_one_part", share}});
 }
 
 }  // namespace dropfront::scoring

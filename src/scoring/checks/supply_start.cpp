@@ -21,11 +21,15 @@ std::optional<Check> supply_start(Evidence& evidence) {
   const double taken =
       stage_current_A(stage, evidence.requirement().output.start_load_A, rail_V, Quiescent::least) +
       evidence.overhead_A(true);
-  const Check check = at_least("supply.start", delivered, taken, "A", at,
-                               step_down ? "rail current at the turn-on threshold against P/(efficiency·V) + "
-                                           "Iq, leakage and rail loads"
-                                         : "rail current at V_required against the start load, Iq in "
-                                           "dropout, leakage and rail loads");
+  Check check = at_least("supply.start", delivered, taken, "A", at,
+                         step_down ? "rail current at the turn-on threshold against P/(efficiency·V) + "
+                                     "Iq, leakage and rail loads"
+                                   : "rail current at V_required against the start load, Iq in "
+                                     "dropout, leakage and rail loads");
+  check.figures = {{"starting_rail_V", rail_V},
+                   {"start_load_A", evidence.requirement().output.start_load_A},
+                   {"overhead_current_A", evidence.overhead_A(true)}};
+  if (step_down) add_figure(check, "efficiency", stage.efficiency);
   return delivered ? check : unsolved(check, "available current at the starting rail not found");
 }
 

@@ -26,8 +26,13 @@ double electrolytic_cold_esr(const parts::Reservoir& part, double local_degC) {
   return local_degC < kCold_degC ? factor * std::exp2((kCold_degC - local_degC) / 15) : factor;
 }
 
-double reservoir_least_F(const parts::Reservoir& part, bool aged, double local_degC) {
-  return part.capacitance_F * (1 - part.tolerance) * (aged ? 1 - part.end_of_life_loss : 1) *
+double left_of(double end_of_life_loss, double aged) {
+  constexpr double kLeastLeft = 0.05;
+  return std::max(kLeastLeft, 1 - end_of_life_loss * aged);
+}
+
+double reservoir_least_F(const parts::Reservoir& part, double aged, double local_degC) {
+  return part.capacitance_F * (1 - part.tolerance) * left_of(part.end_of_life_loss, aged) *
          electrolytic_cold_capacitance(local_degC);
 }
 
@@ -39,8 +44,8 @@ double reservoir_least_esr_ohm(const parts::Reservoir& part, double local_degC) 
   return part.esr_ohm * kLeastEsrShare * electrolytic_cold_esr(part, local_degC);
 }
 
-double reservoir_greatest_esr_ohm(const parts::Reservoir& part, bool aged, double local_degC) {
-  return part.esr_ohm * (aged ? part.end_of_life_esr : 1) * electrolytic_cold_esr(part, local_degC);
+double reservoir_greatest_esr_ohm(const parts::Reservoir& part, double aged, double local_degC) {
+  return part.esr_ohm * (1 + (part.end_of_life_esr - 1) * aged) * electrolytic_cold_esr(part, local_degC);
 }
 
 }  // namespace dropfront::scoring

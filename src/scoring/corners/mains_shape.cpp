@@ -1,5 +1,6 @@
 #include "dropfront/scoring/corners/mains_shape.hpp"
 
+#include <cmath>
 #include <numbers>
 #include <utility>
 #include <vector>
@@ -43,6 +44,15 @@ Harmonics extreme_crest(double voltage_Vrms, double frequency_Hz, const Harmonic
 }
 
 }  // namespace
+
+double current_factor(const std::vector<circuit::Harmonic>& harmonics) {
+  double current = 1, voltage = 1;
+  for (const auto& harmonic : harmonics) {
+    voltage += harmonic.share * harmonic.share;
+    current += harmonic.order * harmonic.share * harmonic.order * harmonic.share;
+  }
+  return std::sqrt(current / voltage);
+}
 
 MainsShapes mains_shapes(const Supply& supply) {
   const auto& V = supply.voltage_Vrms;

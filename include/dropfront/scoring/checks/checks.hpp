@@ -25,6 +25,7 @@ CheckFunction resistor_voltage;
 CheckFunction resistor_pulse;
 CheckFunction resistor_pulse_voltage;
 CheckFunction resistor_opens;
+CheckFunction resistor_body;
 CheckFunction clamp_power;
 CheckFunction clamp_junction;
 CheckFunction clamp_pulse;

@@ -23,6 +23,10 @@ Check at_least(std::string_view id, std::optional<double> value, std::optional<d
 /// 1 for yes, 0 for no, against 1. Absent: not given.
 Check must_be(std::string_view id, std::optional<bool> yes, At at, std::string basis);
 
+/// The check with what its formula took; ratings that are not given are left out.
+Check with(Check check, std::vector<Figure> figures);
+void add_figure(Check& check, std::string_view name, const std::optional<double>& value);
+
 /// The corner this check needs has no answer: no value, no verdict, the reason in the basis.
 Check unsolved(Check check, const std::string& reason);
 

@@ -11,10 +11,16 @@ double electrolytic_cold_capacitance(double local_degC);
 /// 105 degC series: 3 to 6, 2 to 4). 1 above 20 degC.
 double electrolytic_cold_esr(const parts::Reservoir& part, double local_degC);
 
-/// Least, nominal and greatest capacitance and ESR. Data ESR is a maximum: its least end is a tenth of it.
-double reservoir_least_F(const parts::Reservoir& part, bool aged, double local_degC);
+/// Share of a capacitance left at an age in lives (0 new, 1 end of life, >= 0) when `end_of_life_loss` is
+/// lost over one: 1 - loss·age. The loss goes straight with time; what is left is never taken below a
+/// twentieth.
+double left_of(double end_of_life_loss, double aged);
+
+/// Least, nominal and greatest capacitance and ESR; `aged` in lives, the ESR rising straight with time too.
+/// Data ESR is a maximum: its least end is a tenth of it.
+double reservoir_least_F(const parts::Reservoir& part, double aged, double local_degC);
 double reservoir_greatest_F(const parts::Reservoir& part);
 double reservoir_least_esr_ohm(const parts::Reservoir& part, double local_degC);
-double reservoir_greatest_esr_ohm(const parts::Reservoir& part, bool aged, double local_degC);
+double reservoir_greatest_esr_ohm(const parts::Reservoir& part, double aged, double local_degC);
 
 }  // namespace dropfront::scoring

@@ -1,0 +1,88 @@
+#include "dropfront/scoring/check_formulas.hpp"
+
+#include <array>
+#include <utility>
+
+namespace dropfront::scoring {
+
+std::string_view check_formula(std::string_view id) {
+  using Line = std::pair<std::string_view, std::string_view>;
+  static constexpr auto kFormulas = std::to_array<Line>({
+      {"supply.margin",
+       "capability_A - heaviest_load_A >= wanted_share x heaviest_load_A; capability_A = "
+       "available_rail_current_A - overhead_current_A (step-down: greatest of efficiency x (I - "
+       "overhead_current_A) x rail minimum / output voltage over rail currents I), available_rail_current_A "
+       "the largest steady rail current whose rail minimum reaches required_rail_V"},
+      {"supply.start",
+       "largest steady rail current whose rail minimum reaches starting_rail_V >= start_load_A (step-down: "
+       "output voltage x start_load_A / (efficiency x starting_rail_V)) + overhead_current_A"},
+      {"rail.max",
+       "greatest steady rail without series diode drop <= least of reservoir_rated_voltage_V x derating and "
+       "input_max_V"},
+      {"rail.transient",
+       "greatest rail after closing_voltage_V is put on series_resistor_ohm and dropper_F, reservoir_esr_ohm "
+       "included <= least of surge_voltage_V and input_max_V"},
+      {"output.band",
+       "greatest distance of the output from asked_voltage_V <= asked_voltage_V x asked_tolerance; output = "
+       "stage_voltage_V x (1 +/- stage_tolerance), or the rail where there is no stage"},
+      {"standby.power", "mean of line voltage x line current over a period <= limit"},
+      {"dropper.voltage", "line r.m.s. at its high end <= rated_voltage_Vrms x derating"},
+      {"dropper.class", "1 where the class is X1 or X2"},
+      {"dropper.series_rated", "1 where the maker states use in series with the mains"},
+      {"dropper.slew", "2 x line_crest_V / (series_resistor_ohm x dropper_F) <= slew rating"},
+      {"resistor.power",
+       "loss_W / parts_in_series x harmonics_heating <= rated_power_W x ambient_line x derating; "
+       "ambient_line 1 up to 70 degC, straight to 0 at 155 degC"},
+      {"resistor.voltage",
+       "sqrt(loss_W x series_resistor_ohm) / parts_in_series <= rated voltage of one part"},
+      {"resistor.pulse",
+       "energy_J x share_of_one_part <= rated_energy_J (wirewound), or rated_energy_J x sqrt(pulse_s / 1 ms) "
+       "(film); pulse_s = R x C / 2"},
+      {"resistor.pulse_voltage", "2 x line_crest_V x share_of_one_part <= overload voltage"},
+      {"resistor.opens",
+       "line_voltage_Vrms^2 / series_resistor_ohm / parts_in_series >= opens_at x rated_power_W"},
+      {"resistor.body",
+       "local_degC + thermal_resistance_K_per_W x loss_W / parts_in_series x harmonics_heating <= 155 degC"},
+      {"clamp.power",
+       "mean of voltage x current of one of clamp_parts over a period <= rated_power_W x derating"},
+      {"clamp.junction",
+       "local_degC + thermal_resistance_K_per_W x power_W <= max_junction_degC - derating_K"},
+      {"clamp.pulse",
+       "stress_W_sqrt_s / (rated_pulse_power_W x sqrt(rated_pulse_s)) x (max_junction_degC - 25) / "
+       "(max_junction_degC - clamp_junction_degC) <= 1; stress_W_sqrt_s the greatest over t of half the "
+       "integral of P(u) / sqrt(t - u), at least peak power x sqrt(shortest_pulse_s)"},
+      {"rectifier.reverse", "2 x line_crest_V (half-wave) or line_crest_V (bridge) <= reverse voltage"},
+      {"rectifier.surge",
+       "greatest rectifier current after closing on the crest, the dropper at the opposite one <= surge "
+       "current"},
+      {"reservoir.voltage", "greatest rail <= rated_voltage_V x derating"},
+      {"reservoir.ripple",
+       "r.m.s. current of the reservoir <= rated_ripple_Arms x m(running) / m(rated_frequency_Hz), m = 0.8 "
+       "up "
+       "to 60 Hz, 1 at 120 Hz, 1.6 from 100 kHz, straight in log f; running: the line's frequency, twice it "
+       "for a bridge"},
+      {"reservoir.life",
+       "rated_life_h x 2^((rated_life_degC - can_degC) / 10) x ripple_factor >= life; can_degC not below 35"},
+      {"reservoir.leakage", "data leakage <= data leakage + spare_rail_current_A"},
+      {"discharge.voltage", "line_crest_V x exp(-after_s / (discharge_chain_ohm x dropper_F)) <= the rule's"},
+      {"discharge.power",
+       "chain_Vrms^2 x R / (sum of R)^2, each R element_ohm x (1 +/- tolerance) at its worst <= "
+       "rated_power_W x ambient_line x derating"},
+      {"discharge.working_voltage",
+       "chain_Vrms x greatest_share <= rated voltage of one element; greatest_share = R_max / (R_max + sum "
+       "of "
+       "the others' R_min)"},
+      {"output_stage.junction",
+       "local_degC + thermal_resistance_K_per_W x power_W <= max_junction_degC - derating_K; power_W = "
+       "(rail_mean_V - least output) x load + rail_mean_V x Iq (linear), output power x (1/efficiency - 1) + "
+       "rail_mean_V x Iq (step-down)"},
+      {"output_stage.input", "greatest rail under load <= input_max_V"},
+      {"board.height", "greatest height of a placed part <= max_height_mm"},
+  });
+  for (const auto& [known, formula] : kFormulas) {
+    if (known == id) return formula;
+  }
+  return {};
+}
+
+}  // namespace dropfront::scoring
