@@ -43,7 +43,7 @@ const std::vector<Broken> kProblemRules{
     {"waveform", "\"50 Hz\"",
      "\"50 Hz\", \"harmonics\": [{\"order\": 3, \"percent\": 33.3}, {\"order\": 5, \"percent\": 20}, "
      "{\"order\": 7, \"percent\": 14.3}]",
-     "a square or stepped wave"},
+     "square or stepped wave"},
     {"load names", "\"awake\"", "\"asleep\"", "two loads named \"asleep\""},
     {"load above zero",
      "{\"name\": \"asleep\", \"current\": \"0.2 mA\"}, {\"name\": \"awake\", \"current\": \"8 mA\"}",

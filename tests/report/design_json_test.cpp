@@ -49,7 +49,7 @@ TEST_CASE("a design written with its numbers inline reads back the same to the b
     for (std::size_t i = 0; i < before.size(); ++i) {
       INFO(before[i].slot);
       CHECK(before[i].electrical == after[i].electrical);
-      CHECK(before[i].in_series == after[i].in_series);
+      CHECK(before[i].counted == after[i].counted);
       CHECK(common_columns(*before[i].info) == common_columns(*after[i].info));
     }
     CHECK(again.arrangement == s.design.arrangement);

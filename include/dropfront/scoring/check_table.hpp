@@ -12,7 +12,7 @@ namespace dropfront::scoring {
 enum class Tier { list, lean, standby, steady, transient };
 
 /// One check. Adding a check is one small file in scoring/checks/, its line in
-/// scoring/checks/checks.hpp and its line in check_table.cpp.
+/// scoring/checks/checks.hpp, in check_table.cpp and in check_formulas.cpp.
 struct CheckRule {
   std::string_view id;  ///< physics name, e.g. "clamp.power"
   Tier tier = Tier::list;
