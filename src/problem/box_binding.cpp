@@ -41,12 +41,8 @@ class Boxes : public search::Bounder {
                          scoring::load_profile(problem.requirement.output).heaviest_output_A()) {}
 
   search::Bounds bound(const search::Box& box, int depth) const override {
-    const scoring::DesignBox parts = design_box(problem_.offers, slots_.ids, box);
-    scoring::BoxBound found = bounder_.bound(parts, depth);
-    if (depth > 0 && found.broken.empty() && reach_.out_of_reach(parts, wanted_margin_A_)) {
-      found.broken = "supply.margin";
-      found.broken_class = scoring::BoundClass::monotone;
-    }
+    scoring::BoxBound found;  // nothing known
+    if (single_parts()) found = known(box, depth);
     search::Bounds out;
     for (const scoring::Objective objective : problem_.requirement.objectives) add(objective, found, out);
     const auto& names = view_.check_names();
@@ -59,6 +55,7 @@ class Boxes : public search::Bounder {
   }
 
   double reduce(search::Box& box) const override {
+    if (!single_parts()) return 0;
     scoring::DesignBox parts = design_box(problem_.offers, slots_.ids, box);
     const double before = box.members();
     if (!(bounder_.reduce(parts) > 0)) return 0;
@@ -67,6 +64,21 @@ class Boxes : public search::Bounder {
   }
 
  private:
+  scoring::BoxBound known(const search::Box& box, int depth) const {
+    const scoring::DesignBox parts = design_box(problem_.offers, slots_.ids, box);
+    scoring::BoxBound found = bounder_.bound(parts, depth);
+    if (depth > 0 && found.broken.empty() && reach_.out_of_reach(parts, wanted_margin_A_)) {
+      found.broken = "supply.margin";
+      found.broken_class = scoring::BoundClass::monotone;
+    }
+    return found;
+  }
+
+  /// The bounds are derived for one dropper and one series resistor a design.
+  bool single_parts() const {
+    return problem_.offers.dropper_parallel == 1 && problem_.offers.series_resistor_split == 1;
+  }
+
   static void add(scoring::Objective objective, const scoring::BoxBound& found, search::Bounds& out) {
     using search::BoundKind;
     const auto put = [&](bool known, double value, BoundKind kind) {

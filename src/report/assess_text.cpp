@@ -82,7 +82,7 @@ std::string place_text(const scoring::At& at, bool several_supplies) {
 }
 
 /// Names and numbers, in four figures each: the JSON document has them exactly.
-std::string figures_text(const std::vector<scoring::Figure>& figures) {
+std::string figures_text(const std::vector<scoring::Term>& figures) {
   std::string text;
   for (const auto& figure : figures)
     text += fmt::format("{}{} {:.4g}", text.empty() ? "" : ", ", figure.name, figure.value);

@@ -63,7 +63,7 @@ void write_operations(JsonWriter& json, const std::vector<scoring::Operation>& o
   json.end_object();
 }
 
-void write_figures(JsonWriter& json, std::string_view name, const std::vector<scoring::Figure>& figures) {
+void write_figures(JsonWriter& json, std::string_view name, const std::vector<scoring::Term>& figures) {
   if (figures.empty()) return;
   json.key(name);
   json.begin_object(kFlat);

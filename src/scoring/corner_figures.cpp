@@ -4,9 +4,9 @@
 
 namespace dropfront::scoring {
 
-std::vector<Figure> corner_figures(const circuit::ElementValues& values, double local_degC,
-                                   double clamp_junction_degC) {
-  std::vector<Figure> figures;
+std::vector<Term> corner_figures(const circuit::ElementValues& values, double local_degC,
+                                 double clamp_junction_degC) {
+  std::vector<Term> figures;
   figures.reserve(20);
   figures.push_back({"line_voltage_Vrms", values.mains.voltage_Vrms()});
   figures.push_back({"line_frequency_Hz", values.mains.frequency_Hz()});

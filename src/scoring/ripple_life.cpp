@@ -1,5 +1,6 @@
 #include "dropfront/scoring/ripple_life.hpp"
 
+#include <algorithm>
 #include <cmath>
 
 #include "dropfront/circuit/life.hpp"
@@ -18,7 +19,9 @@ const std::vector<RippleLifeLaw>& ripple_life_laws() {
   return laws;
 }
 
-double rated_ripple_rise_K(double life_temperature_degC) { return life_temperature_degC <= 85 ? 10 : 5; }
+double rated_ripple_rise_K(double life_temperature_degC) {
+  return std::clamp(10 - (life_temperature_degC - 85) / 4, 5.0, 10.0);
+}
 
 double ripple_life_factor(RippleLife law, double current_Arms, double rated_Arms,
                           double life_temperature_degC) {

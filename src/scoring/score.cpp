@@ -36,8 +36,8 @@ void keep_finite(std::optional<double>& figure) {
   if (figure && !std::isfinite(*figure)) figure.reset();
 }
 
-void keep_finite(std::vector<Figure>& figures) {
-  const auto odd = [](const Figure& figure) { return !std::isfinite(figure.value); };
+void keep_finite(std::vector<Term>& figures) {
+  const auto odd = [](const Term& figure) { return !std::isfinite(figure.value); };
   figures.erase(std::remove_if(figures.begin(), figures.end(), odd), figures.end());
 }
 

@@ -77,7 +77,7 @@ TEST_CASE("every check says its formula, and every one that is no yes or no the 
       const auto check = rule.evaluate(evidence);
       if (!check || check->yes_or_no()) continue;
       for (const auto* list : {&check->figures, &check->at.values})
-        for (const Figure& figure : *list) {
+        for (const Term& figure : *list) {
           INFO(rule.id << " " << figure.name);
           CHECK_FALSE(figure.name.empty());
         }

@@ -1,5 +1,7 @@
 #include "dropfront/scoring/ripple_life.hpp"
 
+#include <cmath>
+
 #include "scoring/checks/judge.hpp"
 #include "support/catch.hpp"
 
@@ -38,6 +40,19 @@ TEST_CASE("every term falls with the current, and the excess terms are 1 at the 
     const bool excess = law.law != RippleLife::none && law.law != RippleLife::halves_each_5_K;
     if (excess) CHECK_THAT(ripple_life_factor(law.law, 0.2, 0.2, 105), WithinRel(1.0, kRounding));
   }
+}
+
+TEST_CASE("a higher rated temperature never shortens a life, whatever the term") {
+  for (const auto& law : ripple_life_laws())
+    for (const double share : {0.0, 0.7, 1.0, 1.5, 2.5}) {
+      double last = 0;
+      for (double rated_degC = 70; rated_degC <= 125; rated_degC += 0.5) {
+        const double life = std::exp2(rated_degC / 10) * ripple_life_factor(law.law, share, 1, rated_degC);
+        INFO(law.name << " " << share << " " << rated_degC);
+        CHECK(life > last);
+        last = life;
+      }
+    }
 }
 
 TEST_CASE("the terms give their published values at rest, at the rating and at twice the rating") {

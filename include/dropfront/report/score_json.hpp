@@ -4,8 +4,9 @@
 
 namespace dropfront::report {
 
-/// The assess document: design, verdict, objectives, current_margin_new_A, operation, checks, cautions.
-/// `operation` is {corner: {...}} with one supply, {supply: {corner: {...}}} with several.
+/// The assess document: design, verdict, objectives, current_margin_new_A (zero_year and horizon_years beside
+/// it), operation, checks, cautions. `operation` is {corner: {...}} with one supply, {supply: {corner:
+/// {...}}} with several.
 void write_score(JsonWriter& json, const scoring::Design& design, const scoring::Requirement& requirement,
                  const scoring::Score& score);
 

@@ -6,8 +6,8 @@
 
 namespace dropfront::scoring {
 
-/// A number a formula took; the name carries its unit and kind.
-struct Figure {
+/// A number a formula took, by the name it has there; the name carries its unit and kind.
+struct Term {
   std::string_view name;
   double value = 0;
 };
@@ -19,8 +19,8 @@ struct At {
   std::optional<double> ambient_degC;
   std::string load;  ///< name, "none", or a current as text
   std::optional<double> phase_deg;
-  std::string ends;            ///< which ends of the free tolerances, e.g. "series_resistor high"
-  std::vector<Figure> values;  ///< of the elements in that corner; empty where no network is solved
+  std::string ends;          ///< which ends of the free tolerances, e.g. "series_resistor high"
+  std::vector<Term> values;  ///< of the elements in that corner; empty where no network is solved
 };
 
 /// One check's verdict.
@@ -33,8 +33,8 @@ struct Check {
   std::optional<bool> pass;  ///< null: no rating given, or unsolved
   bool unsolved = false;     ///< no steady state or transient to judge by: never accepted as a missing rating
   At at;
-  std::string basis;            ///< what was compared, the rule or source by name
-  std::vector<Figure> figures;  ///< what the formula (check_formula) took beside the corner's values
+  std::string basis;          ///< what was compared, the rule or source by name
+  std::vector<Term> figures;  ///< what the formula (check_formula) took beside the corner's values
 
   /// 1 - value/limit for "<=", value/limit - 1 for ">="; null where the limit is 0 or anything is missing.
   std::optional<double> headroom() const;

@@ -16,7 +16,8 @@ struct RippleLifeLaw {
 /// All of them in the order of RippleLife. The makers' formulas disagree by design, so the one used is named.
 const std::vector<RippleLifeLaw>& ripple_life_laws();
 
-/// Core rise at the rated ripple: 10 K for types rated up to 85 degC, else 5 K. Source: from memory.
+/// Core rise at the rated ripple: 10 K for types rated up to 85 degC, 5 K from 105 degC up (from memory),
+/// straight in between so that a higher rating never shortens a life.
 double rated_ripple_rise_K(double life_temperature_degC);
 
 /// Factor on the life without ripple, with x = I/I_rated at the running frequency, dT0 the rise at the rated

@@ -54,7 +54,7 @@ Check must_be(std::string_view id, std::optional<bool> yes, At at, std::string b
   return at_least(id, *yes ? 1.0 : 0.0, 1.0, "", std::move(at), std::move(basis));
 }
 
-Check with(Check check, std::vector<Figure> figures) {
+Check with(Check check, std::vector<Term> figures) {
   check.figures.insert(check.figures.end(), figures.begin(), figures.end());
   return check;
 }

@@ -24,7 +24,7 @@ Check at_least(std::string_view id, std::optional<double> value, std::optional<d
 Check must_be(std::string_view id, std::optional<bool> yes, At at, std::string basis);
 
 /// The check with what its formula took; ratings that are not given are left out.
-Check with(Check check, std::vector<Figure> figures);
+Check with(Check check, std::vector<Term> figures);
 void add_figure(Check& check, std::string_view name, const std::optional<double>& value);
 
 /// The corner this check needs has no answer: no value, no verdict, the reason in the basis.

@@ -1,11 +1,12 @@
 #include "dropfront/circuit/discharge.hpp"
 #include "dropfront/scoring/bounds/rules.hpp"
 #include "dropfront/scoring/corners.hpp"
+#include "dropfront/scoring/discharge_rules.hpp"
 
 namespace dropfront::scoring::bounds {
 
-/// Vcrest·exp(-t/(Rb·C)) grows with Rb and C: least at the least of both. A dropper at or below the rule's
-/// capacitance shows nothing. Theorem.
+/// Vcrest·exp(-t/(Rb·C)) grows with Rb and C, what the rule allows falls with C: least at the least of both.
+/// A dropper at or below the rule's capacitance shows nothing. Theorem.
 double discharge_voltage(const BoxQuestion& question) {
   const auto& rule = question.context.requirement->limits.discharge;
   if (!rule || !question.ends.known_circuit()) return 0;
@@ -17,7 +18,7 @@ double discharge_voltage(const BoxQuestion& question) {
   if (!(least_F > 0)) return 0;
   const double left_V = circuit::discharged_voltage_V(
       question.supply.rich.crest_V, question.ends.least(Figure::chain_high_ohm), least_F, rule->after_s);
-  return left_V / rule->voltage_V;
+  return left_V / allowed_voltage_V(*rule, least_F, question.supply.rich.crest_V);
 }
 
 }  // namespace dropfront::scoring::bounds
