@@ -51,7 +51,8 @@ std::optional<scoring::DischargeRule> read_discharge(ObjectReader& limits, Probl
     if (auto rule = scoring::discharge_rule(word)) return rule;
     if (word != "none") {
       throw given->error(fmt::format(R"(found {}{}; allowed: {} or an object {{"voltage", "after"}})",
-                                     describe(given->node()), values::did_you_mean(word, words), either(words)));
+                                     describe(given->node()), values::did_you_mean(word, words),
+                                     either(words)));
     }
     problem.cautions.push_back(
         "limits.discharge: \"none\"; the voltage left after unplugging is not checked");

@@ -19,7 +19,8 @@ const std::vector<DischargeRule>& named_rules() {
     made[0].after_s = 1;
     made[0].not_below_F = 0.1e-6;
     made[0].basis =
-        "IEC 60335-1 clause 22.5: plug pins at most 34 V, 1 s after disconnection, not below 0.1 uF" + restated;
+        "IEC 60335-1 clause 22.5: plug pins at most 34 V, 1 s after disconnection, not below 0.1 uF" +
+        restated;
     made[1].name = "62368-1";
     made[1].voltage_V = 60;
     made[1].after_s = 2;
@@ -38,7 +39,8 @@ const std::vector<DischargeRule>& named_rules() {
     made[3].not_below_F = 0.1e-6;
     made[3].share_of_start = 0.37;
     made[3].basis =
-        "IEC 60950-1 (withdrawn) clause 2.1.1.7: 37 % of the start within 1 s, pluggable type A, above 0.1 uF" +
+        "IEC 60950-1 (withdrawn) clause 2.1.1.7: 37 % of the start within 1 s, pluggable type A, above 0.1 "
+        "uF" +
         restated;
     return made;
   }();

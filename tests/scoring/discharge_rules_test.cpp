@@ -43,8 +43,8 @@ TEST_CASE("each named rule is known by its name alone, and says where it is from
 
 TEST_CASE("a chain just inside the largest bleeder of a rule passes, just outside fails") {
   // Largest chains in megohm, worked by hand from t/(C·ln(Vpk/V)): 34 V in 1 s and 60 V in 2 s at 264 V and
-  // 0.47 uF; 60 V in 5 s is 5/2 of the latter; one time constant of 1 s is 1/C, and 37 % lies a little above it:
-  // 1/(C·ln(1/0.37)).
+  // 0.47 uF; 60 V in 5 s is 5/2 of the latter; one time constant of 1 s is 1/C, and 37 % lies a little above
+  // it: 1/(C·ln(1/0.37)).
   struct Row {
     const char* rule;
     double megohm;
@@ -61,8 +61,8 @@ TEST_CASE("a chain just inside the largest bleeder of a rule passes, just outsid
 
 TEST_CASE("the ES1 limit passes through its table, falls with capacitance and ends flat") {
   // IEC 62368-1 table 5, charged capacitor, from memory.
-  const std::vector<std::pair<double, double>> table{{300, 60}, {170, 75},  {91, 100},   {61, 125},
-                                                     {41, 150}, {28, 200},  {18, 250},   {12, 350},
+  const std::vector<std::pair<double, double>> table{{300, 60}, {170, 75}, {91, 100},   {61, 125},
+                                                     {41, 150}, {28, 200}, {18, 250},   {12, 350},
                                                      {8, 500},  {4, 1000}, {1.6, 2000}, {0.8, 5000}};
   // Linear in between, so a point of the table comes back to rounding.
   for (const auto& [nanofarads, volts] : table)

@@ -27,15 +27,16 @@ std::optional<Check> reservoir_life(Evidence& evidence) {
     At at = at_point(point);
     at.ambient_degC = around.mean_over_life_degC;
     const auto& law = ripple_life_laws()[static_cast<std::size_t>(around.ripple_life)];
-    return with(at_least("reservoir.life", still_h * ripple, around.life_years * values::kHoursPerYear, "h", at,
-                         "10 K rule at the mean ambient + local rise; ripple term " + std::string(law.name) +
-                             ": " + std::string(law.basis)),
-                {{"rated_life_h", *part.life_h},
-                 {"rated_life_degC", *part.life_temperature_degC},
-                 {"can_degC", can_degC},
-                 {"ripple_Arms", current_Arms},
-                 {"rated_ripple_Arms", rating_Arms},
-                 {"ripple_factor", ripple}});
+    return with(
+        at_least("reservoir.life", still_h * ripple, around.life_years * values::kHoursPerYear, "h", at,
+                 "10 K rule at the mean ambient + local rise; ripple term " + std::string(law.name) + ": " +
+                     std::string(law.basis)),
+        {{"rated_life_h", *part.life_h},
+         {"rated_life_degC", *part.life_temperature_degC},
+         {"can_degC", can_degC},
+         {"ripple_Arms", current_Arms},
+         {"rated_ripple_Arms", rating_Arms},
+         {"ripple_factor", ripple}});
   };
   return worst_over(loaded_points(evidence), judge);
 }
