@@ -13,6 +13,7 @@ constexpr const char* kSeries = "as before, w·Rs·C < 1 over the box";
 constexpr const char* kStandby =
     "w·Rs·C <= 0.4; behind the dropper at most 0.5 (bridge 0.42 - 0.5·w·Rs·C) of the crest; at most four "
     "reservoirs times rectifiers";
+constexpr const char* kSingle = "series resistor, chain, rectifier and ESR single; no step-down stage";
 
 BoundRule objective(std::string_view id, BoundClass known, int depth, std::string_view range,
                     bounds::ObjectiveBound* rule) {
@@ -56,6 +57,7 @@ const std::vector<BoundRule>& bound_table() {
       limit("rectifier.surge", kCrest, bounds::rectifier_surge),
       limit("rail.transient", kCrest, bounds::rail_transient),
       objective("standby_loss", BoundClass::monotone, 1, kStandby, bounds::standby_by_engine),
+      objective("current_margin", BoundClass::monotone, 2, kSingle, bounds::margin_by_engine),
   };
   return table;
 }

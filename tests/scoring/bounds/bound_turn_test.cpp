@@ -14,6 +14,8 @@ namespace {
 
 /// Relative slack for rounding: a few hundred operations in double.
 constexpr double kRounding = 1e-11;
+/// What the engine's own tolerances leave.
+constexpr double kSolved = 1e-6;
 
 /// One thing turned round, or nothing.
 struct Turn {
@@ -40,9 +42,11 @@ double tighter(const BoundRule& rule, const BoxQuestion& whole, const BoxQuestio
   return sign * (*box - *member) / std::max(1e-3, std::abs(*member));
 }
 
+double slack_of(const BoundRule& rule) { return rule.depth > 0 ? kSolved : kRounding; }
+
 struct Outcome {
   double worst = -1;     ///< greatest `tighter`
-  bool changed = false;  ///< the turn changed a bound at all
+  bool changed = false;  ///< the turn made a bound tighter, well beyond the slack
 };
 
 Outcome outcome_of(const BoundRule& rule, const std::vector<Nest>& nests, const Turn& turn) {
@@ -55,11 +59,10 @@ Outcome outcome_of(const BoundRule& rule, const std::vector<Nest>& nests, const 
       const BoxQuestion before(nest.box, straight, *nest.context, supply);
       BoxQuestion whole(nest.box, turned, *nest.context, supply);
       whole.lists_turned = turn.lists;
-      if (rule.limit != nullptr ? rule.limit(before) != rule.limit(whole)
-                                : rule.objective(before) != rule.objective(whole)) {
+      if (turn.figure || turn.lists) {
+        // Second-order turns (what else warms the clamp a little) drown in the engine's tolerances.
+        if (!(tighter(rule, whole, before) > 100 * slack_of(rule))) continue;
         outcome.changed = true;
-      } else if (turn.figure || turn.lists) {
-        continue;
       }
       for (const auto& member : nest.alone) {
         const BoxEnds ends(member, *nest.context);
@@ -96,8 +99,8 @@ std::vector<Nest> make_nests() {
 TEST_CASE("A bound on a box is never tighter than on a box within it, and turning any direction shows") {
   const auto nests = make_nests();
   for (const auto& rule : bound_table()) {
-    INFO(rule.id);
-    CHECK(outcome_of(rule, nests, {}).worst <= kRounding);
+    INFO(rule.id << ", depth " << rule.depth);
+    CHECK(outcome_of(rule, nests, {}).worst <= slack_of(rule));
     int directions = 0;
     for (int f = -1; f < static_cast<int>(Figure::count); ++f) {
       Turn turn;
@@ -107,7 +110,7 @@ TEST_CASE("A bound on a box is never tighter than on a box within it, and turnin
       if (!outcome.changed) continue;
       ++directions;
       INFO("turned figure " << f);
-      CHECK(outcome.worst > kRounding);
+      CHECK(outcome.worst > slack_of(rule));
     }
     CHECK(directions > 0);
   }

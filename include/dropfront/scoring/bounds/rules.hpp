@@ -17,6 +17,7 @@ using LimitBound = double(const BoxQuestion&);
 ObjectiveBound cost;
 ObjectiveBound board_area;
 ObjectiveBound margin_by_charge;
+ObjectiveBound margin_by_engine;
 ObjectiveBound standby_by_charge;
 ObjectiveBound standby_by_engine;
 
