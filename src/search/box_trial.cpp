@@ -125,8 +125,8 @@ Tried BoxTrial::run(OpenBox open, const std::vector<double>& extent) const {
     } else {
       tried.fate = Fate::split;
       auto halves = splitter_.split(open.box, splitter_.widest(open.box, extent));
-      tried.halves.push_back(OpenBox{std::move(halves.first), open.bound, open.kinds});
-      tried.halves.push_back(OpenBox{std::move(halves.second), open.bound, open.kinds});
+      tried.halves.push_back(OpenBox{std::move(halves.first), open.bound, open.kinds, open.weight / 2});
+      tried.halves.push_back(OpenBox{std::move(halves.second), open.bound, open.kinds, open.weight / 2});
     }
   }
   tried.members = before - tried.reduced;

@@ -21,6 +21,7 @@ class Prover {
     proof_.broken.resize(session.evaluator.check_names().size());
     for (Box& box : splitter_.roots())
       open_.push_back(open_box(std::move(box), session.evaluator.objective_count()));
+    for (OpenBox& box : open_) box.weight = 1 / static_cast<double>(open_.size());
     // The stack is taken from its end: first things first.
     std::reverse(open_.begin(), open_.end());
     proof_.space = session.space.size();
@@ -34,7 +35,9 @@ class Prover {
         break;
       }
       batch(count);
-      session_.report("prove", proof_.settled() / proof_.space);
+      double waiting = 0;
+      for (const OpenBox& box : open_) waiting += box.weight;
+      session_.report("prove", 1 - waiting);
     }
     proof_.complete = open_.empty();
     proof_.open_boxes = static_cast<std::int64_t>(open_.size());

@@ -12,6 +12,7 @@ struct OpenBox {
   Box box;
   std::vector<double> bound;     ///< one an objective; -infinity: not known
   std::vector<BoundKind> kinds;  ///< of each
+  double weight = 1;  ///< share of the work it is guessed to be: half of that of the box it is half of
 };
 
 /// A box of which nothing is known.
