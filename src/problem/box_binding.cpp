@@ -3,6 +3,7 @@
 #include <algorithm>
 #include <limits>
 
+#include "dropfront/problem/cost_area.hpp"
 #include "dropfront/problem/design_box.hpp"
 #include "dropfront/problem/score_view.hpp"
 #include "dropfront/scoring/bounds/box_bounder.hpp"
@@ -35,6 +36,7 @@ class Boxes : public search::Bounder {
       : problem_(problem),
         slots_(make_space(problem.offers)),
         view_(problem.requirement),
+        cost_area_(problem, slots_),
         bounder_(problem.requirement),
         reach_(problem.requirement),
         wanted_margin_A_(problem.requirement.limits.current_margin *
@@ -45,6 +47,7 @@ class Boxes : public search::Bounder {
     if (single_parts()) found = known(box, depth);
     search::Bounds out;
     for (const scoring::Objective objective : problem_.requirement.objectives) add(objective, found, out);
+    if (depth == 0 && found.broken.empty()) add_corners(box, out);
     const auto& names = view_.check_names();
     const auto broken = std::find(names.begin(), names.end(), found.broken);
     if (!found.broken.empty() && broken != names.end()) {
@@ -103,9 +106,27 @@ class Boxes : public search::Bounder {
     }
   }
 
+  /// Cost and area together, where both are asked for.
+  void add_corners(const search::Box& box, search::Bounds& out) const {
+    const auto& objectives = problem_.requirement.objectives;
+    const auto place = [&](scoring::Objective objective) {
+      return std::find(objectives.begin(), objectives.end(), objective) - objectives.begin();
+    };
+    const auto cost = static_cast<std::size_t>(place(scoring::Objective::cost));
+    const auto area = static_cast<std::size_t>(place(scoring::Objective::board_area));
+    if (cost == objectives.size() || area == objectives.size()) return;
+    for (const CostArea::Step& step : cost_area_.steps(box)) {
+      std::vector<double> corner(objectives.size(), kUnknown);
+      corner[cost] = static_cast<double>(step.cost_micro) / 1e6;
+      corner[area] = static_cast<double>(step.area_um2) / 1e6;
+      out.corners.push_back(std::move(corner));
+    }
+  }
+
   const Problem& problem_;
   SlotSpace slots_;
   ScoreView view_;
+  CostArea cost_area_;
   scoring::BoxBounder bounder_;
   scoring::LeanReach reach_;
   double wanted_margin_A_;

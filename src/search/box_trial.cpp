@@ -56,18 +56,27 @@ bool BoxTrial::discard(OpenBox& open, int depth, Verdict& verdict) const {
     return true;
   }
   sharpen(open, found);
-  const Choice least = least_choice(open.box);
-  if (!front_.rejects(open.bound, least)) return false;
+  if (!found.corners.empty()) open.corners = found.corners;
+  if (!rejects(open, BoundKind::monotone)) return false;
   verdict.fate = Fate::dominated;
   // The strongest reasoning that suffices.
-  for (const BoundKind kind : {BoundKind::exact, BoundKind::theorem, BoundKind::monotone}) {
-    std::vector<double> bound = open.bound;
-    for (std::size_t k = 0; k < bound.size(); ++k)
-      if (open.kinds[k] > kind) bound[k] = unknown;
-    verdict.kind = kind;
-    if (front_.rejects(bound, least)) break;
-  }
+  verdict.kind = BoundKind::exact;
+  for (const BoundKind kind : {BoundKind::theorem, BoundKind::monotone})
+    if (!rejects(open, verdict.kind)) verdict.kind = kind;
   return true;
+}
+
+// Whether the front rejects whatever the box can hold, by bounds of a kind no weaker than given.
+bool BoxTrial::rejects(const OpenBox& open, BoundKind weakest) const {
+  const Choice least = least_choice(open.box);
+  std::vector<double> bound = open.bound;
+  for (std::size_t k = 0; k < bound.size(); ++k)
+    if (open.kinds[k] > weakest) bound[k] = unknown;
+  if (open.corners.empty()) return front_.rejects(bound, least);
+  return std::all_of(open.corners.begin(), open.corners.end(), [&](std::vector<double> corner) {
+    for (std::size_t k = 0; k < corner.size(); ++k) corner[k] = std::max(corner[k], bound[k]);
+    return front_.rejects(corner, least);
+  });
 }
 
 Tried::Single BoxTrial::settle(const Choice& choice) const {
@@ -125,8 +134,8 @@ Tried BoxTrial::run(OpenBox open, const std::vector<double>& extent) const {
     } else {
       tried.fate = Fate::split;
       auto halves = splitter_.split(open.box, splitter_.widest(open.box, extent));
-      tried.halves.push_back(OpenBox{std::move(halves.first), open.bound, open.kinds, open.weight / 2});
-      tried.halves.push_back(OpenBox{std::move(halves.second), open.bound, open.kinds, open.weight / 2});
+      tried.halves.push_back(OpenBox{std::move(halves.first), open.bound, open.kinds, {}, open.weight / 2});
+      tried.halves.push_back(OpenBox{std::move(halves.second), open.bound, open.kinds, {}, open.weight / 2});
     }
   }
   tried.members = before - tried.reduced;

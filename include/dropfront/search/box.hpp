@@ -22,7 +22,10 @@ enum class BoundKind { exact, theorem, monotone };
 struct Bounds {
   std::vector<double> objectives;  ///< one an objective, in its own unit, minimised; -infinity: not known
   std::vector<BoundKind> kinds;    ///< one an objective
-  int broken = -1;                 ///< index into the evaluator's check names that every member breaks
+  /// May be left empty. Else vectors like `objectives`, exact in kind (-infinity: not known), such that no
+  /// member is below all of them: each is in every objective at least as large as one of these.
+  std::vector<std::vector<double>> corners;
+  int broken = -1;  ///< index into the evaluator's check names that every member breaks
   BoundKind broken_kind = BoundKind::theorem;
   bool undefined = false;  ///< every member lacks a figure without which it cannot comply (exact)
 };

@@ -10,8 +10,9 @@ namespace dropfront::search {
 /// A box that waits, with the best bound known of it (its own or that of a box around it).
 struct OpenBox {
   Box box;
-  std::vector<double> bound;     ///< one an objective; -infinity: not known
-  std::vector<BoundKind> kinds;  ///< of each
+  std::vector<double> bound;                 ///< one an objective; -infinity: not known
+  std::vector<BoundKind> kinds;              ///< of each
+  std::vector<std::vector<double>> corners;  ///< see Bounds
   double weight = 1;  ///< share of the work it is guessed to be: half of that of the box it is half of
 };
 
@@ -63,6 +64,7 @@ class BoxTrial {
 
  private:
   bool discard(OpenBox& open, int depth, Verdict& verdict) const;
+  bool rejects(const OpenBox& open, BoundKind weakest) const;
   void settle(const Box& box, Tried& tried) const;
   Tried::Single settle(const Choice& choice) const;
 

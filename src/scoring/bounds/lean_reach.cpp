@@ -15,7 +15,7 @@ namespace {
 /// By this much the rail must fall short: the tolerances of the searches, the temperature of an ESR and a
 /// dropper's loss are of the order of millivolts.
 constexpr double kShort_V = 0.02;
-constexpr int kMostLoads = 5;
+constexpr int kMostLoads = 10;
 constexpr circuit::SteadyOptions kRailOnly{.powers = false, .multipliers = false};
 
 /// What the best of the output stages asks of the rail.
