@@ -66,6 +66,28 @@ bool BoxTrial::discard(OpenBox& open, int depth, Verdict& verdict) const {
   return true;
 }
 
+// Takes out the options with which no member has a chance, whatever the others are.
+void BoxTrial::shave(OpenBox& open, Tried& tried) const {
+  for (auto& list : open.box.options) {
+    if (list.size() < 2) continue;
+    const std::vector<std::int32_t> all = list;
+    const double share = open.box.members() / static_cast<double>(all.size());
+    std::vector<std::int32_t> kept;
+    for (const auto option : all) {
+      list = {option};
+      OpenBox slice = open;
+      Tried::Shaved shaved;
+      shaved.members = share;
+      if (discard(slice, 0, shaved.verdict))
+        tried.shaved.push_back(shaved);
+      else
+        kept.push_back(option);
+    }
+    list = kept;
+    if (kept.empty()) return;
+  }
+}
+
 // Whether the front rejects whatever the box can hold, by bounds of a kind no weaker than given.
 bool BoxTrial::rejects(const OpenBox& open, BoundKind weakest) const {
   const Choice least = least_choice(open.box);
@@ -124,21 +146,23 @@ Tried BoxTrial::run(OpenBox open, const std::vector<double>& extent) const {
     tried.rest = std::move(open);
     return tried;
   }
-  const double before = open.box.members();
-  if (!discard(open, 0, tried)) {
-    bounder_.reduce(open.box);
-    tried.reduced = before - open.box.members();
-    if (discard(open, 1, tried)) {
-    } else if (open.box.members() <= most_singles) {
-      settle(open.box, tried);
-    } else {
-      tried.fate = Fate::split;
-      auto halves = splitter_.split(open.box, splitter_.widest(open.box, extent));
-      tried.halves.push_back(OpenBox{std::move(halves.first), open.bound, open.kinds, {}, open.weight / 2});
-      tried.halves.push_back(OpenBox{std::move(halves.second), open.bound, open.kinds, {}, open.weight / 2});
-    }
+  tried.members = open.box.members();
+  if (discard(open, 0, tried)) return tried;
+  bounder_.reduce(open.box);
+  tried.reduced = tried.members - open.box.members();
+  shave(open, tried);
+  tried.members = open.box.members();
+  if (tried.members == 0) {
+    tried.fate = Fate::shaved;
+  } else if (discard(open, 1, tried)) {
+  } else if (tried.members <= most_singles) {
+    settle(open.box, tried);
+  } else {
+    tried.fate = Fate::split;
+    auto halves = splitter_.split(open.box, splitter_.widest(open.box, extent));
+    for (Box* half : {&halves.first, &halves.second})
+      tried.halves.push_back(OpenBox{std::move(*half), open.bound, open.kinds, {}, open.weight / 2});
   }
-  tried.members = before - tried.reduced;
   return tried;
 }
 

@@ -72,6 +72,7 @@ class Prover {
     if (tried.fate == Fate::untried) return;
     ++proof_.boxes;
     proof_.reduced[index(bounder_.reduce_kind())] += tried.reduced;
+    for (const Tried::Shaved& shaved : tried.shaved) count(shaved.verdict, shaved.members);
     if (tried.fate == Fate::settled)
       for (const Tried::Single& single : tried.singles) merge(single);
     else
@@ -100,6 +101,7 @@ class Prover {
         proof_.scored += members;
         break;
       case Fate::untried:
+      case Fate::shaved:
       case Fate::split:
         break;
     }

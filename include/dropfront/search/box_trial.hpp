@@ -24,6 +24,7 @@ enum class Fate {
   broken,     ///< every member breaks a limit
   undefined,  ///< every member lacks a figure
   dominated,  ///< the front dominates what any member could be at best
+  shaved,     ///< nothing was left of it after single options were discarded
   split,      ///< in two halves
   settled     ///< design by design; of a design: evaluated
 };
@@ -37,7 +38,12 @@ struct Verdict {
 
 /// What was done with one box.
 struct Tried : Verdict {
-  double reduced = 0;           ///< members dropped first
+  double reduced = 0;  ///< members dropped first
+  struct Shaved {
+    Verdict verdict;
+    double members = 0;
+  };
+  std::vector<Shaved> shaved;   ///< members discarded next, option by option
   double members = 0;           ///< those that remained
   std::vector<OpenBox> halves;  ///< fate split
   OpenBox rest;                 ///< fate untried: the box as it was
@@ -64,6 +70,7 @@ class BoxTrial {
 
  private:
   bool discard(OpenBox& open, int depth, Verdict& verdict) const;
+  void shave(OpenBox& open, Tried& tried) const;
   bool rejects(const OpenBox& open, BoundKind weakest) const;
   void settle(const Box& box, Tried& tried) const;
   Tried::Single settle(const Choice& choice) const;
