@@ -11,8 +11,8 @@ constexpr const char* kCharge = "the four plainly clamped arrangements";
 constexpr const char* kCrest = "the four plainly clamped arrangements, odd harmonics only";
 constexpr const char* kSeries = "as before, w·Rs·C < 1 over the box";
 constexpr const char* kStandby =
-    "w·Rs·C <= 0.4; behind the dropper at most 0.5 (bridge 0.42 - 0.5·w·Rs·C) of the crest; at most four "
-    "reservoirs times rectifiers";
+    "p = w·Rs·C <= 0.4, q = 1/(w·C·Rb) <= 0.15; behind the dropper at most (0.5 - 1.5q) of the crest, bridge "
+    "(0.42 - 0.5p - 1.5q); at most four reservoirs times rectifiers";
 constexpr const char* kSingle = "series resistor, chain, rectifier and ESR single; no step-down stage";
 
 BoundRule objective(std::string_view id, BoundClass known, int depth, std::string_view range,
