@@ -51,8 +51,9 @@ BoxStress::BoxStress(const DesignBox& box, const BoxEnds& ends, const BoundConte
   series_least_ohm = 0;
   for (const auto& supply : of.supplies) {
     line_Vrms = std::max(line_Vrms, supply.rich.voltage_Vrms);
-    step_V = std::max(step_V, 2 * supply.rich.crest_V);
+    pulse_V = std::max(pulse_V, 2 * supply.rich.crest_V);
   }
+  if (of.requirement->limits.surge) pulse_V = kInfinity;
   if (!ends.known_circuit()) return;
   series_least_ohm = ends.least(Figure::series_low_ohm);
   clamp_W = chain_Vrms = rail_V = 0;
@@ -82,7 +83,7 @@ PartTraits traits_of(const parts::Dropper* part, const BoxStress& stress) {
   traits.ratings[3] = part->series_rated ? 1 : 0;
   // A hair above what is needed, so that rounding decides nothing.
   traits.ratings[4] =
-      up_to(part->slew_V_per_s, 1.000001 * stress.step_V / (stress.series_least_ohm * least_F));
+      up_to(part->slew_V_per_s, 1.000001 * stress.pulse_V / (stress.series_least_ohm * least_F));
   traits.ratings[5] = given(part->impulse_V);
   return traits;
 }
@@ -93,7 +94,7 @@ PartTraits traits_of(const parts::Resistor* part, const BoxStress& stress) {
                        part->construction == parts::Construction::film ? 0.0 : 1.0};
   traits.ratings[1] = given(part->rated_power_W);
   traits.ratings[2] = given(part->rated_voltage_Vrms);
-  traits.ratings[3] = up_to(part->overload_voltage_V, stress.step_V);
+  traits.ratings[3] = up_to(part->overload_voltage_V, stress.pulse_V);
   traits.ratings[4] = given(part->pulse_energy_J);
   traits.ratings[5] = part->fusible ? 1 : 0;
   // What it must get before it opens: less is better.
@@ -126,24 +127,29 @@ PartTraits traits_of(const parts::Reservoir* part, const BoxStress& stress) {
   auto traits = placed_traits(part, stress, kBoardMargin_um);
   // The cold ratio's default goes by the rated voltage.
   const double cold = part->esr_cold_ohm > 0 ? part->esr_cold_ohm : part->rated_voltage_V <= 16 ? -1 : -2;
-  traits.electrical = {
-      part->capacitance_F, part->tolerance,        part->esr_ohm,         cold,
-      part->leakage_A,     part->end_of_life_loss, part->end_of_life_esr, part->ripple_frequency_Hz};
+  traits.electrical = {part->capacitance_F,
+                       part->tolerance,
+                       part->esr_ohm,
+                       cold,
+                       part->leakage_A,
+                       part->end_of_life_loss,
+                       part->end_of_life_esr,
+                       part->ripple_frequency_Hz,
+                       part->life_temperature_degC.value_or(-1)};
   const double derating = stress.context->requirement->derating.reservoir_voltage;
   traits.ratings[1] = up_to(part->rated_voltage_V * derating, stress.rail_V);
   traits.ratings[2] = given(part->surge_voltage_V);
   traits.ratings[3] = given(part->ripple_current_Arms);
   traits.ratings[4] = given(part->life_h);
-  traits.ratings[5] = given(part->life_temperature_degC);
   return traits;
 }
 
 PartTraits traits_of(const parts::Rectifier* part, const BoxStress& stress) {
   auto traits = placed_traits(part, stress, kBoardMargin_um);
   traits.electrical = {part->threshold_voltage_V, part->slope_resistance_ohm};
-  traits.ratings[1] = up_to(part->reverse_voltage_V, stress.step_V);
+  traits.ratings[1] = up_to(part->reverse_voltage_V, stress.pulse_V);
   // At plug-in no more than twice the crest (and a drop) stands on the series resistor.
-  traits.ratings[2] = up_to(part->surge_current_A, 1.05 * stress.step_V / stress.series_least_ohm);
+  traits.ratings[2] = up_to(part->surge_current_A, 1.05 * stress.pulse_V / stress.series_least_ohm);
   return traits;
 }
 

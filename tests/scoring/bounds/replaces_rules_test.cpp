@@ -99,3 +99,12 @@ TEST_CASE("A chain of two replaces a dearer single element of the same resistanc
   REQUIRE(BoxBounder(example.requirement).reduce(box) == 1);
   REQUIRE(box.discharges.front().count == 2);
 }
+
+TEST_CASE("Where a surge is asked for, no pulse rating suffices by the plug-in alone") {
+  TwoRectifiers parts;
+  parts.second.info.price_breaks[0].price_micro += 1;
+  parts.second.reverse_voltage_V = 2000;
+  REQUIRE(parts.only_first());
+  parts.example.requirement.limits.surge = Surge{1000, 2};
+  REQUIRE(parts.both());
+}

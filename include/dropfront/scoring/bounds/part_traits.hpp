@@ -23,7 +23,7 @@ struct BoxStress {
   BoxStress(const DesignBox& box, const BoxEnds& ends, const BoundContext& context);
   const BoundContext* context;
   double line_Vrms = 0;  ///< of the rich line
-  double step_V = 0;     ///< twice its crest
+  double pulse_V = 0;    ///< twice its crest; infinite where a surge is asked for
   double series_least_ohm = 0;
   double clamp_W = 0;     ///< (clamp + forward)·mean current
   double chain_Vrms = 0;  ///< line + series drop + what stands behind
