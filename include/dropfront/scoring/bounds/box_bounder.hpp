@@ -12,7 +12,7 @@ class BoxBounder {
   explicit BoxBounder(const Requirement& requirement);
 
   /// `depth` 0: nothing is solved; 1: a few steady states; 2: available currents too, where the box is small
-  /// enough for them (a third of a millisecond). A deeper bound is never looser. Once a limit
+  /// enough for them (about half a millisecond). A deeper bound is never looser. Once a limit
   /// is shown to be broken the objectives not worked out by then are left absent.
   BoxBound bound(const DesignBox& box, int depth) const;
 
