@@ -57,6 +57,11 @@ class Boxes : public search::Bounder {
     return out;
   }
 
+  bool out_of_reach(const search::Box& box, int objective, double value) const override {
+    if (problem_.requirement.objectives[objective] != scoring::Objective::current_margin) return false;
+    return reach_.out_of_reach(design_box(problem_.offers, slots_.ids, box), -value - kSlack);
+  }
+
   double reduce(search::Box& box) const override {
     if (!single_parts()) return 0;
     scoring::DesignBox parts = design_box(problem_.offers, slots_.ids, box);

@@ -142,6 +142,15 @@ std::optional<Check> margin_out_of_reach(const Evidences& evidences) {
   return std::nullopt;
 }
 
+/// The greatest power of a step-down stage costs more than all other checks together. It waits for them where
+/// it is no objective that could show the design to be dominated.
+bool margin_is_dear(const Evidences& evidences) {
+  const Evidence& evidence = *evidences.front();
+  const auto& objectives = evidence.requirement().objectives;
+  return evidence.design().output_stage->kind == parts::StageKind::step_down &&
+         std::find(objectives.begin(), objectives.end(), Objective::current_margin) == objectives.end();
+}
+
 /// Tiers by cost, and the objective that becomes known with each; false when the score stops there.
 bool run_stages(Score& score, Depth depth, const Stop& stop, const Evidences& evidences,
                 std::vector<std::optional<Check>>& found) {
@@ -157,11 +166,16 @@ bool run_stages(Score& score, Depth depth, const Stop& stop, const Evidences& ev
   }
   score.objectives.standby_loss_W = greatest_standby_W(evidences, score.standby_supply);
   if (!run_tier(Tier::standby, evidences, stop_at_failure, found) || stopped()) return false;
-  score.objectives.current_margin_A = least_margin_A(evidences, score.margin_supply);
-  if (!run_tier(Tier::lean, evidences, stop_at_failure, found) || stopped()) return false;
-  if (depth == Depth::screen) return false;
-  return run_tier(Tier::steady, evidences, stop_at_failure, found) &&
-         run_tier(Tier::transient, evidences, stop_at_failure, found);
+  const auto lean = [&] {
+    score.objectives.current_margin_A = least_margin_A(evidences, score.margin_supply);
+    return run_tier(Tier::lean, evidences, stop_at_failure, found) && !stopped();
+  };
+  const auto others = [&] {
+    return run_tier(Tier::steady, evidences, stop_at_failure, found) &&
+           run_tier(Tier::transient, evidences, stop_at_failure, found);
+  };
+  if (depth == Depth::screen) return lean() && false;
+  return stop_at_failure && margin_is_dear(evidences) ? others() && lean() : lean() && others();
 }
 
 }  // namespace

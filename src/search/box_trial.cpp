@@ -57,13 +57,29 @@ bool BoxTrial::discard(OpenBox& open, int depth, Verdict& verdict) const {
   }
   sharpen(open, found);
   if (!found.corners.empty()) open.corners = found.corners;
-  if (!rejects(open, BoundKind::monotone)) return false;
+  if (!rejects(open, BoundKind::monotone)) return depth > 0 && discard_by_questions(open, verdict);
   verdict.fate = Fate::dominated;
   // The strongest reasoning that suffices.
   verdict.kind = BoundKind::exact;
   for (const BoundKind kind : {BoundKind::theorem, BoundKind::monotone})
     if (!rejects(open, verdict.kind)) verdict.kind = kind;
   return true;
+}
+
+// Asks of each objective by itself whether the box can be as good in it as the front makes it have to be.
+bool BoxTrial::discard_by_questions(const OpenBox& open, Verdict& verdict) const {
+  for (int k = 0; k < static_cast<int>(open.bound.size()); ++k) {
+    double value = open.corners.empty() ? front_.surely_rejected_from(open.bound, k) : unknown;
+    for (std::vector<double> corner : open.corners) {
+      for (std::size_t j = 0; j < corner.size(); ++j) corner[j] = std::max(corner[j], open.bound[j]);
+      value = std::max(value, front_.surely_rejected_from(corner, k));
+    }
+    if (!std::isfinite(value) || !bounder_.out_of_reach(open.box, k, value)) continue;
+    verdict.fate = Fate::dominated;
+    verdict.kind = BoundKind::monotone;
+    return true;
+  }
+  return false;
 }
 
 // Takes out the options with which no member has a chance, whatever the others are.

@@ -56,6 +56,32 @@ bool ParetoArchive::rejects(const std::vector<double>& objectives, const Choice&
   return node_rejects(0, query);
 }
 
+void ParetoArchive::least_beyond(int index, const std::vector<double>& keys, int k, double& least) const {
+  const Node& node = nodes_[index];
+  const auto within_others = [&](const std::vector<double>& member) {
+    for (int j = 0; j < static_cast<int>(keys.size()); ++j)
+      if (j != k && !(member[j] <= keys[j])) return false;
+    return true;
+  };
+  if (!within_others(node.low)) return;
+  if (node.left >= 0) {
+    least_beyond(node.left, keys, k, least);
+    least_beyond(node.right, keys, k, least);
+  }
+  for (int i : node.members)
+    if (within_others(members_[i].keys)) least = std::min(least, members_[i].objectives[k]);
+}
+
+double ParetoArchive::surely_rejected_from(const std::vector<double>& bound, int k) const {
+  std::vector<double> keys(bound.size());
+  for (std::size_t j = 0; j < bound.size(); ++j)
+    keys[j] = std::isnan(bound[j]) ? -infinity : objective_key(bound[j], resolution_[j]);
+  double least = infinity;
+  least_beyond(0, keys, k, least);
+  // A hair more than a step, so that rounding cannot bring the two keys together.
+  return std::nextafter(least + 1.000001 * resolution_[k], infinity);
+}
+
 void ParetoArchive::refresh(Node& node) const {
   std::fill(node.low.begin(), node.low.end(), infinity);
   std::fill(node.high.begin(), node.high.end(), -infinity);

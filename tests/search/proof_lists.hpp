@@ -37,6 +37,7 @@ enum class Fault {
   cost_high,       ///< the greatest cost of a box for the least
   area_high,       ///<
   loss_high,       ///<
+  question_low,    ///< the same where it is asked for by out_of_reach()
   margin_low,      ///< the least margin for the greatest
   broken_by_any,   ///< a limit that some member breaks
   unknown_breaks,  ///< a missing rating taken for a broken limit of the whole box
@@ -75,6 +76,7 @@ class ProofLists : public Evaluator, public Bounder {
   Evaluation evaluate(const Choice& c, const Dominated& dominated) const override;
   Evaluation relaxed(const Choice& categories, const std::vector<double>& position) const override;
   Bounds bound(const Box& box, int depth) const override;
+  bool out_of_reach(const Box& box, int objective, double value) const override;
   double reduce(Box& box) const override;
 
  private:

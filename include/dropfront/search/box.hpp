@@ -37,6 +37,9 @@ class Bounder {
   virtual ~Bounder() = default;
   /// `depth` 0: what needs no solving; 1: solving allowed. A deeper bound is never looser.
   virtual Bounds bound(const Box& box, int depth) const = 0;
+  /// True: no member's objective is below `value`. May be cheaper than a bound on it (one question at one
+  /// point), and sharper; known no better than monotone. Nothing need be known.
+  virtual bool out_of_reach(const Box& /*box*/, int /*objective*/, double /*value*/) const { return false; }
   /// Drops options that another option of the same slot replaces at no loss in every member (equal in what
   /// the circuit sees, not dearer, not larger, ratings no worse where they could matter in this box). Where
   /// the objectives that are asked for do not tell the two apart, the smaller index must be the one that

@@ -71,6 +71,7 @@ class BoxTrial {
  private:
   bool discard(OpenBox& open, int depth, Verdict& verdict) const;
   void shave(OpenBox& open, Tried& tried) const;
+  bool discard_by_questions(const OpenBox& open, Verdict& verdict) const;
   bool rejects(const OpenBox& open, BoundKind weakest) const;
   void settle(const Box& box, Tried& tried) const;
   Tried::Single settle(const Choice& choice) const;

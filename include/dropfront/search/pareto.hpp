@@ -37,6 +37,11 @@ class ParetoArchive {
   /// `choice` settles equal raw vectors (the smaller choice stays).
   bool rejects(const std::vector<double>& objectives, const Choice& choice) const;
 
+  /// The least value of objective k beyond which the front surely rejects a vector that is `bound` in the
+  /// others (-infinity: unknown, as good as can be): a step worse than the best member in k among those no
+  /// worse in all others. +infinity: it never does.
+  double surely_rejected_from(const std::vector<double>& bound, int k) const;
+
   int size() const { return alive_; }
   std::vector<std::int64_t> tags() const;  ///< of the members, in order of entry
   std::vector<std::int64_t> ends() const;  ///< for each objective the tag of the member best in it
@@ -59,6 +64,7 @@ class ParetoArchive {
   };
 
   bool node_rejects(int node, const Member& query) const;
+  void least_beyond(int node, const std::vector<double>& keys, int k, double& least) const;
   void remove_dominated(int node, const Member& newcomer, std::vector<std::int64_t>* removed);
   void place(int member);
   void split_leaf(int node, int depth);
