@@ -4,14 +4,16 @@
 #include <cmath>
 
 #include "dropfront/circuit/load_newton.hpp"
-#include "dropfront/circuit/orbit.hpp"
+#include "dropfront/circuit/settle.hpp"
 
 namespace dropfront::circuit {
 
 namespace {
 
-constexpr double kLightest = 1e-4;    // of the charge ceiling: stands for an unloaded rail
-constexpr double kLighter = 0.6;      // of the root: the lighter load tried on bridges
+constexpr double kLightest = 1e-4;  // of the charge ceiling: stands for an unloaded rail
+constexpr double kLighter = 0.6;    // of the root: the lighter load tried on bridges
+// Shunts fire at another moment with every load, so several lighter ones are tried.
+constexpr double kLighterShunt[] = {0.97, 0.9, 0.8, 0.65, 0.5, 0.3};
 constexpr double kOnTarget_V = 1e-6;  // Newton's root against the independent steady state
 
 /// Steady states of one network at different loads, on one set of conduction modes.
@@ -32,12 +34,14 @@ class LoadScan {
     map_.set_load(current_A);
     ++solved;
     Probe probe;
-    const Orbit orbit = find_orbit(map_, guess, SteadyOptions{});
-    probe.usable = orbit.found;
-    probe.reason = orbit.reason;
-    if (!orbit.found) return probe;
-    probe.state = orbit.start;
-    probe.headroom_V = rail_extremes(map_).low - required_V_;
+    SteadyOptions options;
+    options.multipliers = false;
+    const Settled settled = settle(map_, guess, options);
+    probe.usable = settled.found;
+    probe.reason = settled.reason;
+    if (!settled.found) return probe;
+    probe.state = settled.start;
+    probe.headroom_V = rail_extremes(map_.walker(), settled.segments).low - required_V_;
     return probe;
   }
 
@@ -138,15 +142,21 @@ AvailableCurrent find_available_current(Network (*build)(const ElementValues&), 
   LoadScan::Probe low = empty;
   double high_A = most_A;
   double high_V = -required_V;
+  const bool shunted = !network.thyristors.empty();
   const LoadRoot root = newton_load(scan.map(), empty.state, surplus_A(scan.map()), required_V);
   if (root.found && root.current_A < high_A) {
     const auto probe = scan.at(root.current_A, scan.cold());
     if (probe.usable && std::abs(probe.headroom_V) <= kOnTarget_V) {
-      const double lighter_A = kLighter * root.current_A;
-      const auto lighter = scan.map().halved() ? scan.at(lighter_A, probe.state) : probe;
-      if (lighter.usable && lighter.headroom_V >= -kOnTarget_V) return finish(probe, root.current_A);
-      high_A = lighter_A;
-      high_V = lighter.usable ? lighter.headroom_V : -required_V;
+      if (shunted) {  // tried at several lighter loads below
+        low_A = root.current_A;
+        low = probe;
+      } else {
+        const double lighter_A = kLighter * root.current_A;
+        const auto lighter = scan.map().halved() ? scan.at(lighter_A, probe.state) : probe;
+        if (lighter.usable && lighter.headroom_V >= -kOnTarget_V) return finish(probe, root.current_A);
+        high_A = lighter_A;
+        high_V = lighter.usable ? lighter.headroom_V : -required_V;
+      }
     } else if (probe.usable && probe.headroom_V > 0) {
       low_A = root.current_A;
       low = probe;
@@ -155,9 +165,18 @@ AvailableCurrent find_available_current(Network (*build)(const ElementValues&), 
       high_V = probe.headroom_V;
     }
   }
-  const auto closed = close_bracket(scan, low_A, low, high_A, high_V);
-  if (!closed.usable) return finish(closed, 0);
-  return finish(closed, low_A);
+  auto closed = close_bracket(scan, low_A, low, high_A, high_V);
+  if (!shunted || !closed.usable) return finish(closed, closed.usable ? low_A : 0);
+  for (const double share : kLighterShunt) {
+    const double lighter_A = share * low_A;
+    if (lighter_A <= lightest_A) break;
+    const auto lighter = scan.at(lighter_A, scan.cold());
+    if (lighter.usable && lighter.headroom_V >= -kOnTarget_V) continue;
+    low_A = lightest_A;
+    closed = close_bracket(scan, low_A, empty, lighter_A, lighter.usable ? lighter.headroom_V : -required_V);
+    break;
+  }
+  return finish(closed, closed.usable ? low_A : 0);
 }
 
 }  // namespace dropfront::circuit

@@ -58,7 +58,13 @@ void add_rail(Network& network, Node positive, Node negative, const ElementValue
     plate = network.add_node();
     network.resistors.push_back({positive, plate, values.reservoir_esr_ohm, Owner::reservoir});
   }
-  network.capacitors.push_back({plate, negative, values.reservoir_F, Owner::reservoir});
+  const bool direct = plate == positive;  // no series resistance: a ceramic beside it is one with it
+  const double reservoir_F = values.reservoir_F + (direct ? values.ceramic_F : 0);
+  network.capacitors.push_back({plate, negative, reservoir_F, Owner::reservoir});
+  if (values.ceramic_F > 0 && !direct) {
+    network.capacitors.push_back({positive, negative, values.ceramic_F, Owner::ceramic});
+    if (!network.half_period_signs.empty()) network.half_period_signs.push_back(1);
+  }
   if (values.rail_current_A > 0) {
     network.loads.push_back({positive, negative, values.rail_current_A, values.load_cutoff_V});
   }
@@ -76,6 +82,36 @@ void set_start(Network& network, const ElementValues& values, double rail_V, dou
       capacitor.start_V = rail_V;
     }
   }
+}
+
+void add_shunt(Network& network, Node anode, Node cathode, Node positive, Node negative, int feed_branch,
+               const ElementValues& values) {
+  const Node gate = network.add_node();
+  const int gate_resistor = static_cast<int>(network.resistors.size());
+  network.resistors.push_back({positive, gate, values.gate_resistor_ohm, Owner::gate_resistor});
+  ClampCurve trigger = values.clamp;
+  trigger.main.threshold_V += kGateVoltage_V;
+  if (trigger.knee) trigger.knee->threshold_V += kGateVoltage_V;
+  add_clamp(network, gate, negative, trigger);
+  network.thyristors.push_back({anode, cathode, values.thyristor.threshold_V, values.thyristor.slope_ohm,
+                                values.thyristor_holding_A, gate_resistor, values.thyristor_trigger_A,
+                                feed_branch});
+}
+
+double firing_rail_V(const ElementValues& values) {
+  const double current_A = values.thyristor_trigger_A;
+  const auto& clamp = values.clamp;
+  double zener_V = clamp.main.threshold_V + clamp.main.slope_ohm * current_A;
+  if (clamp.knee) {
+    // Below the bend the knee branch carries all; above it both share.
+    const double knee_V = clamp.knee->threshold_V + clamp.knee->slope_ohm * current_A;
+    const double both_S = 1 / clamp.knee->slope_ohm + 1 / clamp.main.slope_ohm;
+    const double shared_V = (current_A + clamp.knee->threshold_V / clamp.knee->slope_ohm +
+                             clamp.main.threshold_V / clamp.main.slope_ohm) /
+                            both_S;
+    zener_V = knee_V <= clamp.main.threshold_V ? knee_V : shared_V;
+  }
+  return zener_V + kGateVoltage_V + values.gate_resistor_ohm * current_A;
 }
 
 ClampCurve in_series(const ClampCurve& clamp, const Curve& forward) {

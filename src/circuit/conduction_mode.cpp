@@ -1,5 +1,6 @@
 #include "dropfront/circuit/conduction_mode.hpp"
 
+#include <algorithm>
 #include <cmath>
 
 #include "dropfront/circuit/symmetric_eigen.hpp"
@@ -28,10 +29,15 @@ std::vector<Conducting> conducting_elements(const Network& network, ConductionMa
   for (const auto& load : network.loads) {
     const bool above = (mask >> bit++) & 1u;
     if (above) {
-      list.push_back({0, 0, load.current_A, &load == &network.loads.front() ? 1.0 : 0.0});
+      list.push_back(
+          {load.slope_S, load.cutoff_V, load.current_A, &load == &network.loads.front() ? 1.0 : 0.0});
     } else {
       list.push_back({load.current_A / load.cutoff_V, 0, 0});
     }
+  }
+  for (const auto& t : network.thyristors) {
+    const bool latched = (mask >> bit++) & 1u;
+    list.push_back({latched ? 1 / t.slope_ohm : 0, t.on_voltage_V, 0});
   }
   return list;
 }
@@ -106,9 +112,12 @@ void diagonalise(const Network& network, ConductionMode& mode) {
     }
   }
   const double period_s = network.source.waveform.period_s();
+  const bool active = std::any_of(network.loads.begin(), network.loads.end(),
+                                  [](const LoadElement& load) { return load.slope_S < 0; });
   for (int k = 0; k < n; ++k) {
-    if (mode.lambda[k] > 0) mode.lambda[k] = 0;  // rounding only: the network is passive
-    mode.slow[k] = -mode.lambda[k] * period_s < 1e-4;
+    if (mode.lambda[k] > 0 && !active) mode.lambda[k] = 0;  // rounding only: the network is passive
+    mode.grows = mode.grows || mode.lambda[k] > 0;
+    mode.slow[k] = std::abs(mode.lambda[k]) * period_s < 1e-4;
     for (int i = 0; i < n; ++i) {
       mode.source[k] += q[i][k] * mode.capacitor_A[i][kSource] / root_C[i];
       mode.constant[k] += q[i][k] * mode.capacitor_A[i][kOne] / root_C[i];
@@ -137,12 +146,64 @@ void force_modes(const Waveform& mains, ConductionMode& mode) {
   }
 }
 
+/// Latched: current above holding. Not latched: gate above trigger, and the feeding branch above holding.
+void add_thyristor_guards(const Network& network, ConductionMode& mode) {
+  const auto& mains = network.source.waveform;
+  const std::size_t before = network.branches.size() + network.loads.size();
+  for (std::size_t t = 0; t < network.thyristors.size(); ++t) {
+    const auto& part = network.thyristors[t];
+    const auto& feed = network.branches[part.feed_branch];
+    ModalRow arming = mode.element_V[network.resistors.size() + part.feed_branch];
+    arming.one -= feed.threshold_V + feed.slope_ohm * part.holding_A;
+    ModalRow guard;
+    if ((mode.mask >> (before + t)) & 1u) {
+      guard = mode.element_V[network.resistors.size() + before + t];
+      guard.one -= part.on_voltage_V + part.slope_ohm * part.holding_A;
+    } else {
+      guard = mode.element_V[part.gate_resistor];
+      guard.one -= network.resistors[part.gate_resistor].resistance_ohm * part.trigger_A;
+    }
+    mode.guard.push_back(guard);
+    mode.guard_forced.push_back(forced_part(mode, mains, guard));
+    mode.arming.push_back(arming);
+    mode.arming_forced.push_back(forced_part(mode, mains, arming));
+  }
+}
+
+/// An exponential y' = -rate·y of the source is one more mode. It drives z' = lambda·z + b·V·y, whose answer
+/// is z = gain·y with gain = b·V/(-rate - lambda): the circuit mode proper is what is left of z.
+void append_exponentials(const Waveform& mains, ConductionMode& mode) {
+  mode.modes = mode.states;
+  mode.pulse_start_s = mains.pulse_start_s();
+  for (const auto& e : mains.exponentials()) {
+    const int j = mode.modes - mode.states;
+    const int k = mode.modes++;
+    mode.lambda[k] = -e.rate_per_s;
+    mode.pulse_V[j] = e.amplitude_V;
+    for (int i = 0; i < mode.states; ++i) {
+      double apart = -e.rate_per_s - mode.lambda[i];
+      // Equal rates would need a term s·e^(-rate·s); a billionth apart is the same to seven places.
+      if (std::abs(apart) < 1e-9 * e.rate_per_s) apart = 1e-9 * e.rate_per_s;
+      mode.pulse_gain[i][j] = mode.source[i] * e.amplitude_V / apart;
+      for (int x = 0; x < mode.states; ++x)
+        mode.to_state[x][k] += mode.to_state[x][i] * mode.pulse_gain[i][j];
+    }
+  }
+}
+
 }  // namespace
+
+ModalRow source_row(const ConductionMode& mode) {
+  Row row{};
+  row[kSource] = 1;
+  return to_modal_row(mode, row);
+}
 
 ModalRow to_modal_row(const ConductionMode& mode, const Row& row) {
   ModalRow modal;
-  for (int k = 0; k < mode.states; ++k) {
+  for (int k = 0; k < mode.modes; ++k) {
     for (int i = 0; i < mode.states; ++i) modal.z[k] += row[i] * mode.to_state[i][k];
+    if (k >= mode.states) modal.z[k] += row[kSource] * mode.pulse_V[k - mode.states];
   }
   modal.u = row[kSource];
   modal.one = row[kOne];
@@ -227,6 +288,7 @@ ConductionMode derive_mode(const Network& network, const Topology& topology, Con
   diagonalise(network, mode);
   const auto& mains = network.source.waveform;
   force_modes(mains, mode);
+  append_exponentials(mains, mode);
 
   mode.element_V.reserve(element_rows.size());
   for (const auto& row : element_rows) mode.element_V.push_back(to_modal_row(mode, row));
@@ -238,6 +300,7 @@ ConductionMode derive_mode(const Network& network, const Topology& topology, Con
     mode.guard.push_back(guard);
     mode.guard_forced.push_back(forced_part(mode, mains, guard));
   }
+  add_thyristor_guards(network, mode);
   mode.rail = to_modal_row(mode, voltage_row(topology.rail, roots, topology.roots));
   mode.rail_forced = forced_part(mode, mains, mode.rail);
   return mode;

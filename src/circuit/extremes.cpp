@@ -1,5 +1,6 @@
 #include "dropfront/circuit/extremes.hpp"
 
+#include <algorithm>
 #include <cmath>
 #include <numbers>
 
@@ -24,6 +25,10 @@ void include_extremes(const Segment& segment, const ModalRow& row, const ForcedR
   const auto& mode = *segment.mode;
   // An error of this much in the place of a flat point moves the value by its square: nothing.
   const double resolution_s = 1e-7 * 2 * std::numbers::pi / phase.omega[0];
+  double granted_s = INFINITY;  // in which a growing mode gains a factor e
+  for (int i = 0; mode.grows && i < mode.states; ++i) {
+    if (mode.lambda[i] > 0) granted_s = std::min(granted_s, 1 / mode.lambda[i]);
+  }
   double s = 0;
   double side = 0;  // sign of the slope being followed
   for (int evaluation = 0; evaluation < 5000; ++evaluation) {
@@ -37,10 +42,11 @@ void include_extremes(const Segment& segment, const ModalRow& row, const ForcedR
       side = slope < 0 ? -1 : 1;
     }
     double bound = forced.jerk;
-    for (int i = 0; i < mode.states; ++i) {
-      bound += std::abs(row.z[i] * mode.lambda[i] * mode.lambda[i] * moment.slope[i]);
+    for (int i = 0; i < mode.modes; ++i) {
+      const double ahead = mode.lambda[i] > 0 ? std::numbers::e : 1;
+      bound += std::abs(row.z[i] * mode.lambda[i] * mode.lambda[i] * moment.slope[i]) * ahead;
     }
-    double step = safe_step(std::abs(slope), side * turn, bound);
+    double step = std::min(granted_s, safe_step(std::abs(slope), side * turn, bound));
     if (step < resolution_s) {
       extremes.include(value_at(row, forced, moment, phase), segment.start_s + s);
       step = resolution_s;

@@ -4,7 +4,7 @@
 #include <cmath>
 
 #include "dropfront/circuit/load_newton.hpp"
-#include "dropfront/circuit/orbit.hpp"
+#include "dropfront/circuit/settle.hpp"
 
 namespace dropfront::circuit {
 
@@ -28,12 +28,49 @@ class Search {
 
   bool orbit_at(double load_A, StateVector& state, double& rail_V) {
     map_.set_load(load_A);
-    const Orbit orbit = find_orbit(map_, cold_, SteadyOptions{});
-    if (orbit.found) {
-      state = orbit.start;
-      rail_V = rail_extremes(map_).low;
+    SteadyOptions options;
+    options.multipliers = false;
+    const Settled settled = settle(map_, cold_, options);
+    if (settled.found) {
+      state = settled.start;
+      rail_V = rail_extremes(map_.walker(), settled.segments).low;
     }
-    return orbit.found;
+    return settled.found;
+  }
+
+  /// Scan of the load, then golden sections about its best: for rails that jump (thyristors).
+  bool scan(double floor_V, double most_A, GreatestPower& answer) {
+    constexpr int kLoads = 48;
+    constexpr int kSections = 24;
+    constexpr double kGolden = 0.6180339887498949;
+    double best = -1;
+    const auto consider = [&](double load_A) {
+      StateVector state{};
+      double rail_V = 0;
+      ++answer.steady_states;
+      if (!orbit_at(load_A, state, rail_V) || !(rail_V >= floor_V)) return -1.0;
+      const double power = (load_A - overhead_A_) * rail_V;
+      if (power > best) {
+        best = power;
+        answer.current_A = load_A;
+        answer.rail_V = rail_V;
+      }
+      return power;
+    };
+    for (int k = 1; k <= kLoads; ++k) consider(overhead_A_ + (most_A - overhead_A_) * k / kLoads);
+    if (best < 0) return false;
+    const double width = (most_A - overhead_A_) / kLoads;
+    double low = answer.current_A - width, high = std::min(most_A, answer.current_A + width);
+    for (int k = 0; k < kSections; ++k) {
+      const double left = high - kGolden * (high - low), right = low + kGolden * (high - low);
+      if (consider(left) > consider(right)) {
+        high = right;
+      } else {
+        low = left;
+      }
+    }
+    answer.usable = true;
+    return true;
   }
 
   bool try_at(double rail_V, const StateVector& from, double near_A, Trial& trial) {
@@ -70,6 +107,10 @@ GreatestPower find_greatest_power(const Network& network, double floor_V, double
   if (!search.orbit_at(lightest_A, light, light_V) ||
       !search.orbit_at(floor_load_A, at_floor, floor_rail_V)) {
     return give_up("no periodic steady state found");
+  }
+  if (!network.thyristors.empty()) {
+    if (!search.scan(floor_V, floor_load_A, answer)) return give_up("no load holds the lowest rail");
+    return answer;
   }
   Trial low, best;
   if (!search.try_at(floor_V, at_floor, floor_load_A, low)) return give_up("no load holds the lowest rail");

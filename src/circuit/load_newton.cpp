@@ -39,17 +39,17 @@ struct Walked {
 };
 
 /// Adds what moves the minimum when it sits where a branch changes side: rail' times the crossing's shift.
-void add_crossing_shift(const Segment& segment, int bit, TonePhase& phase, const SmallMatrix& by_start,
-                        const StateVector& by_load, int n, Walked& walked) {
+void add_crossing_shift(const Segment& segment, const Walker::GuardRows& guard, TonePhase& phase,
+                        const SmallMatrix& by_start, const StateVector& by_load, int n, Walked& walked) {
   const auto& mode = *segment.mode;
   phase.set(segment.start_s + segment.length_s);
   const ModalMoment moment = modal_moment(segment, segment.length_s);
-  const double guard_slope = slope_at(mode.guard[bit], mode.guard_forced[bit], moment, phase);
+  const double guard_slope = slope_at(*guard.row, *guard.forced, moment, phase);
   const double rail_slope = slope_at(mode.rail, mode.rail_forced, moment, phase);
   if (!(std::abs(guard_slope) > 1e-6)) return;
   StateVector gradient{};
   double by_current = 0;
-  row_gradient(segment, mode.guard[bit], by_start, by_load, n, gradient, by_current);
+  row_gradient(segment, *guard.row, by_start, by_load, n, gradient, by_current);
   for (int c = 0; c < n; ++c) walked.min_by_start[c] -= rail_slope * gradient[c] / guard_slope;
   walked.min_by_load -= rail_slope * by_current / guard_slope;
 }
@@ -75,13 +75,16 @@ Walked differentiate(const PeriodMap& map) {
                    walked.min_by_load);
       const bool at_crossing = s > segment.length_s * (1 - 1e-9) && k + 1 < segments.size();
       if (at_crossing) {
-        const ConductionMask flipped = segment.mode->mask ^ segments[k + 1].mode->mask;
-        int bit = 0;
-        while (flipped && !((flipped >> bit) & 1u)) ++bit;
-        if (flipped) add_crossing_shift(segment, bit, phase, by_start, by_load, n, walked);
+        Walker::GuardRows guard;
+        if (map.walker().crossed_guard(segment, segments[k + 1], guard)) {
+          add_crossing_shift(segment, guard, phase, by_start, by_load, n, walked);
+        }
       }
     }
     map.walker().carry(segment, segment.length_s, walked.by_start, walked.by_load);
+    if (k + 1 < segments.size()) {
+      map.walker().cross(segment, segments[k + 1], walked.by_start, walked.by_load);
+    }
   }
   return walked;
 }
@@ -95,6 +98,8 @@ double surplus_A(const PeriodMap& map) {
   for (std::size_t b = 0; b < network.branches.size(); ++b) {
     if (network.branches[b].owner == Owner::clamp) sum_As += totals.element_As[network.resistors.size() + b];
   }
+  const std::size_t shunts = network.resistors.size() + network.branches.size() + network.loads.size();
+  for (std::size_t t = 0; t < network.thyristors.size(); ++t) sum_As += totals.element_As[shunts + t];
   return totals.duration_s > 0 ? sum_As / totals.duration_s : 0;
 }
 

@@ -84,13 +84,4 @@ Orbit find_orbit(PeriodMap& map, const StateVector& start, const SteadyOptions& 
   return orbit;
 }
 
-Extremes rail_extremes(const PeriodMap& map) {
-  TonePhase phase(map.walker().network().source.waveform);
-  Extremes rail;
-  for (const auto& segment : map.segments()) {
-    include_extremes(segment, segment.mode->rail, segment.mode->rail_forced, phase, rail);
-  }
-  return rail;
-}
-
 }  // namespace dropfront::circuit

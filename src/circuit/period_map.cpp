@@ -16,7 +16,13 @@ PeriodMap::PeriodMap(Network network)
 
 bool PeriodMap::apply(const StateVector& x, StateVector& mapped, SmallMatrix* jacobian) {
   mapped = x;
-  if (!walker_.walk(0, span_s_, mapped, segments_)) return false;
+  const double from_s = walker_.network().period_start_s;
+  walker_.set_latched(0);
+  if (!walker_.walk(from_s, from_s + span_s_, mapped, segments_)) return false;
+  if (walker_.latched() != 0) {
+    walker_.fail("a thyristor does not drop out");
+    return false;
+  }
   raw_end_ = mapped;
   if (jacobian) *jacobian = walker_.sensitivity(segments_);
   if (!halved_) return true;
@@ -26,6 +32,14 @@ bool PeriodMap::apply(const StateVector& x, StateVector& mapped, SmallMatrix* ja
     if (!jacobian) continue;
     for (int k = 0; k < states(); ++k) (*jacobian)[i][k] *= signs[i];
   }
+  return true;
+}
+
+bool PeriodMap::advance(StateVector& x) {
+  const double from_s = walker_.network().period_start_s;
+  if (!walker_.walk(from_s, from_s + walker_.network().source.waveform.period_s(), x, segments_))
+    return false;
+  raw_end_ = x;
   return true;
 }
 

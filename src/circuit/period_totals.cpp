@@ -49,7 +49,7 @@ Coefficients expand(const Segment& segment, const Basis& basis, const ModalRow& 
   return c;
 }
 
-/// Integral of s^k·e^(l·s) from 0 to `length`, l <= 0, k <= 2. By its series where closed forms would cancel.
+/// Integral of s^k·e^(l·s) from 0 to `length`, k <= 2. By its series where closed forms would cancel.
 double power_exponential(int k, double l, double length) {
   const double x = l * length;
   if (std::abs(x) < 1) {
@@ -175,6 +175,26 @@ double mean_of(const Gram& gram, int size, const Coefficients& a) {
   return total;
 }
 
+/// Current of a branch, load or latched thyristor as conductance·v + constant.
+struct Affine {
+  double conductance_S = 0, constant_A = 0;
+};
+Affine law_of(const Network& network, std::size_t element, bool set) {
+  std::size_t k = element - network.resistors.size();
+  if (k < network.branches.size()) {
+    const auto& branch = network.branches[k];
+    return {1 / branch.slope_ohm, -branch.threshold_V / branch.slope_ohm};
+  }
+  k -= network.branches.size();
+  if (k < network.loads.size()) {
+    const auto& load = network.loads[k];
+    if (!set) return {load.current_A / load.cutoff_V, 0};
+    return {load.slope_S, load.current_A - load.slope_S * load.cutoff_V};
+  }
+  const auto& thyristor = network.thyristors[k - network.loads.size()];
+  return {1 / thyristor.slope_ohm, -thyristor.on_voltage_V / thyristor.slope_ohm};
+}
+
 }  // namespace
 
 double WalkTotals::dissipated_J() const { return std::accumulate(element_J.begin(), element_J.end(), 0.0); }
@@ -185,10 +205,12 @@ WalkTotals integrate(const Walker& walker, const std::vector<Segment>& segments)
   const std::size_t resistors = network.resistors.size();
   const std::size_t branches = network.branches.size();
   WalkTotals totals;
-  totals.element_J.assign(resistors + branches + network.loads.size(), 0);
+  const std::size_t loads = network.loads.size();
+  totals.element_J.assign(resistors + branches + loads + network.thyristors.size(), 0);
   totals.element_As.assign(totals.element_J.size(), 0);
   totals.capacitor_A2s.assign(network.capacitors.size(), 0);
-  const Basis basis{walker.topology().states, static_cast<int>(mains.tones().size())};
+  const Basis basis{walker.topology().states + static_cast<int>(mains.exponentials().size()),
+                    static_cast<int>(mains.tones().size())};
   const int size = basis.size();
   Gram gram;
   for (const auto& segment : segments) {
@@ -202,25 +224,21 @@ WalkTotals integrate(const Walker& walker, const std::vector<Segment>& segments)
     totals.duration_s += segment.length_s;
     totals.rail_Vs += mean_of(gram, size, expand(segment, basis, mode.rail, mode.rail_forced));
     for (std::size_t e = 0; e < totals.element_J.size(); ++e) {
-      if (e >= resistors && e < resistors + branches && !((mode.mask >> (e - resistors)) & 1u)) continue;
+      const bool set = e >= resistors && ((mode.mask >> (e - resistors)) & 1u);
+      const bool is_load = e >= resistors + branches && e < resistors + branches + loads;
+      if (e >= resistors && !is_load && !set) continue;
       Coefficients v = expand_row(mode.element_V[e]);
       if (e < resistors) {
         const double g = 1 / network.resistors[e].resistance_ohm;
         totals.element_J[e] += g * product(gram, size, v, v);
         totals.element_As[e] += g * mean_of(gram, size, v);
-      } else if (e < resistors + branches) {
-        const auto& branch = network.branches[e - resistors];
-        Coefficients over = v;
-        over[basis.one()] -= branch.threshold_V;
-        totals.element_J[e] += product(gram, size, v, over) / branch.slope_ohm;
-        totals.element_As[e] += mean_of(gram, size, over) / branch.slope_ohm;
       } else {
-        const auto& load = network.loads[e - resistors - branches];
-        const bool above = (mode.mask >> (e - resistors)) & 1u;
-        const double g = load.current_A / load.cutoff_V;
-        totals.element_J[e] +=
-            above ? load.current_A * mean_of(gram, size, v) : g * product(gram, size, v, v);
-        totals.element_As[e] += above ? load.current_A * segment.length_s : g * mean_of(gram, size, v);
+        const Affine law = law_of(network, e, set);
+        Coefficients current = v;
+        for (int i = 0; i < size; ++i) current[i] *= law.conductance_S;
+        current[basis.one()] += law.constant_A;
+        totals.element_J[e] += product(gram, size, v, current);
+        totals.element_As[e] += mean_of(gram, size, current);
       }
     }
     for (std::size_t k = 0; k < network.capacitors.size(); ++k) {
@@ -228,15 +246,7 @@ WalkTotals integrate(const Walker& walker, const std::vector<Segment>& segments)
       totals.capacitor_A2s[k] += product(gram, size, i, i);
     }
     const Coefficients line_A = expand_row(to_modal_row(mode, mode.source_A));
-    ModalRow source_row;
-    source_row.u = 1;
-    ForcedRow source_forced;  // the mains itself: no modes, no constant
-    for (int h = 0; h < basis.tones; ++h) {
-      const auto& tone = mains.tones()[h];
-      source_forced.cosine[h] = tone.amplitude_V * std::sin(tone.phase_rad);
-      source_forced.sine[h] = tone.amplitude_V * std::cos(tone.phase_rad);
-    }
-    const Coefficients line_V = expand(segment, basis, source_row, source_forced);
+    const Coefficients line_V = expand_row(source_row(mode));
     totals.input_J += product(gram, size, line_A, line_V);
     totals.input_A2s += product(gram, size, line_A, line_A);
   }

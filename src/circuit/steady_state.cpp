@@ -3,8 +3,9 @@
 #include <algorithm>
 #include <cmath>
 
-#include "dropfront/circuit/orbit.hpp"
 #include "dropfront/circuit/period_totals.hpp"
+#include "dropfront/circuit/settle.hpp"
+#include "dropfront/circuit/thyristor_figures.hpp"
 
 namespace dropfront::circuit {
 
@@ -20,7 +21,8 @@ bool fail(SteadyState& answer, std::string reason) {
 }
 
 /// Greatest current of each branch, and its mean, with the mirrored half period folded in.
-void collect_branches(PeriodMap& map, const WalkTotals& totals, bool peaks, SteadyState& answer) {
+void collect_branches(const PeriodMap& map, const Settled& settled, const WalkTotals& totals, bool peaks,
+                      SteadyState& answer) {
   const auto& network = map.walker().network();
   const auto& mains = network.source.waveform;
   const std::size_t resistors = network.resistors.size();
@@ -30,7 +32,7 @@ void collect_branches(PeriodMap& map, const WalkTotals& totals, bool peaks, Stea
   for (std::size_t b = 0; b < network.branches.size(); ++b) {
     mean[b] = totals.element_As[resistors + b] / totals.duration_s;
     if (!peaks) continue;
-    for (const auto& segment : map.segments()) {
+    for (const auto& segment : settled.segments) {
       if (!((segment.mode->mask >> b) & 1u)) continue;
       Extremes over;
       include_extremes(segment, segment.mode->guard[b], segment.mode->guard_forced[b], phase, over);
@@ -39,7 +41,7 @@ void collect_branches(PeriodMap& map, const WalkTotals& totals, bool peaks, Stea
   }
   answer.branch_peak_A = peak;
   answer.branch_mean_A = mean;
-  if (!map.halved()) return;
+  if (!map.halved() || settled.alternating) return;
   for (std::size_t b = 0; b < peak.size(); ++b) {
     const auto partner = static_cast<std::size_t>(network.half_period_partner[b]);
     answer.branch_peak_A[b] = std::max(peak[b], peak[partner]);
@@ -47,9 +49,9 @@ void collect_branches(PeriodMap& map, const WalkTotals& totals, bool peaks, Stea
   }
 }
 
-bool collect_powers(PeriodMap& map, const StateVector& end, bool peaks, SteadyState& answer) {
+bool collect_powers(const PeriodMap& map, const Settled& settled, bool peaks, SteadyState& answer) {
   const auto& network = map.walker().network();
-  const WalkTotals totals = integrate(map.walker(), map.segments());
+  const WalkTotals totals = integrate(map.walker(), settled.segments);
   const double duration_s = totals.duration_s;
   answer.rail_mean_V = totals.rail_Vs / duration_s;
   answer.input_power_W = totals.input_J / duration_s;
@@ -61,14 +63,19 @@ bool collect_powers(PeriodMap& map, const StateVector& end, bool peaks, SteadySt
   for (const auto& r : network.resistors) add(r.owner);
   for (const auto& d : network.branches) add(d.owner);
   for (std::size_t k = 0; k < network.loads.size(); ++k) add(Owner::load);
+  for (std::size_t k = 0; k < network.thyristors.size(); ++k) add(Owner::thyristor);
   for (const double a2s : totals.capacitor_A2s) {
     answer.capacitor_current_Arms.push_back(std::sqrt(std::max(0.0, a2s / duration_s)));
   }
-  const double stored = stored_J(network, end) - stored_J(network, answer.start);
+  const double stored = stored_J(network, settled.end) - stored_J(network, settled.start);
   answer.energy_residual =
       std::abs(totals.input_J - totals.dissipated_J() - stored) / std::max(std::abs(totals.input_J), 1e-12);
   if (!(answer.energy_residual <= kEnergyLaw)) return fail(answer, "the energy law does not close");
-  collect_branches(map, totals, peaks, answer);
+  collect_branches(map, settled, totals, peaks, answer);
+  const ThyristorFigures figures = thyristor_figures(map.walker(), settled.segments, totals);
+  answer.thyristor_peak_A = figures.peak_A;
+  answer.thyristor_mean_A = figures.mean_A;
+  answer.thyristor_turn_off_s = figures.turn_off_s;
   return true;
 }
 
@@ -85,25 +92,20 @@ SteadyState solve_steady_state(const Network& network, const SteadyOptions& opti
   for (std::size_t k = 0; k < network.capacitors.size(); ++k) {
     answer.start[k] = guess ? (*guess)[k] : network.capacitors[k].start_V;
   }
-  const Orbit orbit = find_orbit(map, answer.start, options);
-  answer.passes = orbit.passes;
-  if (!orbit.found) {
-    fail(answer, orbit.reason);
+  const Settled settled = settle(map, answer.start, options);
+  answer.passes = settled.passes;
+  answer.greatest_multiplier = settled.greatest_multiplier;
+  if (!settled.found) {
+    fail(answer, settled.reason);
     return answer;
   }
-  answer.start = orbit.start;
-  if (options.multipliers) {
-    answer.greatest_multiplier = map.greatest_multiplier(orbit.jacobian);
-    if (!(answer.greatest_multiplier < 1)) {
-      fail(answer, "the periodic solution is not stable");
-      return answer;
-    }
-  }
-  const Extremes rail = rail_extremes(map);
+  answer.start = settled.start;
+  const Extremes rail = rail_extremes(map.walker(), settled.segments);
   answer.rail_min_V = rail.low;
   answer.rail_max_V = rail.high;
-  if (options.powers && !collect_powers(map, map.raw_end(), options.peaks, answer)) return answer;
-  answer.status = SteadyStatus::converged;
+  if (options.powers && !collect_powers(map, settled, options.peaks, answer)) return answer;
+  answer.reason = settled.reason;
+  answer.status = settled.alternating ? SteadyStatus::alternating : SteadyStatus::converged;
   return answer;
 }
 

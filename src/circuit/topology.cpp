@@ -87,9 +87,10 @@ Topology::Element both_legs(const Forest& forest, const BranchElement& branch) {
 }
 
 std::string unusable(const Network& network) {
-  if (network.capacitors.size() > kMaxStates) return "more than four capacitors";
-  const auto count = network.resistors.size() + network.branches.size() + network.loads.size();
-  if (count > kMaxElements || network.branches.size() + network.loads.size() > 31) {
+  const auto exponentials = network.source.waveform.exponentials().size();
+  if (network.capacitors.size() + exponentials > kMaxStates) return "more capacitors than the solver holds";
+  const auto bits = network.branches.size() + network.loads.size() + network.thyristors.size();
+  if (network.resistors.size() + bits > kMaxElements || bits > 31) {
     return "more elements than the solver holds";
   }
   for (const auto& c : network.capacitors) {
@@ -104,8 +105,18 @@ std::string unusable(const Network& network) {
   for (const auto& load : network.loads) {
     if (!(load.current_A >= 0) || !(load.cutoff_V > 0)) return "a load without a current or a cut-off";
   }
+  for (const auto& t : network.thyristors) {
+    if (!(t.slope_ohm > 0) || !(t.on_voltage_V >= 0) || !(t.holding_A > 0) || !(t.trigger_A > 0)) {
+      return "a thyristor without slope, holding or trigger current";
+    }
+    const auto gates = static_cast<int>(network.resistors.size());
+    const auto feeds = static_cast<int>(network.branches.size());
+    if (t.gate_resistor < 0 || t.gate_resistor >= gates || t.feed_branch < 0 || t.feed_branch >= feeds) {
+      return "a thyristor without gate or feed";
+    }
+  }
   if (network.source.waveform.tones().size() > kMostTones) return "more than 23 harmonics";
-  if (!(network.source.waveform.voltage_Vrms() > 0) || !(network.source.waveform.frequency_Hz() > 0)) {
+  if (!(network.source.waveform.voltage_Vrms() >= 0) || !(network.source.waveform.frequency_Hz() > 0)) {
     return "mains without voltage or frequency";
   }
   return {};
@@ -126,6 +137,7 @@ Topology analyse(const Network& network) {
   for (const auto& r : network.resistors) topology.elements.push_back(between(forest, r.a, r.b));
   for (const auto& d : network.branches) topology.elements.push_back(both_legs(forest, d));
   for (const auto& load : network.loads) topology.elements.push_back(between(forest, load.a, load.b));
+  for (const auto& t : network.thyristors) topology.elements.push_back(between(forest, t.a, t.b));
   topology.rail = between(forest, network.rail, network.rail_return);
   return topology;
 }

@@ -39,6 +39,13 @@ double next_sample(const Segment& segment, double s, double period_s) {
   return std::min(s + step, segment.length_s);
 }
 
+Owner owner_of(const Network& network, std::size_t element) {
+  if (element < network.resistors.size()) return network.resistors[element].owner;
+  element -= network.resistors.size();
+  if (element < network.branches.size()) return network.branches[element].owner;
+  return element - network.branches.size() < network.loads.size() ? Owner::load : Owner::thyristor;
+}
+
 void observe(const Walker& walker, const std::vector<Segment>& segments, const TransientOptions& options) {
   const auto& network = walker.network();
   const auto& mains = network.source.waveform;
@@ -110,9 +117,7 @@ Transient run_transient(const Network& network, const StateVector& start, const 
   const WalkTotals totals = integrate(walker, segments);
   const std::size_t resistors = network.resistors.size();
   for (std::size_t e = 0; e < totals.element_J.size(); ++e) {
-    const Owner owner = e < resistors                             ? network.resistors[e].owner
-                        : e < resistors + network.branches.size() ? network.branches[e - resistors].owner
-                                                                  : Owner::load;
+    const Owner owner = owner_of(network, e);
     run.loss_J[static_cast<std::size_t>(owner)] += totals.element_J[e];
   }
   const auto branches_from = totals.element_J.begin() + static_cast<std::ptrdiff_t>(resistors);

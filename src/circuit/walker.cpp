@@ -34,7 +34,9 @@ double Walker::worst_violation_V(const ConductionMode& candidate, double time_s,
   const ModalMoment moment = modal_moment(segment, 0);
   double worst = 0;
   bit = -1;
-  for (std::size_t b = 0; b < candidate.guard.size(); ++b) {
+  // Thyristors remember: their bits are given, not found.
+  const std::size_t free_bits = candidate.guard.size() - network_.thyristors.size();
+  for (std::size_t b = 0; b < free_bits; ++b) {
     const double side = ((candidate.mask >> b) & 1u) ? 1 : -1;
     const double h = side * value_at(candidate.guard[b], candidate.guard_forced[b], moment, phase_);
     if (-h > worst) {
@@ -58,7 +60,9 @@ bool Walker::find_mode(double time_s, const StateVector& x, ConductionMask& mask
   if (bits > 14) return false;
   double least = INFINITY;
   ConductionMask best = 0;
-  for (ConductionMask trial = 0; trial < (1u << bits); ++trial) {
+  const ConductionMask latched = mask & thyristor_bits();
+  for (ConductionMask free = 0; free < (1u << bits); ++free) {
+    const ConductionMask trial = free | latched;
     const ConductionMode candidate = derive_mode(network_, topology_, trial);
     if (!candidate.solvable) continue;
     const double violation = worst_violation_V(candidate, time_s, x, bit);
@@ -75,7 +79,8 @@ bool Walker::walk(double from_s, double to_s, StateVector& x, std::vector<Segmen
   segments.clear();
   if (!fault_.empty()) return false;
   const double resolution_s = kResolution * network_.source.waveform.period_s();
-  ConductionMask mask = last_start_;
+  const ConductionMask memory = thyristor_bits();
+  ConductionMask mask = (last_start_ & ~memory) | latched_;
   if (!find_mode(from_s, x, mask)) {
     fault_ = "no conduction mode fits the start";
     return false;
@@ -117,8 +122,15 @@ bool Walker::walk(double from_s, double to_s, StateVector& x, std::vector<Segmen
     }
     if (!crossing) break;
     time_s += crossing->s;
-    if (crossing->bit >= 0) mask ^= 1u << crossing->bit;
+    if (crossing->bit < 0) continue;
+    mask ^= 1u << crossing->bit;
+    // A thyristor moves node voltages at once: the branches follow.
+    if (((1u << crossing->bit) & memory) && !find_mode(time_s, x, mask)) {
+      fault_ = "no conduction mode fits a thyristor's change";
+      return false;
+    }
   }
+  latched_ = mask & memory;
   return std::all_of(x.begin(), x.end(), [](double v) { return std::isfinite(v); });
 }
 
@@ -126,8 +138,74 @@ SmallMatrix Walker::sensitivity(const std::vector<Segment>& segments) const {
   SmallMatrix total{};
   StateVector by_load{};
   for (int i = 0; i < topology_.states; ++i) total[i][i] = 1;
-  for (const auto& segment : segments) carry(segment, segment.length_s, total, by_load);
+  for (std::size_t k = 0; k < segments.size(); ++k) {
+    carry(segments[k], segments[k].length_s, total, by_load);
+    if (k + 1 < segments.size()) cross(segments[k], segments[k + 1], total, by_load);
+  }
   return total;
+}
+
+ConductionMask Walker::thyristor_bits() const {
+  const auto first = network_.branches.size() + network_.loads.size();
+  return ((1u << network_.thyristors.size()) - 1u) << first;
+}
+
+bool Walker::crossed_guard(const Segment& before, const Segment& after, GuardRows& rows) const {
+  ConductionMask flipped = before.mode->mask ^ after.mode->mask;
+  if (!flipped) return false;
+  if (flipped & thyristor_bits()) flipped &= thyristor_bits();
+  int bit = 0;
+  while (!((flipped >> bit) & 1u)) ++bit;
+  const auto& mode = *before.mode;
+  rows = {&mode.guard[bit], &mode.guard_forced[bit]};
+  const auto first = mode.guard.size() - mode.arming.size();
+  if (static_cast<std::size_t>(bit) < first || ((mode.mask >> bit) & 1u)) return true;
+  // Of the two conditions to fire, the one that was met last is the one near zero.
+  const auto t = static_cast<std::size_t>(bit) - first;
+  TonePhase phase = phase_;
+  phase.set(before.start_s + before.length_s);
+  const ModalMoment moment = modal_moment(before, before.length_s);
+  const double gate = value_at(*rows.row, *rows.forced, moment, phase);
+  const double arm = value_at(mode.arming[t], mode.arming_forced[t], moment, phase);
+  if (arm < gate) rows = {&mode.arming[t], &mode.arming_forced[t]};
+  return true;
+}
+
+void Walker::cross(const Segment& before, const Segment& after, SmallMatrix& by_start,
+                   StateVector& by_load) const {
+  if (((before.mode->mask ^ after.mode->mask) & thyristor_bits()) == 0) return;
+  GuardRows guard;
+  if (!crossed_guard(before, after, guard)) return;
+  const int n = topology_.states;
+  const double time_s = after.start_s;
+  TonePhase phase = phase_;
+  const StateVector x = state_at(before, before.length_s, phase);
+  const double u = network_.source.waveform.value_V(time_s);
+  StateVector jump{};
+  for (int i = 0; i < n; ++i) {
+    const Row& old = before.mode->capacitor_A[i];
+    const Row& now = after.mode->capacitor_A[i];
+    double more_A = (now[kSource] - old[kSource]) * u + now[kOne] - old[kOne];
+    for (int k = 0; k < n; ++k) more_A += (now[k] - old[k]) * x[k];
+    jump[i] = more_A / network_.capacitors[i].capacitance_F;
+  }
+  phase.set(time_s);
+  const double rate = slope_at(*guard.row, *guard.forced, modal_moment(before, before.length_s), phase);
+  if (!(std::abs(rate) > 1e-6)) return;
+  StateVector by_state{};
+  for (int i = 0; i < n; ++i) {
+    for (int k = 0; k < n; ++k) by_state[i] += guard.row->z[k] * before.mode->to_modal[k][i];
+  }
+  double shift_by_load = guard.row->per_A;
+  StateVector shift_by_start{};
+  for (int i = 0; i < n; ++i) {
+    shift_by_load += by_state[i] * by_load[i];
+    for (int c = 0; c < n; ++c) shift_by_start[c] += by_state[i] * by_start[i][c];
+  }
+  for (int i = 0; i < n; ++i) {
+    by_load[i] += jump[i] * shift_by_load / rate;
+    for (int c = 0; c < n; ++c) by_start[i][c] += jump[i] * shift_by_start[c] / rate;
+  }
 }
 
 void Walker::carry(const Segment& segment, double length_s, SmallMatrix& by_start,

@@ -79,8 +79,21 @@ Waveform::Waveform(double total_voltage_Vrms, double frequency_Hz, std::vector<H
 }
 
 double Waveform::omega() const { return kTwoPi * frequency_Hz_; }
-double Waveform::value_V(double time_s) const { return tone_sum(tones_, omega() * time_s); }
+double Waveform::value_V(double time_s) const {
+  double v = tone_sum(tones_, omega() * time_s);
+  for (const auto& e : exponentials_) {
+    if (time_s >= pulse_start_s_) v += e.amplitude_V * std::exp(-e.rate_per_s * (time_s - pulse_start_s_));
+  }
+  return v;
+}
 double Waveform::slope_V_per_s(double time_s) const { return omega() * tone_slope(tones_, omega() * time_s); }
+
+Waveform Waveform::with_pulse(double start_s, double amplitude_V, double front_s, double tail_s) const {
+  Waveform sum = *this;
+  sum.pulse_start_s_ = start_s;
+  sum.exponentials_ = {{amplitude_V, 1 / tail_s}, {-amplitude_V, 1 / tail_s + 1 / front_s}};
+  return sum;
+}
 
 bool Waveform::odd_only() const {
   return std::all_of(tones_.begin(), tones_.end(), [](const Tone& t) { return t.order % 2 == 1; });

@@ -118,11 +118,35 @@ void write_loads(Deck& deck, const std::vector<circuit::LoadElement>& loads) {
     ++number;
     const std::string a = node(load.a), b = node(load.b), v = across(load.a, load.b);
     deck.line("* load: constant current, falling in proportion to the voltage below the cut-off");
+    if (load.slope_S != 0) deck.line("* its first chord alone is written here: {} S", load.slope_S);
     if (!(load.cutoff_V > 0))
       deck.line("IL{} {} {} DC {}", number, a, b, load.current_A);
     else
       deck.line("BL{} {} {} I={}*({}-uramp({}-{}))/{}", number, a, b, load.current_A, v, v, load.cutoff_V,
                 load.cutoff_V);
+  }
+}
+
+/// A latch on a one-nanofarad memory node (1 us): it fires and drops out by the currents it is rated by.
+void write_thyristors(Deck& deck, const circuit::Network& network) {
+  for (std::size_t i = 0; i < network.thyristors.size(); ++i) {
+    const auto& t = network.thyristors[i];
+    const auto& gate = network.resistors[static_cast<std::size_t>(t.gate_resistor)];
+    const std::size_t n = i + 1;
+    const std::string on_A = fmt::format("uramp({}-({}))/{}", across(t.a, t.b), t.on_voltage_V, t.slope_ohm);
+    const std::string gate_A = fmt::format("{}/{}", across(gate.a, gate.b), gate.resistance_ohm);
+    deck.line("* thyristor: on {} V, {} ohm; fires at {} A of gate current, holds above {} A", t.on_voltage_V,
+              t.slope_ohm, t.trigger_A, t.holding_A);
+    const auto step = [](const std::string& value, double at) {  // soft over a fiftieth of the threshold
+      return fmt::format("(0.5+0.5*tanh(({}-{})/{}))", value, at, 0.02 * at);
+    };
+    const std::string q = fmt::format("V(latch{})", n);
+    deck.line("BY{} {} {} I={}*{}", n, node(t.a), node(t.b), q, on_A);
+    deck.line("CZ{} {} {} 20p", n, node(t.a), node(t.b));
+    deck.line("CY{} latch{} 0 1n IC=0", n, n);
+    // Its own current holds it, the gate's starts it: either fills the memory.
+    deck.line("BZ{} 0 latch{} I=1m*(1-(1-{})*(1-{})-{})", n, n,
+              step(fmt::format("{}*{}", q, on_A), t.holding_A), step(gate_A, t.trigger_A), q);
   }
 }
 
@@ -214,6 +238,7 @@ std::string make_deck(const circuit::Network& network, const std::string& title,
   write_passives(deck, network, options.initial_V);
   write_branches(deck, network.branches, options.branches);
   write_loads(deck, network.loads);
+  write_thyristors(deck, network);
   write_probes(deck, network, options);
   write_run(deck, network, options);
   return deck.take();

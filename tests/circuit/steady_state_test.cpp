@@ -45,17 +45,24 @@ TEST_CASE("Everything scales: n-fold capacitances and currents, resistances by n
     v.reservoir_esr_ohm /= n;
     v.rectifier.slope_ohm /= n;
     v.clamp.main.slope_ohm /= n;
+    v.gate_resistor_ohm /= n;
+    v.thyristor.slope_ohm /= n;
+    v.thyristor_trigger_A *= n;
+    v.thyristor_holding_A *= n;
     const SteadyState three = solve_steady_state(arrangement.build(v));
     INFO(arrangement.name);
-    // Impedance scaling is exact but for the bridge's 1 Gohm leak, which does not scale.
-    REQUIRE_THAT(three.rail_min_V, WithinAbs(one.rail_min_V, 1e-6));
-    REQUIRE_THAT(three.input_power_W, WithinRel(n * one.input_power_W, 1e-6));
+    // Impedance scaling is exact but for the bridge's 1 Gohm leak, which does not scale; behind a bridge the
+    // shunt's own is 2 Mohm: 6 of 5,000 microamperes of load.
+    const double share = arrangement.thyristor_shunt ? 1e-4 : 1e-6;
+    REQUIRE_THAT(three.rail_min_V, WithinAbs(one.rail_min_V, share));
+    REQUIRE_THAT(three.input_power_W, WithinRel(n * one.input_power_W, share));
   }
 }
 
 TEST_CASE("More load never raises the half-wave rail minimum") {
   for (const auto& arrangement : arrangements()) {
-    if (arrangement.full_wave) continue;
+    // A shunt fires at another moment with another load, and where it alternates the rail jumps about.
+    if (arrangement.full_wave || arrangement.thyristor_shunt) continue;
     double previous = INFINITY;
     for (int k = 0; k <= 30; ++k) {
       ElementValues v = ordinary_values();

@@ -19,6 +19,10 @@ inline ElementValues ordinary_values() {
   v.clamp.main = {12 - 9 * 0.021, 9};
   v.reservoir_F = 220e-6;
   v.reservoir_esr_ohm = 0.8;
+  v.thyristor = {0.9, 0.1};
+  v.thyristor_holding_A = 5e-3;
+  v.thyristor_trigger_A = 0.2e-3;
+  v.gate_resistor_ohm = 1000;
   v.rail_current_A = 5e-3;
   v.load_cutoff_V = 4;
   return v;

@@ -30,6 +30,7 @@ TEST_CASE("A run that starts on the periodic orbit stays on it") {
     const Network network = arrangement.build(v);
     const SteadyState state = solve_steady_state(network);
     TransientOptions options;
+    options.start_time_s = network.period_start_s;
     options.duration_s = 5 * v.mains.period_s();
     const auto run = run_transient(network, state.start, options);
     REQUIRE(run.usable);

@@ -26,6 +26,10 @@ ElementValues ordinary(double line_Vrms, double frequency_Hz, double dropper_F, 
   v.clamp.main = Curve{11.2, 9.0};
   v.reservoir_F = 220e-6;
   v.reservoir_esr_ohm = 0.8;
+  v.thyristor = {0.9, 0.1};
+  v.thyristor_holding_A = 5e-3;
+  v.thyristor_trigger_A = 0.2e-3;
+  v.gate_resistor_ohm = 1000;
   v.load_cutoff_V = 4.0;
   return v;
 }

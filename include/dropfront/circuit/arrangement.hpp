@@ -15,6 +15,7 @@ struct Arrangement {
   int clamp_count = 1;
   int rectifier_count = 1;
   Network (*build)(const ElementValues&) = nullptr;
+  bool thyristor_shunt = false;  ///< needs thyristor and gate resistor; the clamp is the trigger zener
 };
 
 /// All arrangements in their fixed order; a design names one by its address.

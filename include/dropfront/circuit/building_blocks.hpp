@@ -26,6 +26,20 @@ BridgeNodes add_bridge(Network& network, Node line_side, const ElementValues& va
 /// Reservoir with its ESR and the load, and names them the rail.
 void add_rail(Network& network, Node positive, Node negative, const ElementValues& values);
 
+/// Off-state leakage of a shunt behind a bridge, a few microamperes (from memory). It also fixes the
+/// potential of the bridge's output while nothing conducts: much less would let diodes conduct picoamperes,
+/// where a change of state drowns in rounding.
+inline constexpr double kShuntLeak_ohm = 2e6;
+
+/// Shunt thyristor from `anode` to `cathode`, fired from the rail (positive to negative) through gate
+/// resistor and trigger zener. `feed_branch` is the blocking diode, already in the network.
+inline constexpr double kGateVoltage_V = 0.7;  ///< gate to cathode as it fires (from memory)
+void add_shunt(Network& network, Node anode, Node cathode, Node positive, Node negative, int feed_branch,
+               const ElementValues& values);
+
+/// Rail voltage at which the shunt fires.
+double firing_rail_V(const ElementValues& values);
+
 /// Analytic cold start at mains phase zero (v = 0, rising, dropper current at its crest): the rail at its
 /// clamp, the dropper carrying what is left. `drop_V` is what stands between dropper node and rail.
 void set_start(Network& network, const ElementValues& values, double rail_V, double drop_V);

@@ -27,8 +27,13 @@ struct ElementValues {
   double discharge_ohm = std::numeric_limits<double>::infinity();  ///< whole chain; infinite: none
   Curve rectifier;                                                 ///< also the zener's forward direction
   ClampCurve clamp;
+  Curve thyristor;  ///< while latched (shunt arrangements only)
+  double thyristor_holding_A = 0;
+  double thyristor_trigger_A = 0;  ///< gate current at which it fires
+  double gate_resistor_ohm = 0;
   double reservoir_F = 0;
   double reservoir_esr_ohm = 0;
+  double ceramic_F = 0;       ///< beside the reservoir; 0: none
   double rail_current_A = 0;  ///< constant-current load on the rail, leakage and Iq included
   double load_cutoff_V = 0;   ///< the load falls off linearly below this rail voltage
 };

@@ -21,7 +21,4 @@ struct Orbit {
 /// map.segments() is the orbit.
 Orbit find_orbit(PeriodMap& map, const StateVector& start, const SteadyOptions& options);
 
-/// Extremes of the rail along map.segments().
-Extremes rail_extremes(const PeriodMap& map);
-
 }  // namespace dropfront::circuit

@@ -6,14 +6,15 @@
 
 namespace dropfront::circuit {
 
-/// The map from the capacitor voltages at mains phase zero to those one period later; with the network's
-/// half-period symmetry, to those half a period later with the signs turned back.
+/// The map from the capacitor voltages at the network's period_start_s to those one period later; with the
+/// network's half-period symmetry, to those half a period later with the signs turned back.
 class PeriodMap {
  public:
   explicit PeriodMap(Network network);
 
   const std::string& fault() const { return walker_.fault(); }
   const Walker& walker() const { return walker_; }
+  void forget_fault() { walker_.fail({}); }
   void set_load(double current_A) { walker_.set_load(current_A); }
   int states() const { return walker_.topology().states; }
   bool halved() const { return halved_; }
@@ -22,6 +23,8 @@ class PeriodMap {
 
   /// mapped = map(x); `jacobian`, if wanted, is its derivative. False: see fault().
   bool apply(const StateVector& x, StateVector& mapped, SmallMatrix* jacobian);
+  /// One whole period on from `x`, thyristors latched or not as the last one left them; segments() follow.
+  bool advance(StateVector& x);
   /// step with (1 - J)·step = mapped - x; false where 1 - J is singular.
   bool newton_step(const StateVector& x, const StateVector& mapped, const SmallMatrix& jacobian,
                    StateVector& step) const;

@@ -7,7 +7,7 @@
 
 namespace dropfront::circuit {
 
-inline constexpr int kMaxStates = 4;
+inline constexpr int kMaxStates = 5;  ///< capacitors, and the two exponentials of a surge
 using StateVector = std::array<double, kMaxStates>;
 
 enum class SteadyStatus { converged, alternating, failed };
@@ -24,7 +24,7 @@ struct SteadyOptions {
 struct SteadyState {
   SteadyStatus status = SteadyStatus::failed;
   std::string reason;   ///< why it failed or what was noticed; empty when all is well
-  StateVector start{};  ///< capacitor voltages at mains phase zero
+  StateVector start{};  ///< capacitor voltages at the network's period_start_s
   double rail_min_V = 0;
   double rail_max_V = 0;
   double rail_mean_V = 0;
@@ -34,8 +34,11 @@ struct SteadyState {
   std::vector<double> capacitor_current_Arms;                   ///< one a capacitor of the network
   std::vector<double> branch_peak_A;                            ///< one a branch of the network
   std::vector<double> branch_mean_A;
-  double energy_residual = 0;      ///< |in - dissipated - stored change| / in over the period
-  double greatest_multiplier = 0;  ///< |eigenvalue| of the one-period Jacobian
+  std::vector<double> thyristor_peak_A;  ///< one a thyristor: the spike as it fires
+  std::vector<double> thyristor_mean_A;
+  std::vector<double> thyristor_turn_off_s;  ///< least time from dropping out to forward voltage again
+  double energy_residual = 0;                ///< |in - dissipated - stored change| / in over the period
+  double greatest_multiplier = 0;            ///< |eigenvalue| of the one-period Jacobian
   int passes = 0;
 
   bool usable() const { return status != SteadyStatus::failed; }
@@ -43,7 +46,9 @@ struct SteadyState {
 };
 
 /// Solves for the periodic steady state. Never throws, never returns NaN in a usable result.
-/// `guess` is a start state (capacitor voltages at mains phase zero) or null for the analytic cold start.
+/// `guess` is a start state (capacitor voltages at period_start_s) or null for the analytic cold start.
+/// Status alternating (thyristors only): the period's own orbit repels; 64 periods were marched and the
+/// figures are those of the last 32, the rail's extremes the worst of them.
 SteadyState solve_steady_state(const Network& network, const SteadyOptions& options = {},
                                const StateVector* guess = nullptr);
 

@@ -9,11 +9,12 @@
 
 namespace dropfront::circuit {
 
-/// Which branches conduct (one bit each, network order), then which loads stand above their cut-off.
+/// Which branches conduct (one bit each, network order), then which loads stand above their cut-off, then
+/// which thyristors are latched.
 using ConductionMask = std::uint32_t;
 
 inline constexpr int kMaxRoots = 12;     ///< groups of nodes tied together by capacitors and source
-inline constexpr int kMaxElements = 32;  ///< resistors + branches + loads; branches + loads share the mask
+inline constexpr int kMaxElements = 48;  ///< all but capacitors; branches, loads, thyristors share the mask
 inline constexpr int kColumns = kMaxStates + 3;  ///< capacitor voltages, source voltage, one, per ampere
 
 /// A row affine in (x_0 .. x_{n-1}, u, 1): states in their places, u at kSource, the constant at kOne, and at
@@ -34,7 +35,7 @@ struct Topology {
   };
   int states = 0;
   int roots = 0;
-  std::vector<Element> elements;  ///< resistors, then branches, then loads
+  std::vector<Element> elements;  ///< resistors, then branches, then loads, then thyristors
   Element rail;                   ///< v(rail) - v(rail_return)
   std::string fault;              ///< empty, or why this network cannot be solved
 };

@@ -34,7 +34,17 @@ class Waveform {
   double crest_V() const { return crest_V_; }                ///< greatest |v|
   double crest_time_s() const { return crest_time_s_; }      ///< of the positive crest
   double sum_of_rises_V() const { return sum_of_rises_V_; }  ///< per period; crest to crest for a plain sine
-  bool odd_only() const;                                     ///< half-wave symmetry: v(t + T/2) = -v(t)
+  /// The same mains with a double-exponential pulse on top from `start_s` on:
+  /// amplitude_V·(1 - e^(-t/front_s))·e^(-t/tail_s). Runs only, never a steady state.
+  Waveform with_pulse(double start_s, double amplitude_V, double front_s, double tail_s) const;
+  /// The pulse as a sum of decaying exponentials amplitude·e^(-rate·(t - pulse_start_s())).
+  struct Exponential {
+    double amplitude_V;
+    double rate_per_s;
+  };
+  const std::vector<Exponential>& exponentials() const { return exponentials_; }
+  double pulse_start_s() const { return pulse_start_s_; }
+  bool odd_only() const;  ///< half-wave symmetry: v(t + T/2) = -v(t)
 
  private:
   double voltage_Vrms_ = 0;
@@ -43,6 +53,8 @@ class Waveform {
   double crest_V_ = 0;
   double crest_time_s_ = 0;
   double sum_of_rises_V_ = 0;
+  std::vector<Exponential> exponentials_;
+  double pulse_start_s_ = 0;
 };
 
 }  // namespace dropfront::circuit

@@ -15,5 +15,9 @@ Network build_half_wave_clamp_across(const ElementValues& values);
 Network build_bridge_clamp_across(const ElementValues& values);
 /// Two zeners back to back ahead of the bridge.
 Network build_bridge_clamp_ahead(const ElementValues& values);
+/// Thyristor and reset diode from the dropper node to neutral, then the series diode; the rail fires it.
+Network build_half_wave_thyristor_shunt(const ElementValues& values);
+/// Thyristor across the bridge's output, then a blocking diode; the rail fires it.
+Network build_bridge_thyristor_shunt(const ElementValues& values);
 
 }  // namespace dropfront::circuit
