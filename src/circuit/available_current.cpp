@@ -36,7 +36,9 @@ class LoadScan {
     Probe probe;
     SteadyOptions options;
     options.multipliers = false;
-    const Settled settled = settle(map_, guess, options);
+    // Where a thyristor's cycles end up may depend on the start: always from cold, as any other solver would.
+    const bool remembers = !map_.walker().network().thyristors.empty();
+    const Settled settled = settle(map_, remembers ? cold_ : guess, options);
     probe.usable = settled.found;
     probe.reason = settled.reason;
     if (!settled.found) return probe;

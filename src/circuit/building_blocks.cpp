@@ -1,5 +1,6 @@
 #include "dropfront/circuit/building_blocks.hpp"
 
+#include <algorithm>
 #include <cmath>
 #include <numbers>
 
@@ -8,8 +9,20 @@ namespace dropfront::circuit {
 Node add_mains_side(Network& network, const ElementValues& values) {
   const Node line = network.add_node();
   network.source = {line, values.mains};
+  Node entry = line;
+  if (values.source_ohm > 0) {
+    entry = network.add_node();
+    network.resistors.push_back({line, entry, values.source_ohm, Owner::line});
+  }
   const Node after_resistor = network.add_node();
-  network.resistors.push_back({line, after_resistor, values.series_resistor_ohm, Owner::series_resistor});
+  network.resistors.push_back({entry, after_resistor, values.series_resistor_ohm, Owner::series_resistor});
+  const Node guarded = values.varistor_before ? entry : after_resistor;
+  for (const Curve& piece : values.varistor) {
+    network.branches.push_back({guarded, 0, piece.threshold_V, piece.slope_ohm, Owner::varistor});
+  }
+  for (const Curve& piece : values.varistor) {
+    network.branches.push_back({0, guarded, piece.threshold_V, piece.slope_ohm, Owner::varistor});
+  }
   Node film = after_resistor;
   if (values.dropper_esr_ohm > 0) {
     film = network.add_node();
@@ -42,6 +55,17 @@ BridgeNodes add_bridge(Network& network, Node line_side, const ElementValues& va
   const int before = static_cast<int>(network.branches.size());
   for (int b = 0; b < before; ++b) network.half_period_partner.push_back((b + before / 2) % before);
   for (const int partner : {1, 0}) network.half_period_partner.push_back(before + partner);
+  if (values.single_diodes) {
+    network.half_period_partner.clear();
+    for (const Node a : {line_side, Node{0}}) {
+      network.branches.push_back(
+          {a, positive, values.rectifier.threshold_V, values.rectifier.slope_ohm, Owner::rectifier});
+      network.branches.push_back(
+          {negative, a, values.rectifier.threshold_V, values.rectifier.slope_ohm, Owner::rectifier});
+    }
+    network.resistors.push_back({negative, 0, kBridgeLeak_ohm, Owner::leak});
+    return {positive, negative};
+  }
   // Diodes that conduct together share their current to the last electron, so each pair is one branch.
   const double threshold_V = 2 * values.rectifier.threshold_V;
   const double slope_ohm = 2 * values.rectifier.slope_ohm;
@@ -51,6 +75,31 @@ BridgeNodes add_bridge(Network& network, Node line_side, const ElementValues& va
   if (values.mains.odd_only()) network.half_period_signs = {-1, 1};
   return {positive, negative};
 }
+
+namespace {
+
+/// P/v by chords between voltages in geometric steps: the first chord is the load's own slope, every further
+/// one a branch that opens where the chord before ends. Chords lie above the curve, by (r - 1)^2/(4·r).
+void add_power_load(Network& network, Node positive, Node negative, const ElementValues& values) {
+  constexpr int kChords = 12;
+  const double from_V = values.power_from_V;
+  const double ratio = std::pow(std::max(values.power_to_V, 1.01 * from_V) / from_V, 1.0 / kChords);
+  double low_V = from_V;
+  double slope_S = 0;
+  for (int k = 0; k <= kChords; ++k) {
+    const double high_V = low_V * ratio;
+    const double next_S = k == kChords ? 0 : -values.rail_power_W / (low_V * high_V);
+    if (k == 0) {
+      network.loads.push_back({positive, negative, values.rail_power_W / from_V, from_V, next_S});
+    } else {
+      network.branches.push_back({positive, negative, low_V, 1 / (next_S - slope_S), Owner::load});
+    }
+    slope_S = next_S;
+    low_V = high_V;
+  }
+}
+
+}  // namespace
 
 void add_rail(Network& network, Node positive, Node negative, const ElementValues& values) {
   Node plate = positive;
@@ -67,6 +116,13 @@ void add_rail(Network& network, Node positive, Node negative, const ElementValue
   }
   if (values.rail_current_A > 0) {
     network.loads.push_back({positive, negative, values.rail_current_A, values.load_cutoff_V});
+  }
+  if (values.rail_power_W > 0) add_power_load(network, positive, negative, values);
+  if (!network.half_period_signs.empty()) {
+    // What hangs on the rail does half a period later what it does now.
+    while (network.half_period_partner.size() < network.branches.size()) {
+      network.half_period_partner.push_back(static_cast<int>(network.half_period_partner.size()));
+    }
   }
   network.rail = positive;
   network.rail_return = negative;

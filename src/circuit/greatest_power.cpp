@@ -40,7 +40,7 @@ class Search {
 
   /// Scan of the load, then golden sections about its best: for rails that jump (thyristors).
   bool scan(double floor_V, double most_A, GreatestPower& answer) {
-    constexpr int kLoads = 48;
+    constexpr int kLoads = 120;
     constexpr int kSections = 24;
     constexpr double kGolden = 0.6180339887498949;
     double best = -1;

@@ -5,6 +5,7 @@
 
 #include "dropfront/circuit/extremes.hpp"
 #include "dropfront/circuit/period_totals.hpp"
+#include "dropfront/circuit/thyristor_figures.hpp"
 
 namespace dropfront::circuit {
 
@@ -98,6 +99,7 @@ Transient run_transient(const Network& network, const StateVector& start, const 
   Walker walker(network);
   std::vector<Segment> segments;
   run.end = start;
+  walker.set_latched(options.latched & walker.thyristor_bits());
   if (!walker.fault().empty() ||
       !walker.walk(options.start_time_s, options.start_time_s + options.duration_s, run.end, segments)) {
     run.reason = walker.fault().empty() ? "the run left the numbers" : walker.fault();
@@ -113,6 +115,12 @@ Transient run_transient(const Network& network, const StateVector& start, const 
   run.rail_max_V = rail.high;
   run.rail_min_at_s = rail.low_at_s - options.start_time_s;
   run.rail_max_at_s = rail.high_at_s - options.start_time_s;
+
+  run.latched = walker.latched();
+  if (!options.energies) {
+    run.usable = true;
+    return run;
+  }
 
   const WalkTotals totals = integrate(walker, segments);
   const std::size_t resistors = network.resistors.size();
@@ -135,6 +143,7 @@ Transient run_transient(const Network& network, const StateVector& start, const 
     });
     run.branch_peak_A.push_back(over_V / network.branches[b].slope_ohm);
   }
+  run.thyristor_peak_A = thyristor_figures(walker, segments, totals).peak_A;
   run.input_energy_J = totals.input_J;
   const double stored_before = stored_J(network, start);
   run.stored_change_J = stored_J(network, run.end) - stored_before;

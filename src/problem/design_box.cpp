@@ -45,10 +45,6 @@ void with_lists(SlotId id, const Offers& offers, Box& box, const Act& act) {
       return act(offers.fuses, box.fuses);
     case SlotId::ceramic:
       return act(offers.ceramics, box.ceramics);
-    case SlotId::thyristor:
-      return act(offers.thyristors, box.thyristors);
-    case SlotId::gate_resistor:
-      return act(offers.gate_resistors, box.gate_resistors);
   }
 }
 
@@ -64,7 +60,12 @@ scoring::DesignBox design_box(const Offers& offers, const std::vector<SlotId>& i
   scoring::DesignBox out;
   for (std::size_t slot = 0; slot < ids.size(); ++slot) {
     const auto& options = box.options[slot];
-    if (ids[slot] == SlotId::arrangement) out.arrangement = offers.arrangements[options.front()];
+    if (ids[slot] == SlotId::arrangement) {
+      const Offers::Wiring wiring = offers.wirings()[static_cast<std::size_t>(options.front())];
+      out.arrangement = wiring.arrangement;
+      out.thyristors = {wiring.thyristor};
+      out.gate_resistors = {wiring.gate_resistor};
+    }
     with_lists(ids[slot], offers, out, [&](const auto& offered, auto& list) {
       list.reserve(options.size());
       for (const auto option : options) list.push_back(as_listed(offered[static_cast<std::size_t>(option)]));

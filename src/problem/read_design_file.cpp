@@ -62,8 +62,13 @@ scoring::Design read_design(const Cursor& cursor, Problem& problem) {
   design.varistor = optional_part<parts::Varistor>(reader, "varistor", problem);
   design.fuse = optional_part<parts::Fuse>(reader, "fuse", problem);
   design.ceramic = optional_part<parts::Ceramic>(reader, "ceramic", problem);
-  refuse_unused(reader, "thyristor", design);
-  refuse_unused(reader, "gate_resistor", design);
+  if (design.arrangement->thyristor_shunt) {
+    design.thyristor = read_part<parts::Thyristor>(reader.require("thyristor"), problem);
+    design.gate_resistor = read_part<parts::Resistor>(reader.require("gate_resistor"), problem);
+  } else {
+    refuse_unused(reader, "thyristor", design);
+    refuse_unused(reader, "gate_resistor", design);
+  }
   reader.finish();
   caution_unchecked("design.varistor", design.varistor != nullptr, checks("varistor."), problem.cautions);
   caution_unchecked("design.fuse", design.fuse != nullptr, checks("fuse."), problem.cautions);

@@ -75,7 +75,10 @@ void read_arrangements(ObjectReader& slots, Problem& problem) {
   auto& offered = problem.offers.arrangements;
   const auto given = slots.take("arrangement");
   if (!given) {
-    for (const circuit::Arrangement& arrangement : circuit::arrangements()) offered.push_back(&arrangement);
+    const bool shunts = !problem.catalogue->thyristors.empty();
+    for (const circuit::Arrangement& arrangement : circuit::arrangements()) {
+      if (shunts || !arrangement.thyristor_shunt) offered.push_back(&arrangement);
+    }
     note_default(problem, slots.object(), "arrangement", "all arrangements", "no filter given");
     return;
   }
@@ -137,12 +140,12 @@ void keep_stages_in_band(const Cursor& slots, Problem& problem) {
                   values::format_quantity(need.tolerance, values::Unit::share), either(outputs)));
 }
 
-/// Slots that no arrangement of this version uses: read in full, offered to nobody, said so.
+/// Slots that no arrangement asked for uses: read in full, offered to nobody, said so.
 template <class Part>
 void unused_slot(ObjectReader& slots, const char* name, Problem& problem, bool (*usable)(const Part&)) {
   if (!slots.has(name)) return;
   slot<Part>(slots, name, problem, usable);
-  problem.cautions.push_back(fmt::format("slots.{} is not used by the arrangements of this version", name));
+  problem.cautions.push_back(fmt::format("slots.{} is not used by the arrangements asked for", name));
 }
 
 }  // namespace
@@ -173,9 +176,16 @@ void read_slots(const Cursor& cursor, Problem& problem) {
   const auto nothing = [](ObjectReader&) {};
   offers.fuses = extra_slot<parts::Fuse>(slots, "fuse", problem, nothing);
   offers.ceramics = extra_slot<parts::Ceramic>(slots, "ceramic", problem, nothing);
-  unused_slot<parts::Thyristor>(slots, "thyristor", problem, any<parts::Thyristor>);
-  unused_slot<Resistor>(slots, "gate_resistor", problem,
-                        [](const Resistor& part) { return serves(part, "gate_resistor"); });
+  const bool shunted = std::any_of(offers.arrangements.begin(), offers.arrangements.end(),
+                                   [](const circuit::Arrangement* a) { return a->thyristor_shunt; });
+  const auto gates = [](const Resistor& part) { return serves(part, "gate_resistor"); };
+  if (shunted) {
+    offers.thyristors = slot<parts::Thyristor>(slots, "thyristor", problem);
+    offers.gate_resistors = slot<Resistor>(slots, "gate_resistor", problem, gates);
+  } else {
+    unused_slot<parts::Thyristor>(slots, "thyristor", problem, any<parts::Thyristor>);
+    unused_slot<Resistor>(slots, "gate_resistor", problem, gates);
+  }
   slots.finish();
   caution_unchecked("slots.varistor", !offers.varistors.empty(), checks("varistor."), problem.cautions);
   caution_unchecked("slots.fuse", !offers.fuses.empty(), checks("fuse."), problem.cautions);

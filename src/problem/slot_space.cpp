@@ -56,10 +56,24 @@ std::vector<double> chain_logs(const std::vector<Offers::Chain>& chains) {
 
 }  // namespace
 
+std::vector<Offers::Wiring> Offers::wirings() const {
+  std::vector<Wiring> out;
+  for (const auto* arrangement : arrangements) {
+    if (!arrangement->thyristor_shunt) {
+      out.push_back({arrangement, nullptr, nullptr});
+      continue;
+    }
+    for (const auto* thyristor : thyristors) {
+      for (const auto* gate : gate_resistors) out.push_back({arrangement, thyristor, gate});
+    }
+  }
+  return out;
+}
+
 SlotSpace make_space(const Offers& offers) {
   SlotSpace out;
   Builder build(out);
-  build.add(SlotId::arrangement, "arrangement", offers.arrangements.size(), {}, true);
+  build.add(SlotId::arrangement, "arrangement", offers.wirings().size(), {}, true);
   build.add(SlotId::output_stage, "output_stage", offers.output_stages.size(), {}, true);
   for (const parts::OutputStage* stage : offers.output_stages)
     out.space.slots.back().group.push_back(static_cast<int>(stage->kind));
@@ -75,8 +89,6 @@ SlotSpace make_space(const Offers& offers) {
   build.add(SlotId::varistor, "varistor", offers.varistors.size());
   build.add(SlotId::fuse, "fuse", offers.fuses.size());
   build.add(SlotId::ceramic, "ceramic", offers.ceramics.size());
-  build.add(SlotId::thyristor, "thyristor", offers.thyristors.size());
-  build.add(SlotId::gate_resistor, "gate_resistor", offers.gate_resistors.size());
   build.couple(SlotId::dropper, SlotId::series_resistor);
   build.couple(SlotId::clamp, SlotId::reservoir);
   build.couple(SlotId::clamp, SlotId::output_stage);
@@ -92,9 +104,13 @@ scoring::Design design_of(const Offers& offers, const std::vector<SlotId>& ids,
   for (std::size_t slot = 0; slot < ids.size(); ++slot) {
     const auto i = static_cast<std::size_t>(choice[slot]);
     switch (ids[slot]) {
-      case SlotId::arrangement:
-        design.arrangement = offers.arrangements[i];
+      case SlotId::arrangement: {
+        const auto wirings = offers.wirings();
+        design.arrangement = wirings[i].arrangement;
+        design.thyristor = wirings[i].thyristor;
+        design.gate_resistor = wirings[i].gate_resistor;
         break;
+      }
       case SlotId::output_stage:
         design.output_stage = offers.output_stages[i];
         break;
@@ -125,12 +141,6 @@ scoring::Design design_of(const Offers& offers, const std::vector<SlotId>& ids,
         break;
       case SlotId::ceramic:
         design.ceramic = offers.ceramics[i];
-        break;
-      case SlotId::thyristor:
-        design.thyristor = offers.thyristors[i];
-        break;
-      case SlotId::gate_resistor:
-        design.gate_resistor = offers.gate_resistors[i];
         break;
     }
   }

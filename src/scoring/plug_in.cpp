@@ -41,7 +41,7 @@ circuit::StateVector left_charged(const circuit::Network& network, double crest_
   for (std::size_t i = 0; i < network.capacitors.size() && i < state.size(); ++i) {
     const auto owner = network.capacitors[i].owner;
     if (owner == Owner::dropper) state[i] = -crest_V;
-    if (owner == Owner::reservoir) state[i] = full_V;
+    if (owner == Owner::reservoir || owner == Owner::ceramic) state[i] = full_V;
   }
   return state;
 }
@@ -118,6 +118,9 @@ PlugInAnswer run_plug_ins(const PointSolver& points, const Recipe& rich,
         }
         answer.input_peak_A = std::max(answer.input_peak_A, tried.resistor.peak_A);
         answer.rectifier_peak_A = std::max(answer.rectifier_peak_A, tried.rectifier_peak_A);
+        for (const double peak_A : tried.plug.run.thyristor_peak_A) {
+          answer.thyristor_peak_A = std::max(answer.thyristor_peak_A, peak_A);
+        }
         auto& energy_J = end == End::low ? answer.resistor_energy_low_J : answer.resistor_energy_high_J;
         if (tried.resistor.energy_J > energy_J) {
           energy_J = tried.resistor.energy_J;

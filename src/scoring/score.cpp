@@ -28,6 +28,8 @@ const char* missing_slot(const Design& design) {
   if (design.clamp == nullptr) return "clamp";
   if (design.reservoir == nullptr) return "reservoir";
   if (design.rectifier == nullptr) return "rectifier";
+  if (design.arrangement->thyristor_shunt && design.thyristor == nullptr) return "thyristor";
+  if (design.arrangement->thyristor_shunt && design.gate_resistor == nullptr) return "gate_resistor";
   return nullptr;
 }
 

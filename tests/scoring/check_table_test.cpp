@@ -30,15 +30,40 @@ void each_example(const std::function<void(Example&)>& look) {
 }
 
 TEST_CASE("the checks stand in their documented order, each id once") {
-  const std::vector<std::string_view> documented{
-      "supply.margin",         "supply.start",           "rail.max",         "rail.transient",
-      "output.band",           "standby.power",          "dropper.voltage",  "dropper.class",
-      "dropper.series_rated",  "dropper.slew",           "resistor.power",   "resistor.voltage",
-      "resistor.pulse",        "resistor.pulse_voltage", "resistor.opens",   "resistor.body",
-      "clamp.power",           "clamp.junction",         "clamp.pulse",      "rectifier.reverse",
-      "rectifier.surge",       "reservoir.voltage",      "reservoir.ripple", "reservoir.life",
-      "reservoir.leakage",     "discharge.voltage",      "discharge.power",  "discharge.working_voltage",
-      "output_stage.junction", "output_stage.input",     "board.height"};
+  const std::vector<std::string_view> documented{"supply.margin",
+                                                 "supply.start",
+                                                 "rail.max",
+                                                 "rail.transient",
+                                                 "output.band",
+                                                 "standby.power",
+                                                 "dropper.voltage",
+                                                 "dropper.class",
+                                                 "dropper.series_rated",
+                                                 "dropper.slew",
+                                                 "resistor.power",
+                                                 "resistor.voltage",
+                                                 "resistor.pulse",
+                                                 "resistor.pulse_voltage",
+                                                 "resistor.opens",
+                                                 "resistor.body",
+                                                 "clamp.power",
+                                                 "clamp.junction",
+                                                 "clamp.pulse",
+                                                 "rectifier.reverse",
+                                                 "rectifier.surge",
+                                                 "thyristor.latch",
+                                                 "thyristor.current",
+                                                 "thyristor.turn_off",
+                                                 "reservoir.voltage",
+                                                 "reservoir.ripple",
+                                                 "reservoir.life",
+                                                 "reservoir.leakage",
+                                                 "discharge.voltage",
+                                                 "discharge.power",
+                                                 "discharge.working_voltage",
+                                                 "output_stage.junction",
+                                                 "output_stage.input",
+                                                 "board.height"};
   std::vector<std::string_view> found;
   for (const CheckRule& rule : check_table()) found.push_back(rule.id);
   CHECK(found == documented);

@@ -1,6 +1,7 @@
 #pragma once
 #include <limits>
 #include <optional>
+#include <vector>
 
 #include "dropfront/circuit/waveform.hpp"
 
@@ -21,6 +22,9 @@ struct ClampCurve {
 /// One design's values at one set of conditions: everything an arrangement needs to build its network.
 struct ElementValues {
   Waveform mains;
+  double source_ohm = 0;        ///< behind the mains, 0: none (a surge generator's 2 ohm)
+  std::vector<Curve> varistor;  ///< parallel branches, alike in both directions; empty: none
+  bool varistor_before = true;  ///< on the line side of the series resistor, else behind it
   double series_resistor_ohm = 0;
   double dropper_F = 0;
   double dropper_esr_ohm = 0;
@@ -33,9 +37,13 @@ struct ElementValues {
   double gate_resistor_ohm = 0;
   double reservoir_F = 0;
   double reservoir_esr_ohm = 0;
-  double ceramic_F = 0;       ///< beside the reservoir; 0: none
-  double rail_current_A = 0;  ///< constant-current load on the rail, leakage and Iq included
-  double load_cutoff_V = 0;   ///< the load falls off linearly below this rail voltage
+  double ceramic_F = 0;        ///< beside the reservoir; 0: none
+  double rail_power_W = 0;     ///< constant-power load beside it, between the two voltages below; 0: none
+  double power_from_V = 0;     ///< below, its current falls in proportion to the voltage
+  double power_to_V = 0;       ///< above, its current stays
+  bool single_diodes = false;  ///< a bridge of four branches instead of two pairs (for faults in one diode)
+  double rail_current_A = 0;   ///< constant-current load on the rail, leakage and Iq included
+  double load_cutoff_V = 0;    ///< the load falls off linearly below this rail voltage
 };
 
 }  // namespace dropfront::circuit

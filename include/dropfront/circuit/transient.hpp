@@ -1,4 +1,5 @@
 #pragma once
+#include <cstdint>
 #include <functional>
 #include <string>
 #include <vector>
@@ -21,6 +22,8 @@ struct Moment {
 struct TransientOptions {
   double start_time_s = 0;  ///< mains phase at which the run begins
   double duration_s = 0.02;
+  bool energies = true;       ///< false: the rail's extremes and the end state only (no energy law then)
+  std::uint32_t latched = 0;  ///< thyristors latched as it begins, as an earlier run's `latched` says
   /// Called at every sample if set: segment ends and points graded to the fastest time constant inside.
   std::function<void(const Moment&)> observer;
 };
@@ -30,6 +33,7 @@ struct Transient {
   bool usable = false;
   std::string reason;
   StateVector end{};                      ///< capacitor voltages at the end
+  std::uint32_t latched = 0;              ///< thyristors latched at the end
   double rail_min_V = 0, rail_max_V = 0;  ///< ESR included
   double rail_max_at_s = 0, rail_min_at_s = 0;
   double input_energy_J = 0;  ///< integral of v·i drawn from the line
@@ -37,11 +41,14 @@ struct Transient {
   std::vector<double> resistor_energy_J;  ///< one a resistor of the network
   std::vector<double> branch_energy_J;
   std::vector<double> branch_peak_A;
+  std::vector<double> thyristor_peak_A;
   std::vector<double> resistor_peak_A;  ///< greatest magnitude
   double stored_change_J = 0;
   double energy_residual = 0;  ///< |in - dissipated - stored change| / (|in| + stored at start)
 };
 
+/// Runs of changed networks (dips, bursts, contacts) follow one another by `end`, `latched` and the time: all
+/// must have the same capacitors.
 /// Runs `network` from `start` (capacitor voltages in network order). Never throws.
 Transient run_transient(const Network& network, const StateVector& start, const TransientOptions& options);
 

@@ -8,9 +8,9 @@
 
 namespace dropfront::problem {
 
-/// An inline object as the part readers want it: numbers as JSON numbers or texts with unit, yes/no columns as
-/// true or false, words as texts. `hidden` names keys that are not columns and that the
-/// caller reads itself (the element count of a discharge chain).
+/// An inline object as the part readers want it: numbers as JSON numbers or texts with unit, yes/no columns
+/// as true or false, words as texts. `hidden` names keys that are not columns and that the caller reads
+/// itself (the element count of a discharge chain).
 class InlinePart : public parts::FieldSource {
  public:
   InlinePart(const Cursor& object, parts::Kind kind, std::vector<std::string> hidden = {});

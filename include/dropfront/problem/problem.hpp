@@ -49,6 +49,14 @@ struct Offers {
   std::vector<const parts::Resistor*> gate_resistors;
   int dropper_parallel = 1;              ///< equal droppers in parallel in every design, 1 or 2
   int series_resistor_split = 1;         ///< equal series resistors in series in every design, 1 or 2
+  /// An arrangement with the parts only it has: one option of the search's first slot. In the order of
+  /// `arrangements`; thyristor and gate resistor are null where the arrangement has none.
+  struct Wiring {
+    const circuit::Arrangement* arrangement = nullptr;
+    const parts::Thyristor* thyristor = nullptr;
+    const parts::Resistor* gate_resistor = nullptr;
+  };
+  std::vector<Wiring> wirings() const;
   bool varistor_before_resistor = true;  ///< line side of the series resistor, else behind it
 };
 

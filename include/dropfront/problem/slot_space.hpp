@@ -17,14 +17,13 @@ enum class SlotId {
   rectifier,
   varistor,
   fuse,
-  ceramic,
-  thyristor,
-  gate_resistor
+  ceramic
 };
 
-/// The offers as the search sees them: slots that offer something, in the order of SlotId. Coordinates are
-/// natural logarithms of capacitance, resistance, voltage, and of the chain's total resistance; an empty
-/// discharge slot stands a factor e above the greatest chain. Output stages are grouped by kind.
+/// The offers as the search sees them (an arrangement's own thyristor and gate resistor come with it): slots
+/// that offer something, in the order of SlotId. Coordinates are natural logarithms of capacitance,
+/// resistance, voltage, and of the chain's total resistance; an empty discharge slot stands a factor e above
+/// the greatest chain. Output stages are grouped by kind.
 struct SlotSpace {
   search::Space space;
   std::vector<SlotId> ids;  ///< one a slot of the space

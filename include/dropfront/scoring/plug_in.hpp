@@ -36,6 +36,7 @@ struct PlugInAnswer {
   double resistor_energy_low_J = 0;             ///< in the series resistor
   double resistor_energy_high_J = 0;
   double rectifier_peak_A = 0;  ///< greatest in any one rectifier
+  double thyristor_peak_A = 0;  ///< 0 where there is none
   double input_peak_A = 0;      ///< greatest series-resistor current
 };
 

@@ -52,6 +52,8 @@ struct Example {
   parts::Rectifier rectifier;
   parts::OutputStage stage;
   parts::Resistor discharge;
+  parts::Thyristor thyristor;  // used by the shunt arrangements only
+  parts::Resistor gate_resistor;
   Requirement requirement;
   const circuit::Arrangement* arrangement = nullptr;
   int discharge_count = 2;
@@ -96,6 +98,17 @@ struct Example {
     discharge.tolerance = 0.05;
     discharge.rated_power_W = 0.25;
     discharge.rated_voltage_Vrms = 200;
+    thyristor.on_voltage_V = 0.9;
+    thyristor.slope_resistance_ohm = 0.1;
+    thyristor.trigger_current_A = 0.2e-3;
+    thyristor.holding_current_A = 5e-3;
+    thyristor.latching_current_A = 6e-3;
+    thyristor.turn_off_time_s = 35e-6;
+    thyristor.surge_current_A = 10;
+    gate_resistor.resistance_ohm = 1000;
+    gate_resistor.tolerance = 0.05;
+    set_body(thyristor.info, "thyristor", 4'900, 3'800, 70'000);
+    set_body(gate_resistor.info, "gate resistor", 2'000, 1'250, 2'000);
     set_body(dropper.info, "film", 26'500, 8'500, 300'000);
     set_body(series_resistor.info, "series resistor", 12'000, 5'000, 50'000);
     set_body(clamp.info, "zener", 5'200, 2'700, 40'000);
@@ -122,6 +135,10 @@ struct Example {
     d.output_stage = &stage;
     d.discharge = discharge_count > 0 ? &discharge : nullptr;
     d.discharge_count = discharge_count;
+    if (arrangement != nullptr && arrangement->thyristor_shunt) {
+      d.thyristor = &thyristor;
+      d.gate_resistor = &gate_resistor;
+    }
     return d;
   }
   Supply& supply() { return requirement.supplies.front(); }

@@ -1,0 +1,29 @@
+#pragma once
+#include <vector>
+
+#include "dropfront/circuit/element_values.hpp"
+
+namespace dropfront::circuit {
+
+/// Voltage-current law of a metal-oxide varistor between its 1 mA point and its clamping point, straight on
+/// logarithmic axes and carried on beyond: V = clamp_V·(I/clamp_A)^alpha,
+/// alpha = ln(clamp_V/one_mA_V)/ln(clamp_A/1 mA). Valid: 0 < one_mA_V < clamp_V, clamp_A > 1 mA; data sheets
+/// curve up a little more above some hundred amperes (from memory), so the let-through there is a low guess.
+struct VaristorLaw {
+  double one_mA_V = 0;
+  double clamp_V = 0;
+  double clamp_A = 0;
+  double exponent() const;
+  double voltage_V(double current_A) const;
+};
+
+/// The law as parallel one-way branches, one straight piece from each of some currents to the next, the last
+/// carried on. Touches the law at 1 mA, 0.1, 1, 10, 30, 100, 300, 1000 and 3000 A; between them no more
+/// than 4 % of the voltage below it.
+std::vector<Curve> varistor_branches(const VaristorLaw& law);
+
+/// A disc's voltage at 1 mA follows its continuous a.c. rating: 430 V for 275 V (facts of the 431K size), 10
+/// %.
+double varistor_one_mA_V(double continuous_Vrms);
+
+}  // namespace dropfront::circuit
