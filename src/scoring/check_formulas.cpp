@@ -55,6 +55,15 @@ std::string_view check_formula(std::string_view id) {
       {"rectifier.surge",
        "greatest rectifier current after closing on the crest, the dropper at the opposite one <= surge "
        "current"},
+      {"thyristor.latch",
+       "line_crest_V / hypot(1 / (omega x dropper_F), series_resistor_ohm) at low line and frequency >= 3 x "
+       "latching current"},
+      {"thyristor.current",
+       "greatest of plug_in_peak_A (closing on the crest, the dropper at the opposite one, the rail at its "
+       "threshold) and firing_peak_A <= surge current"},
+      {"thyristor.turn_off",
+       "least time at or below its on-voltage between dropping out and positive anode voltage >= turn-off "
+       "time"},
       {"reservoir.voltage", "greatest rail <= rated_voltage_V x derating"},
       {"reservoir.ripple",
        "r.m.s. current of the reservoir <= rated_ripple_Arms x m(running) / m(rated_frequency_Hz), m = 0.8 "

@@ -16,9 +16,10 @@ std::optional<Check> thyristor_current(Evidence& evidence) {
     if (!point->state.usable() || point->state.thyristor_peak_A.empty()) continue;
     firing_A = std::max(firing_A, point->state.thyristor_peak_A.front());
   }
-  const Check check = at_most("thyristor.current", std::max(plug_in.thyristor_peak_A, firing_A),
-                              design.thyristor->surge_current_A, "A", at_plug_in(plug_in.resistor_low),
-                              "greatest of plug-in pulse and firing spike against the surge rating");
+  const Check check = with(at_most("thyristor.current", std::max(plug_in.thyristor_peak_A, firing_A),
+                                   design.thyristor->surge_current_A, "A", at_plug_in(plug_in.resistor_low),
+                                   "greatest of plug-in pulse and firing spike against the surge rating"),
+                           {{"plug_in_peak_A", plug_in.thyristor_peak_A}, {"firing_peak_A", firing_A}});
   return plug_in.usable ? check : unsolved(check, plug_in.reason);
 }
 

@@ -12,17 +12,19 @@ std::optional<Check> thyristor_latch(Evidence& evidence) {
   if (design.thyristor == nullptr) return std::nullopt;
   constexpr double kMargin = 3;  // peak dropper current over latching current (common practice)
   const double omega = 2 * std::numbers::pi * evidence.supply().frequency_Hz.low;
-  const double least_F =
-      dropper_F(*design.dropper, End::low, true, evidence.requirement().surroundings.ambient_degC.high);
-  const double reactance_ohm = 1 / (omega * least_F);
+  const auto& ambient = evidence.requirement().surroundings.ambient_degC;
+  // Film loses capacitance with heat, so the hot, old, smallest one decides.
+  const double least_F = all_droppers_F(design, End::low, 1, ambient.high);
+  const double series_ohm = series_resistor_ohm(design, End::high);
   const double crest_V = std::numbers::sqrt2 * evidence.supply().voltage_Vrms.low;
-  const double peak_A = crest_V / std::hypot(reactance_ohm, resistor_ohm(*design.series_resistor, End::high));
+  const double peak_A = crest_V / std::hypot(1 / (omega * least_F), series_ohm);
   std::optional<double> limit = design.thyristor->latching_current_A;
   if (limit) *limit *= kMargin;
-  return at_least(
-      "thyristor.latch", peak_A, limit, "A", at_corner("lean"),
-      "peak dropper current at low line, least capacitance, against 3 x the latching current (common "
-      "practice); with less it does not latch");
+  const Check check = at_least(
+      "thyristor.latch", peak_A, limit, "A", at_corner("lean", ambient.high),
+      "peak dropper current against 3 x the latching current (common practice); with less it does not latch");
+  return with(check,
+              {{"line_crest_V", crest_V}, {"dropper_F", least_F}, {"series_resistor_ohm", series_ohm}});
 }
 
 }  // namespace dropfront::scoring

