@@ -114,7 +114,7 @@ TEST_CASE("Until a shunt has fired its reservoir takes the plug-in pulse") {
   // the clamp across. Between those two lies what a real one lets through.
   for (const char* wiring : {"half-wave-thyristor-shunt", "bridge-thyristor-shunt"}) {
     INFO(wiring);
-    const test::Example example(wiring);
+    test::Example example(wiring);
     Evidence evidence(example.design(), example.requirement, example.supply());
     const PlugInAnswer& answer = evidence.plug_in();
     REQUIRE(answer.usable);
