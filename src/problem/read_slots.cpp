@@ -75,11 +75,14 @@ void read_arrangements(ObjectReader& slots, Problem& problem) {
   auto& offered = problem.offers.arrangements;
   const auto given = slots.take("arrangement");
   if (!given) {
-    const bool shunts = !problem.catalogue->thyristors.empty();
+    // A shunt is another part to buy and a source of emission: only where the problem asks for one.
+    const bool shunts = slots.has("thyristor");
     for (const circuit::Arrangement& arrangement : circuit::arrangements()) {
       if (shunts || !arrangement.thyristor_shunt) offered.push_back(&arrangement);
     }
-    note_default(problem, slots.object(), "arrangement", "all arrangements", "no filter given");
+    note_default(problem, slots.object(), "arrangement",
+                 shunts ? "all arrangements" : "all arrangements without a thyristor",
+                 shunts ? "no filter given" : "the slot thyristor is not named");
     return;
   }
   std::set<const circuit::Arrangement*> asked;

@@ -17,13 +17,13 @@ namespace {
 template <typename Work>
 void for_each_index(int count, int threads, const Work& work) {
   const int cores = static_cast<int>(std::max(1u, std::thread::hardware_concurrency()));
-  const int helpers = std::min(count, threads > 0 ? threads : cores) - 1;
+  const int beside = std::min(count, threads > 0 ? threads : cores) - 1;
   std::atomic<int> next{0};
   const auto run = [&] {
     for (int i = next++; i < count; i = next++) work(i);
   };
   std::vector<std::jthread> pool;
-  for (int i = 0; i < helpers; ++i) pool.emplace_back(run);
+  for (int i = 0; i < beside; ++i) pool.emplace_back(run);
   run();
 }
 

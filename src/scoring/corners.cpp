@@ -64,21 +64,16 @@ namespace {
 
 /// Gate current that fires: the data give the greatest; sensitive types fire at a tenth of it (from memory).
 constexpr double kLeastTrigger = 0.1;
-constexpr double kTrigger_A = 0.2e-3;  // sensitive-gate types where the data say nothing (from memory)
-constexpr double kHolding_A = 5e-3;
 
 /// The trigger follows the zener's end: the low curve fires early, the high curve late.
 void set_shunt(const Design& design, const Recipe& recipe, circuit::ElementValues& values) {
-  if (!design.arrangement->thyristor_shunt || design.thyristor == nullptr ||
-      design.gate_resistor == nullptr) {
-    return;
-  }
+  if (design.thyristor == nullptr || design.gate_resistor == nullptr) return;  // then no score gets here
   const auto& part = *design.thyristor;
   const bool early = recipe.clamp == ZenerCurve::low;
   const End end = early ? End::low : recipe.clamp == ZenerCurve::high ? End::high : End::nominal;
   values.thyristor = {part.on_voltage_V, part.slope_resistance_ohm};
-  values.thyristor_holding_A = part.holding_current_A.value_or(kHolding_A);
-  values.thyristor_trigger_A = part.trigger_current_A.value_or(kTrigger_A) * (early ? kLeastTrigger : 1);
+  values.thyristor_holding_A = part.holding_current_A.value_or(0);
+  values.thyristor_trigger_A = part.trigger_current_A.value_or(0) * (early ? kLeastTrigger : 1);
   values.gate_resistor_ohm = resistor_ohm(*design.gate_resistor, end);
 }
 

@@ -39,7 +39,7 @@ double Evidence::margin_ceiling_A() {
     const double efficiency = impl.design.output_stage->efficiency.value_or(1);
     double power_W = 0;
     for (int k = 0; k <= 8; ++k) {
-      // On each eighth of the range the product is at most its upper voltage times its lower end's current.
+      // On each ninth of the range the product is at most its upper voltage times its lower end's current.
       const double low_V = *impl.required + (clamp_V - *impl.required) * k / 9;
       const double high_V = *impl.required + (clamp_V - *impl.required) * (k + 1) / 9;
       power_W = std::max(power_W, high_V * (ceiling_A(wiring, values, low_V) - overhead_A));

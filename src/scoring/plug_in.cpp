@@ -80,6 +80,7 @@ Tried try_plug_in(const PointSolver& points, const Recipe& recipe, const Operati
   Tried tried;
   tried.plug.run =
       circuit::run_transient(network, left_charged(network, values.mains.crest_V(), full_V), options);
+  bool shunted = false;
   if (!network.thyristors.empty()) {
     // The engine's thyristor takes over in no time, a real one in a microsecond or two (from memory): until
     // then the pulse goes into the reservoir.
@@ -93,6 +94,7 @@ Tried try_plug_in(const PointSolver& points, const Recipe& recipe, const Operati
     auto& run = tried.plug.run;
     run.usable = run.usable && first.usable;
     run.rail_max_V = std::max(run.rail_max_V, first.rail_max_V);
+    shunted = true;
   }
   tried.plug.ambient_degC = rest.ambient_degC;
   tried.plug.values = values;
@@ -101,6 +103,8 @@ Tried try_plug_in(const PointSolver& points, const Recipe& recipe, const Operati
   tried.plug.ends = recipe.series_resistor == End::low ? "series_resistor low" : "series_resistor high";
   tried.resistor = series_resistor(network, tried.plug.run);
   tried.rectifier_peak_A = greatest_of(network.branches, tried.plug.run.branch_peak_A, Owner::rectifier);
+  // Until it fires the series diode takes the whole pulse, on the other crest the reset diode does.
+  if (shunted) tried.rectifier_peak_A = std::max(tried.rectifier_peak_A, tried.resistor.peak_A);
   tried.trace = trace.take();
   return tried;
 }

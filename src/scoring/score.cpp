@@ -28,7 +28,12 @@ const char* missing_slot(const Design& design) {
   if (design.clamp == nullptr) return "clamp";
   if (design.reservoir == nullptr) return "reservoir";
   if (design.rectifier == nullptr) return "rectifier";
-  if (design.arrangement->thyristor_shunt && design.thyristor == nullptr) return "thyristor";
+  if (design.arrangement->thyristor_shunt) {
+    if (design.thyristor == nullptr) return "thyristor";
+    // Without these two nobody can say at which rail it fires, nor whether it lets go.
+    if (!design.thyristor->trigger_current_A) return "trigger_current of the thyristor";
+    if (!design.thyristor->holding_current_A) return "holding_current of the thyristor";
+  }
   if (design.arrangement->thyristor_shunt && design.gate_resistor == nullptr) return "gate_resistor";
   return nullptr;
 }

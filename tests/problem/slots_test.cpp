@@ -23,7 +23,7 @@ TEST_CASE("without slots every usable row is offered, in the order of the lists"
   const problem::Problem p = bench.problem();
   CHECK(names_of(p.offers.droppers) == Names{"film-220n", "film-470n", "film-470n-b", "film-1u"});
   CHECK(names_of(p.offers.series_resistors) == Names{"fuse-47R", "fuse-100R", "fuse-220R", "any-1k"});
-  // The bench has no thyristors, so no arrangement that needs one.
+  // Shunts are offered where the problem names a thyristor.
   for (const circuit::Arrangement* arrangement : p.offers.arrangements)
     CHECK_FALSE(arrangement->thyristor_shunt);
   CHECK(p.offers.arrangements.size() == 4);

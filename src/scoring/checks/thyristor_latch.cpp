@@ -16,12 +16,13 @@ std::optional<Check> thyristor_latch(Evidence& evidence) {
   // Film loses capacitance with heat, so the hot, old, smallest one decides.
   const double least_F = all_droppers_F(design, End::low, 1, ambient.high);
   const double series_ohm = series_resistor_ohm(design, End::high);
-  const double crest_V = std::numbers::sqrt2 * evidence.supply().voltage_Vrms.low;
+  const double crest_V = evidence.shapes().lean.crest_V();  // of the flattened low line
   const double peak_A = crest_V / std::hypot(1 / (omega * least_F), series_ohm);
   std::optional<double> limit = design.thyristor->latching_current_A;
   if (limit) *limit *= kMargin;
   const Check check = at_least(
-      "thyristor.latch", peak_A, limit, "A", at_corner("lean", ambient.high),
+      "thyristor.latch", peak_A, limit, "A",
+      at_corner("lean", ambient.high, "dropper low, series_resistor high"),
       "peak dropper current against 3 x the latching current (common practice); with less it does not latch");
   return with(check,
               {{"line_crest_V", crest_V}, {"dropper_F", least_F}, {"series_resistor_ohm", series_ohm}});

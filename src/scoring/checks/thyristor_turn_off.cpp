@@ -9,11 +9,21 @@ namespace dropfront::scoring {
 std::optional<Check> thyristor_turn_off(Evidence& evidence) {
   const Design& design = evidence.design();
   if (design.thyristor == nullptr) return std::nullopt;
-  return worst_over(hot_points(evidence), [&](const OperatingPoint& point) {
-    double rest_s = INFINITY;
-    if (!point.state.thyristor_turn_off_s.empty()) rest_s = point.state.thyristor_turn_off_s.front();
-    // It does not fire at all at this load: a whole period is as long as it could be asked for.
-    if (!std::isfinite(rest_s)) rest_s = point.values.mains.period_s();
+  // Points at which it does not fire ask nothing of it; unloaded it must.
+  std::vector<const OperatingPoint*> firing;
+  for (const OperatingPoint* point : hot_points(evidence)) {
+    const bool fires = !point->state.thyristor_turn_off_s.empty() &&
+                       std::isfinite(point->state.thyristor_turn_off_s.front());
+    if (fires || !point->state.usable()) firing.push_back(point);
+  }
+  if (firing.empty()) {
+    return unsolved(at_least("thyristor.turn_off", std::nullopt, design.thyristor->turn_off_time_s, "s",
+                             at_point(evidence.rich_empty_hot()), "it does not fire without load"),
+                    "it does not fire without load");
+  }
+  return worst_over(firing, [&](const OperatingPoint& point) {
+    const double rest_s =
+        point.state.thyristor_turn_off_s.empty() ? 0 : point.state.thyristor_turn_off_s.front();
     return with(
         at_least("thyristor.turn_off", rest_s, design.thyristor->turn_off_time_s, "s", at_point(point),
                  "least time at or below its on-voltage before the anode is positive again"),

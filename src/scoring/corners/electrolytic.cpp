@@ -3,6 +3,8 @@
 #include <algorithm>
 #include <cmath>
 
+#include "dropfront/parts/defaults.hpp"
+
 namespace dropfront::scoring {
 
 namespace {
@@ -19,7 +21,7 @@ double electrolytic_cold_capacitance(double local_degC) {
 
 double electrolytic_cold_esr(const parts::Reservoir& part, double local_degC) {
   if (!(local_degC < kReference_degC) || !(part.esr_ohm > 0)) return 1;
-  const double default_ratio = part.rated_voltage_V <= 16 ? 3 : 2;
+  const double default_ratio = parts::electrolytic_cold_factor(part.rated_voltage_V);
   const double ratio = part.esr_cold_ohm > 0 ? part.esr_cold_ohm / part.esr_ohm : default_ratio;
   const double reached = std::max(local_degC, kCold_degC);
   const double factor = std::pow(ratio, (kReference_degC - reached) / (kReference_degC - kCold_degC));
