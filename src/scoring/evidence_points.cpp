@@ -23,6 +23,7 @@ const OperatingPoint& Evidence::rich_empty() {
 }
 
 const OperatingPoint& Evidence::rich_empty_hot() { return impl_->rest(true); }
+const OperatingPoint& Evidence::rich_empty_cold() { return impl_->rest(false); }
 
 const std::vector<OperatingPoint>& Evidence::rich_loads() {
   auto& loads = impl_->rich_loads;

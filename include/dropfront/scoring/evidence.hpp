@@ -55,6 +55,7 @@ class Evidence {
   const OperatingPoint& nominal();
   const OperatingPoint& rich_empty();      ///< the ambient with the greatest rail (rail_greatest_V)
   const OperatingPoint& rich_empty_hot();  ///< the same load at the high ambient, for powers
+  const OperatingPoint& rich_empty_cold();  ///< at the low ambient: more film capacitance, low zeners higher
   const OperatingPoint& rich_loaded();     ///< of rich_loads(), the one with the greatest input power
   /// Rich loaded from no load to the heaviest, in that order: stresses that grow with load are worst at the
   /// last, powers somewhere between. A check takes the worst of these.

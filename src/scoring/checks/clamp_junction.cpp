@@ -24,7 +24,7 @@ std::optional<Check> clamp_junction(Evidence& evidence) {
                  {"max_junction_degC", clamp.max_junction_degC},
                  {"derating_K", evidence.requirement().derating.junction_K}});
   };
-  return worst_over(hot_points(evidence), judge);
+  return worst_over(rich_points(evidence), judge);
 }
 
 }  // namespace dropfront::scoring

@@ -20,7 +20,7 @@ std::optional<Check> clamp_power(Evidence& evidence) {
     add_figure(check, "rated_power_W", design.clamp->rated_power_W);
     return check;
   };
-  return worst_over(hot_points(evidence), judge);
+  return worst_over(rich_points(evidence), judge);
 }
 
 }  // namespace dropfront::scoring

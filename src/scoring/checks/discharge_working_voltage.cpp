@@ -18,7 +18,7 @@ std::optional<Check> discharge_working_voltage(Evidence& evidence) {
                  {"elements", static_cast<double>(design.discharge_count)},
                  {"greatest_share", share}});
   };
-  return worst_over(hot_points(evidence), judge);
+  return worst_over(rich_points(evidence), judge);
 }
 
 }  // namespace dropfront::scoring

@@ -41,7 +41,7 @@ std::optional<Check> resistor_body(Evidence& evidence) {
                  {"harmonics_heating", heating},
                  {"thermal_resistance_K_per_W", *resistance}});
   };
-  return worst_over(hot_points(evidence), judge);
+  return worst_over(rich_points(evidence), judge);
 }
 
 }  // namespace dropfront::scoring

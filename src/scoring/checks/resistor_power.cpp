@@ -28,7 +28,7 @@ std::optional<Check> resistor_power(Evidence& evidence) {
     add_figure(check, "rated_power_W", part.rated_power_W);
     return check;
   };
-  return worst_over(hot_points(evidence), judge);
+  return worst_over(rich_points(evidence), judge);
 }
 
 }  // namespace dropfront::scoring

@@ -16,7 +16,7 @@ std::optional<Check> resistor_voltage(Evidence& evidence) {
                         "r.m.s. in running against the limiting element voltage"),
                 {{"loss_W", loss}, {"parts_in_series", count}});
   };
-  return worst_over(hot_points(evidence), judge);
+  return worst_over(rich_points(evidence), judge);
 }
 
 }  // namespace dropfront::scoring

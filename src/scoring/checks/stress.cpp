@@ -73,8 +73,8 @@ std::vector<const OperatingPoint*> loaded_points(Evidence& evidence) {
   return points;
 }
 
-std::vector<const OperatingPoint*> hot_points(Evidence& evidence) {
-  std::vector<const OperatingPoint*> points{&evidence.rich_empty_hot()};
+std::vector<const OperatingPoint*> rich_points(Evidence& evidence) {
+  std::vector<const OperatingPoint*> points{&evidence.rich_empty_hot(), &evidence.rich_empty_cold()};
   for (const OperatingPoint* point : loaded_points(evidence)) points.push_back(point);
   return points;
 }

@@ -17,7 +17,7 @@ std::optional<Check> thyristor_current(Evidence& evidence) {
   bool usable = plug_in.usable;
   // The rich corner has the series resistor at its high end; the spike is the node's fall over it.
   const double to_low_end = series_resistor_ohm(design, End::high) / series_resistor_ohm(design, End::low);
-  for (const OperatingPoint* point : hot_points(evidence)) {
+  for (const OperatingPoint* point : rich_points(evidence)) {
     if (!point->state.usable() || point->state.thyristor_peak_A.empty()) {
       usable = false;
       reason = point->state.reason;

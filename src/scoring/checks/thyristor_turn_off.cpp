@@ -11,7 +11,7 @@ std::optional<Check> thyristor_turn_off(Evidence& evidence) {
   if (design.thyristor == nullptr) return std::nullopt;
   // Points at which it does not fire ask nothing of it; unloaded it must.
   std::vector<const OperatingPoint*> firing;
-  for (const OperatingPoint* point : hot_points(evidence)) {
+  for (const OperatingPoint* point : rich_points(evidence)) {
     const bool fires = !point->state.thyristor_turn_off_s.empty() &&
                        std::isfinite(point->state.thyristor_turn_off_s.front());
     if (fires || !point->state.usable()) firing.push_back(point);

@@ -37,8 +37,9 @@ bool has_input_rating(const parts::OutputStage& stage);
 /// R.m.s. voltage across the whole discharge chain at a solved point, from its loss.
 double discharge_chain_Vrms(const OperatingPoint& point);
 
-/// Rich points at which powers are compared: empty and hot, then every rich load.
-std::vector<const OperatingPoint*> hot_points(Evidence& evidence);
+/// Rich points at which powers are compared: empty at both ambients (heat takes capacitance from the film,
+/// cold raises zeners below 4.7 V), then every rich load.
+std::vector<const OperatingPoint*> rich_points(Evidence& evidence);
 
 /// Every rich load.
 std::vector<const OperatingPoint*> loaded_points(Evidence& evidence);
