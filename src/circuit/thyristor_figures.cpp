@@ -57,7 +57,6 @@ ThyristorFigures thyristor_figures(const Walker& walker, const std::vector<Segme
     const auto latched = [&](const Segment& segment) { return (segment.mode->mask >> (first + t)) & 1u; };
     double peak_A = 0;
     Recovery recovery;
-    int firings = 0;
     // Round twice: the rest may run over the end of the period.
     for (std::size_t k = 0; k < 2 * segments.size(); ++k) {
       const Segment& segment = segments[k % segments.size()];
@@ -65,10 +64,7 @@ ThyristorFigures thyristor_figures(const Walker& walker, const std::vector<Segme
       const ModalRow& row = segment.mode->element_V[element];
       const ForcedRow forced = forced_part(*segment.mode, mains, row);
       if (latched(segment)) {
-        if (!latched(before)) {
-          firings += k < segments.size() ? 1 : 0;
-          recovery.fired();
-        }
+        if (!latched(before)) recovery.fired();
         Extremes over;
         include_extremes(segment, row, forced, phase, over);
         peak_A = std::max(peak_A, (over.high - part.on_voltage_V) / part.slope_ohm);
@@ -85,7 +81,6 @@ ThyristorFigures thyristor_figures(const Walker& walker, const std::vector<Segme
     figures.peak_A.push_back(peak_A);
     figures.mean_A.push_back(totals.duration_s > 0 ? totals.element_As[element] / totals.duration_s : 0);
     figures.turn_off_s.push_back(recovery.shortest_s());
-    figures.firings.push_back(firings);
   }
   return figures;
 }

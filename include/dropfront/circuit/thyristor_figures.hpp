@@ -11,7 +11,6 @@ struct ThyristorFigures {
   std::vector<double> mean_A;
   /// Least time from dropping out until the anode is positive again; infinite where that does not come.
   std::vector<double> turn_off_s;
-  std::vector<int> firings;
 };
 
 ThyristorFigures thyristor_figures(const Walker& walker, const std::vector<Segment>& segments,

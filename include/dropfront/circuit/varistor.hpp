@@ -22,8 +22,7 @@ struct VaristorLaw {
 /// than 4 % of the voltage below it.
 std::vector<Curve> varistor_branches(const VaristorLaw& law);
 
-/// A disc's voltage at 1 mA follows its continuous a.c. rating: 430 V for 275 V (facts of the 431K size), 10
-/// %.
+/// A disc's voltage at 1 mA follows its continuous a.c. rating: 430 V +/- 10 % for 275 V (size 431K).
 double varistor_one_mA_V(double continuous_Vrms);
 
 }  // namespace dropfront::circuit

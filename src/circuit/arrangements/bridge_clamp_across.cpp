@@ -8,10 +8,6 @@ Network build_bridge_clamp_across(const ElementValues& values) {
   const Node behind = add_mains_side(network, values);
   const auto [positive, negative] = add_bridge(network, behind, values);
   add_clamp(network, positive, negative, values.clamp);
-  // Half a period later a clamp across the rail does what it does now.
-  while (network.half_period_partner.size() < network.branches.size()) {
-    network.half_period_partner.push_back(static_cast<int>(network.half_period_partner.size()));
-  }
   add_rail(network, positive, negative, values);
   set_start(network, values, values.clamp.main.threshold_V, 2 * values.rectifier.threshold_V);
   return network;
