@@ -121,12 +121,12 @@ Tried::Single BoxTrial::settle(const Choice& choice) const {
   Tried::Single single;
   single.choice = choice;
   single.fate = Fate::settled;
-  single.seen = session_.seen(choice);
-  if (session_.evaluated(choice)) {
+  single.seen = state_.seen(choice);
+  if (state_.evaluated(choice)) {
     single.seen = true;
     return single;
   }
-  single.look = session_.evaluator.look(choice);
+  single.look = state_.evaluator.look(choice);
   if (!single.look.broken.empty()) {
     single.fate = Fate::broken;
     single.check = single.look.broken.front();
@@ -137,10 +137,10 @@ Tried::Single BoxTrial::settle(const Choice& choice) const {
   } else {
     Box box;
     for (const auto option : choice) box.options.push_back({option});
-    OpenBox open = open_box(std::move(box), session_.evaluator.objective_count());
+    OpenBox open = open_box(std::move(box), state_.evaluator.objective_count());
     // An evaluation costs more than the deepest bound.
     if (discard(open, 1, single)) return single;
-    single.evaluation = session_.evaluator.evaluate(
+    single.evaluation = state_.evaluator.evaluate(
         choice, [&](const std::vector<double>& objectives) { return front_.rejects(objectives, choice); });
   }
   return single;
@@ -158,10 +158,7 @@ void BoxTrial::settle(const Box& box, Tried& tried) const {
 
 Tried BoxTrial::run(OpenBox open, const std::vector<double>& extent) const {
   Tried tried;
-  if (session_.over()) {
-    tried.rest = std::move(open);
-    return tried;
-  }
+  if (state_.over()) return tried;
   tried.members = open.box.members();
   if (discard(open, 0, tried)) return tried;
   bounder_.reduce(open.box);

@@ -28,44 +28,44 @@ bool advance(Choice& choice, const Space& space) {
 
 }  // namespace
 
-bool worth_enumerating(const Session& session) {
-  const double size = session.space.size();
-  return session.options.switches.enumerate && size <= static_cast<double>(session.plan.exhaustive_limit) &&
-         size <= static_cast<double>(session.plan.looks);
+bool worth_enumerating(const SearchState& state) {
+  const double size = state.space.size();
+  return state.options.switches.enumerate && size <= static_cast<double>(state.plan.exhaustive_limit) &&
+         size <= static_cast<double>(state.plan.looks);
 }
 
-Proof enumerate(Session& session) {
+Proof enumerate(SearchState& state) {
   Proof proof;
   proof.enumerated = true;
-  proof.space = session.space.size();
-  proof.broken.resize(session.evaluator.check_names().size());
+  proof.space = state.space.size();
+  proof.broken.resize(state.evaluator.check_names().size());
   proof.complete = proof.space < 1;  // a slot that offers nothing: an empty space
   if (proof.complete) return proof;
   std::vector<Choice> all;
-  Choice choice(session.space.slots.size(), 0);
+  Choice choice(state.space.slots.size(), 0);
   do {
     all.push_back(choice);
-  } while (advance(choice, session.space));
-  std::vector<Looked> waiting = session.look_new(all);
+  } while (advance(choice, state.space));
+  std::vector<Looked> waiting = state.look_new(all);
   std::sort(waiting.begin(), waiting.end(), cheaper);
-  session.lift_evaluation_limit();
+  state.lift_evaluation_limit();
   constexpr auto exact = static_cast<std::size_t>(BoundKind::exact);
   std::vector<Choice> batch;
-  for (std::size_t next = 0; next < waiting.size() && !session.ended();) {
+  for (std::size_t next = 0; next < waiting.size() && !state.ended();) {
     batch.clear();
     for (; next < waiting.size() && batch.size() < evaluation_batch; ++next) {
       const Looked& design = waiting[next];
-      if (session.ledger.front().rejects(design.objectives, design.choice)) {
-        session.ledger.pass_over(design.choice, design.objectives);
+      if (state.ledger.front().rejects(design.objectives, design.choice)) {
+        state.ledger.pass_over(design.choice, design.objectives);
         ++proof.dominated[exact];
       } else {
         batch.push_back(design.choice);
       }
     }
-    proof.scored += static_cast<double>(session.evaluate(batch).size());
-    session.report("close", static_cast<double>(next) / static_cast<double>(waiting.size()));
+    proof.scored += static_cast<double>(state.evaluate(batch).size());
+    state.report("close", static_cast<double>(next) / static_cast<double>(waiting.size()));
   }
-  const Ledger::TurnedAway& away = session.ledger.turned_away();
+  const Ledger::TurnedAway& away = state.ledger.turned_away();
   for (std::size_t c = 0; c < away.broken.size(); ++c) proof.broken[c][exact] += away.broken[c];
   proof.undefined += away.undefined;
   proof.dominated[exact] += away.dominated;

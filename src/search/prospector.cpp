@@ -14,37 +14,37 @@ constexpr double nearby = 0.2;  // of an axis: how far a parent can serve as anc
 
 }  // namespace
 
-Prospector::Prospector(Session& session, const std::vector<Parent>& parents)
-    : session_(session), parents_(parents), checks_(session.telling_checks()) {}
+Prospector::Prospector(SearchState& state, const std::vector<Parent>& parents)
+    : state_(state), parents_(parents), checks_(state.telling_checks()) {}
 
 void Prospector::fit(const std::vector<Offspring>& offspring) {
-  const int m = session_.evaluator.objective_count();
+  const int m = state_.evaluator.objective_count();
   for (int k = 0; k < m; ++k)
     if (std::any_of(offspring.begin(), offspring.end(),
                     [k](const Offspring& design) { return std::isnan(design.known[k]); }))
       wanted_.push_back(k);
   for (int check : checks_) wanted_.push_back(m + check);
-  place_of_.assign(m + session_.evaluator.check_names().size(), -1);
+  place_of_.assign(m + state_.evaluator.check_names().size(), -1);
   for (std::size_t w = 0; w < wanted_.size(); ++w) place_of_[wanted_[w]] = static_cast<int>(w);
-  if (!session_.options.switches.predict || wanted_.empty()) return;
+  if (!state_.options.switches.predict || wanted_.empty()) return;
   for (const Offspring& design : offspring) fits_[cell_of(design.choice)].clear();
   std::vector<std::pair<const Cell*, std::vector<LocalFit>*>> tasks;
   for (auto& entry : fits_) tasks.emplace_back(&entry.first, &entry.second);
-  session_.workers.for_each(tasks.size(), 1, [&](std::size_t i) {
+  state_.workers.for_each(tasks.size(), 1, [&](std::size_t i) {
     std::vector<double> centre;
     for (int step : tasks[i].first->second) centre.push_back((step + 0.5) * cell);
     std::vector<LocalFit>& fits = *tasks[i].second;
-    fits = session_.model.fit(tasks[i].first->first, centre, wanted_);
+    fits = state_.model.fit(tasks[i].first->first, centre, wanted_);
     if (std::all_of(fits.begin(), fits.end(), [](const LocalFit& f) { return f.usable(); })) return;
-    const std::vector<LocalFit> others = session_.relaxed_model.fit(tasks[i].first->first, centre, wanted_);
+    const std::vector<LocalFit> others = state_.relaxed_model.fit(tasks[i].first->first, centre, wanted_);
     for (std::size_t w = 0; w < fits.size(); ++w)
       if (!fits[w].usable()) fits[w] = others[w];
   });
 }
 
 Prospector::Cell Prospector::cell_of(const Choice& choice) const {
-  Cell result{session_.region_of(choice), {}};
-  for (double x : session_.position_of(choice))
+  Cell result{state_.region_of(choice), {}};
+  for (double x : state_.position_of(choice))
     result.second.push_back(std::min(static_cast<int>(x / cell), static_cast<int>(1 / cell) - 1));
   return result;
 }
@@ -64,11 +64,11 @@ double Prospector::known(std::size_t parent, int quantity) const {
 // The fit's value, shifted to agree with what is known of a parent close by.
 double Prospector::value(const LocalFit& fit, const Offspring& design, int quantity) const {
   const Choice& from = parents_[design.parent].choice;
-  const std::vector<double> here = session_.position_of(design.choice);
+  const std::vector<double> here = state_.position_of(design.choice);
   const double value = fit.value(here);
   const double anchor = known(design.parent, quantity);
-  if (std::isnan(anchor) || session_.region_of(from) != session_.region_of(design.choice)) return value;
-  const std::vector<double> there = session_.position_of(from);
+  if (std::isnan(anchor) || state_.region_of(from) != state_.region_of(design.choice)) return value;
+  const std::vector<double> there = state_.position_of(from);
   for (std::size_t a = 0; a < here.size(); ++a)
     if (std::abs(here[a] - there[a]) > nearby) return value;
   return value + anchor - fit.value(there);
@@ -88,9 +88,9 @@ std::vector<double> Prospector::objectives(const Offspring& design, const std::v
 }
 
 double Prospector::chance(const Offspring& design, const std::vector<LocalFit>* fits) const {
-  double product = session_.record.chance(parents_[design.parent].choice, design.choice);
+  double product = state_.record.chance(parents_[design.parent].choice, design.choice);
   for (int check : checks_) {
-    const int quantity = session_.evaluator.objective_count() + check;
+    const int quantity = state_.evaluator.objective_count() + check;
     const LocalFit* fit = fit_of(fits, quantity);
     if (!fit) continue;
     // Logistic in place of the normal distribution; 1.7 matches their slopes.
@@ -102,10 +102,10 @@ double Prospector::chance(const Offspring& design, const std::vector<LocalFit>* 
 
 std::vector<Guess> Prospector::guess(const std::vector<Offspring>& offspring) {
   fit(offspring);
-  const FrontGauge gauge = session_.gauge();
-  const double reach = session_.plan.reach;
+  const FrontGauge gauge = state_.gauge();
+  const double reach = state_.plan.reach;
   std::vector<Guess> guesses(offspring.size());
-  session_.workers.for_each(offspring.size(), 16, [&](std::size_t i) {
+  state_.workers.for_each(offspring.size(), 16, [&](std::size_t i) {
     const Offspring& design = offspring[i];
     const auto found = fits_.find(cell_of(design.choice));
     const std::vector<LocalFit>* fits = found == fits_.end() ? nullptr : &found->second;

@@ -26,13 +26,13 @@ void Prospects::add(const std::vector<Parent>& parents, const std::vector<Choice
     parents_.push_back(parent);
   }
   std::vector<Offspring> offspring;
-  for (Looked& looked : session_.look_new(choices))
+  for (Looked& looked : state_.look_new(choices))
     offspring.push_back(
         Offspring{std::move(looked.choice), std::move(looked.objectives), places[made_from[looked.origin]]});
-  const std::vector<Guess> guesses = Prospector(session_, parents_).guess(offspring);
+  const std::vector<Guess> guesses = Prospector(state_, parents_).guess(offspring);
   for (std::size_t i = 0; i < offspring.size(); ++i) {
     queue_.push(offspring[i].choice, offspring[i].known, static_cast<std::uint32_t>(offspring[i].parent),
-                guesses[i], session_.plan.reach);
+                guesses[i], state_.plan.reach);
   }
 }
 
@@ -40,19 +40,18 @@ void Prospects::reguess(std::size_t most) {
   std::vector<Offspring> offspring;
   for (CandidateQueue::Waiting& waiting : queue_.waiting(most))
     offspring.push_back(Offspring{std::move(waiting.choice), std::move(waiting.known), waiting.origin});
-  queue_.reguess(Prospector(session_, parents_).guess(offspring), session_.plan.reach);
-  guessed_at_ = session_.evaluations();
+  queue_.reguess(Prospector(state_, parents_).guess(offspring), state_.plan.reach);
+  guessed_at_ = state_.evaluations();
 }
 
 bool Prospects::recall() {
   while (queue_.aside() > 0) {
     // Guesses that have not changed will not be better: then more is taken.
-    if (session_.evaluations() == recalled_at_) {
-      if (session_.plan.reach >= all_of_it) return false;
-      session_.plan.reach =
-          session_.plan.reach < 1 ? std::max(2 * session_.plan.reach, least_reach) : all_of_it;
+    if (state_.evaluations() == recalled_at_) {
+      if (state_.plan.reach >= all_of_it) return false;
+      state_.plan.reach = state_.plan.reach < 1 ? std::max(2 * state_.plan.reach, least_reach) : all_of_it;
     }
-    recalled_at_ = session_.evaluations();
+    recalled_at_ = state_.evaluations();
     queue_.recall();
     reguess(queue_.size());
     if (!queue_.empty()) return true;
@@ -61,10 +60,10 @@ bool Prospects::recall() {
 }
 
 std::vector<Choice> Prospects::take(int count) {
-  if (4 * session_.evaluations() > 5 * guessed_at_ + 4 * evaluation_batch) reguess(most_reguessed);
-  auto choices = queue_.pop(count, session_.ledger.front(), session_.gauge(), session_.plan.reach);
+  if (4 * state_.evaluations() > 5 * guessed_at_ + 4 * evaluation_batch) reguess(most_reguessed);
+  auto choices = queue_.pop(count, state_.ledger.front(), state_.gauge(), state_.plan.reach);
   for (const auto& rejected : queue_.take_rejected())
-    session_.ledger.pass_over(rejected.choice, rejected.objectives);
+    state_.ledger.pass_over(rejected.choice, rejected.objectives);
   return choices;
 }
 

@@ -73,35 +73,35 @@ std::vector<Candidate> front_of(const Ledger& ledger) {
   return front;
 }
 
-std::vector<Candidate> fillers_for(Session& session, int top) {
+std::vector<Candidate> fillers_for(SearchState& state, int top) {
   std::vector<Candidate> fillers;
-  const auto missing = [&] { return static_cast<std::int64_t>(top) - session.ledger.front().size(); };
-  if (session.ledger.front().size() == 0 || missing() <= 0) return fillers;
+  const auto missing = [&] { return static_cast<std::int64_t>(top) - state.ledger.front().size(); };
+  if (state.ledger.front().size() == 0 || missing() <= 0) return fillers;
   // Each set wants the next designs by its own objective, so each list is gone through until it gave enough.
   // All list members are dominated: scoring them cannot change the front.
   const Dominated until_broken = [](const std::vector<double>&) { return false; };
   std::set<Choice> tried;
-  for (const Shortlist& list : session.ledger.passed_over()) {
+  for (const Shortlist& list : state.ledger.passed_over()) {
     std::vector<Choice> waiting;
     for (const auto& entry : list.entries()) waiting.push_back(entry.second);
     std::int64_t found = 0;
-    for (std::size_t next = 0; next < waiting.size() && found < missing() && !session.ended();) {
+    for (std::size_t next = 0; next < waiting.size() && found < missing() && !state.ended();) {
       std::vector<Choice> batch;
       for (; next < waiting.size() && batch.size() < 16; ++next)
         if (tried.insert(waiting[next]).second)
           batch.push_back(waiting[next]);
         else
           ++found;
-      const std::vector<Evaluation> results = session.evaluate_apart(batch, until_broken);
+      const std::vector<Evaluation> results = state.evaluate_apart(batch, until_broken);
       for (std::size_t i = 0; i < batch.size(); ++i)
-        if (session.ledger.merge(batch[i], results[i]).tag >= 0) ++found;
+        if (state.ledger.merge(batch[i], results[i]).tag >= 0) ++found;
     }
   }
   std::set<std::int64_t> members;
-  for (const auto& member : session.ledger.front().entries())
+  for (const auto& member : state.ledger.front().entries())
     if (member.alive) members.insert(member.tag);
-  for (std::size_t tag = 0; tag < session.ledger.compliant().size(); ++tag)
-    if (!members.count(static_cast<std::int64_t>(tag))) fillers.push_back(session.ledger.compliant()[tag]);
+  for (std::size_t tag = 0; tag < state.ledger.compliant().size(); ++tag)
+    if (!members.count(static_cast<std::int64_t>(tag))) fillers.push_back(state.ledger.compliant()[tag]);
   return fillers;
 }
 
@@ -119,15 +119,15 @@ std::vector<RankedSet> rank(const std::vector<Candidate>& front, const std::vect
   return sets;
 }
 
-void settle_near_misses(Session& session) {
-  NearMisses& misses = session.ledger.near_misses();
-  const std::int64_t most = std::max<std::int64_t>(64, session.plan.evaluations / 20);
-  for (std::int64_t spent = 0; spent < most && !session.ended();) {
+void settle_near_misses(SearchState& state) {
+  NearMisses& misses = state.ledger.near_misses();
+  const std::int64_t most = std::max<std::int64_t>(64, state.plan.evaluations / 20);
+  for (std::int64_t spent = 0; spent < most && !state.ended();) {
     std::vector<Choice> open = misses.unsettled(NearMisses::kept);
     std::sort(open.begin(), open.end());
     open.erase(std::unique(open.begin(), open.end()), open.end());
     if (open.empty()) return;
-    const std::vector<Evaluation> results = session.evaluate_apart(open, Dominated{});
+    const std::vector<Evaluation> results = state.evaluate_apart(open, Dominated{});
     for (std::size_t i = 0; i < open.size(); ++i) misses.settle(open[i], results[i]);
     spent += static_cast<std::int64_t>(open.size());
   }

@@ -2,6 +2,7 @@
 
 #include <algorithm>
 #include <cmath>
+#include <functional>
 
 #include "dropfront/search/aims.hpp"
 #include "dropfront/search/nlopt_run.hpp"
@@ -23,37 +24,23 @@ struct Run {
 
 class Relaxer {
  public:
-  explicit Relaxer(Session& session)
-      : session_(session),
-        dimensions_(static_cast<int>(session.axes.size())),
-        regions_(regions_of(session.space, session.plan.most_regions)),
+  explicit Relaxer(SearchState& state)
+      : state_(state),
+        dimensions_(static_cast<int>(state.axes.size())),
+        regions_(regions_of(state.space, state.plan.most_regions)),
         logs_(regions_.size()),
-        range_(session.evaluator.objective_count()),
+        range_(state.evaluator.objective_count()),
         polish_evaluations_(8 * (dimensions_ + 1)) {
-    for (const Axis& axis : session.axes) high_.push_back(axis.position.size() > 1 ? 1.0 : 0.0);
+    for (const Axis& axis : state.axes) high_.push_back(axis.position.size() > 1 ? 1.0 : 0.0);
   }
 
   Relaxation run() {
-    const std::int64_t half = session_.plan.relaxed / 2;
-    session_.workers.for_each(regions_.size(), 1, [this](std::size_t r) { sample(r); });
-    // What the first regions leave of their share goes to those that need more.
-    for (std::int64_t allowed : {half - spent(), half + half / 2 - spent()}) {
-      std::vector<std::size_t> open;
-      for (std::size_t r = 0; r < regions_.size(); ++r)
-        if (!complies(logs_[r])) open.push_back(r);
-      const std::int64_t share = open.empty() ? 0 : allowed / static_cast<std::int64_t>(open.size());
-      session_.workers.for_each(open.size(), 1, [&](std::size_t i) { seek_compliance(open[i], share); });
-    }
-    measure();
     Relaxation result{{}, {}, range_};
-    polish(balanced_runs(), result);
-    measure();
-    polish(aimed_runs(), result);
+    run_batches(result);
     measure();
     result.range = range_;
-    const std::int64_t share =
-        session_.plan.evaluations / (8 * static_cast<std::int64_t>(regions_.size())) + 1;
-    const auto wanted = static_cast<std::size_t>(std::min<std::int64_t>(session_.plan.starts, share));
+    const std::int64_t share = state_.plan.evaluations / (8 * static_cast<std::int64_t>(regions_.size())) + 1;
+    const auto wanted = static_cast<std::size_t>(std::min<std::int64_t>(state_.plan.starts, share));
     for (const RelaxedLog& log : logs_) {
       for (RelaxedDesign& design : spread_of(log, wanted, range_))
         result.starts.push_back(RelaxedOptimum{std::move(design), balanced_aim(objectives())});
@@ -63,13 +50,42 @@ class Relaxer {
   }
 
  private:
-  int objectives() const { return session_.evaluator.objective_count(); }
+  int objectives() const { return state_.evaluator.objective_count(); }
+
+  void run_batches(Relaxation& result) {
+    const std::int64_t half = state_.plan.relaxed / 2;
+    if (!batch(regions_.size(), [this](std::size_t r) { sample(r); })) return;
+    // What the first regions leave of their share goes to those that need more.
+    for (std::int64_t allowed : {half - spent(), half + half / 2 - spent()}) {
+      std::vector<std::size_t> open;
+      for (std::size_t r = 0; r < regions_.size(); ++r)
+        if (!complies(logs_[r])) open.push_back(r);
+      const std::int64_t share = open.empty() ? 0 : allowed / static_cast<std::int64_t>(open.size());
+      if (!batch(open.size(), [&](std::size_t i) { seek_compliance(open[i], share); })) return;
+    }
+    measure();
+    if (!polish(balanced_runs(), result)) return;
+    measure();
+    polish(aimed_runs(), result);
+  }
+
+  // False when the end came first: then the logs are as before. How far each thread had come by then depends
+  // on their timing, so nothing of an unfinished batch may count.
+  bool batch(std::size_t count, const std::function<void(std::size_t)>& body) {
+    std::vector<std::size_t> before;
+    for (const RelaxedLog& log : logs_) before.push_back(log.size());
+    state_.workers.for_each(count, 1, body);
+    if (!state_.ended()) return true;
+    for (std::size_t r = 0; r < logs_.size(); ++r)
+      logs_[r].erase(logs_[r].begin() + static_cast<std::ptrdiff_t>(before[r]), logs_[r].end());
+    return false;
+  }
 
   void sample(std::size_t region) {
-    for (int n = 0; n < sampled && !session_.ended(); ++n) {
-      std::vector<double> position = spread_point(n, dimensions_, n == 0 ? 0 : session_.options.seed);
+    for (int n = 0; n < sampled && !state_.ended(); ++n) {
+      std::vector<double> position = spread_point(n, dimensions_, n == 0 ? 0 : state_.options.seed);
       for (int k = 0; k < dimensions_; ++k) position[k] *= high_[k];
-      logs_[region].push_back(evaluate_relaxed(session_.evaluator, regions_[region], position));
+      logs_[region].push_back(evaluate_relaxed(state_.evaluator, regions_[region], position));
     }
   }
 
@@ -79,8 +95,8 @@ class Relaxer {
     r.low.assign(dimensions_, 0.0);
     r.high = high_;
     r.max_evaluations = static_cast<int>(std::max<std::int64_t>(evaluations, 1));
-    r.seed = session_.options.seed * 1000003 + stream;
-    r.stop = &session_.halted();
+    r.seed = state_.options.seed * 1000003 + stream;
+    r.stop = &state_.halted();
     return r;
   }
 
@@ -96,7 +112,7 @@ class Relaxer {
 
   // First globally; where that has been tried in vain, locally from the best so far.
   void seek_compliance(std::size_t region, std::int64_t share) {
-    if (session_.ended() || share < 1) return;
+    if (state_.ended() || share < 1) return;
     RelaxedLog& log = logs_[region];
     const bool first = log.size() <= sampled;
     NloptRequest r = request(first ? NloptMethod::direct_l : NloptMethod::sbplx, share, region);
@@ -105,8 +121,8 @@ class Relaxer {
                 return a.violation < b.violation;
               })->position;
     run_nlopt(r, [&](const std::vector<double>& position) {
-      session_.ended();
-      log.push_back(evaluate_relaxed(session_.evaluator, regions_[region], position));
+      state_.ended();
+      log.push_back(evaluate_relaxed(state_.evaluator, regions_[region], position));
       return log.back().violation;
     });
   }
@@ -147,7 +163,7 @@ class Relaxer {
 
   std::vector<Run> aimed_runs() const {
     std::vector<Run> runs;
-    for (const auto& weights : spread_aims(objectives(), session_.plan.aims)) {
+    for (const auto& weights : spread_aims(objectives(), state_.plan.aims)) {
       auto ordered = runs_for(weights);
       if (ordered.size() > regions_an_aim) ordered.resize(regions_an_aim);
       for (auto& entry : ordered) runs.push_back(std::move(entry.second));
@@ -155,12 +171,12 @@ class Relaxer {
     return runs;
   }
 
-  void polish(std::vector<Run> runs, Relaxation& result) {
-    const std::int64_t left = session_.plan.relaxed - spent();
+  bool polish(std::vector<Run> runs, Relaxation& result) {
+    const std::int64_t left = state_.plan.relaxed - spent();
     const std::int64_t affordable = std::max<std::int64_t>(left / polish_evaluations_, 0);
     if (static_cast<std::int64_t>(runs.size()) > affordable)
       runs.erase(runs.begin() + static_cast<std::ptrdiff_t>(affordable), runs.end());
-    session_.workers.for_each(runs.size(), 1, [&](std::size_t i) { polish(runs[i]); });
+    if (!batch(runs.size(), [&](std::size_t i) { polish(runs[i]); })) return false;
     for (Run& run : runs) {
       RelaxedLog& log = logs_[run.region];
       run.log.push_back(run.start);
@@ -168,34 +184,35 @@ class Relaxer {
       run.log.pop_back();
       log.insert(log.end(), run.log.begin(), run.log.end());
     }
+    return true;
   }
 
   void polish(Run& run) {
-    if (session_.ended()) return;
+    if (state_.ended()) return;
     NloptRequest r = request(NloptMethod::sbplx, polish_evaluations_, 7919 + run.region);
     r.start = run.start.position;
     run_nlopt(r, [&](const std::vector<double>& position) {
-      session_.ended();
-      run.log.push_back(evaluate_relaxed(session_.evaluator, regions_[run.region], position));
+      state_.ended();
+      run.log.push_back(evaluate_relaxed(state_.evaluator, regions_[run.region], position));
       return achievement(run.log.back().objectives, run.log.back().violation, run.weights, range_);
     });
   }
 
   void teach(const RelaxedLog& log) {
     for (const RelaxedDesign& design : log) {
-      ++session_.ledger.counts().relaxed;
-      if (design.violation == 0) session_.compliant_range.take(design.objectives);
+      ++state_.ledger.counts().relaxed;
+      if (design.violation == 0) state_.compliant_range.take(design.objectives);
       // Far outside the limits objectives may be stand-ins.
       if (!(design.violation < 1)) continue;
       Evaluation learnt;
       learnt.objectives = design.objectives;
       learnt.headroom = design.headroom;
-      session_.relaxed_model.add(session_.region_of(design.categories), design.position,
-                                 session_.quantities_of(learnt));
+      state_.relaxed_model.add(state_.region_of(design.categories), design.position,
+                               state_.quantities_of(learnt));
     }
   }
 
-  Session& session_;
+  SearchState& state_;
   int dimensions_;
   std::vector<Choice> regions_;
   std::vector<RelaxedLog> logs_;  ///< one a region
@@ -224,6 +241,6 @@ std::vector<Choice> regions_of(const Space& space, int most) {
   return regions;
 }
 
-Relaxation relax(Session& session) { return Relaxer(session).run(); }
+Relaxation relax(SearchState& state) { return Relaxer(state).run(); }
 
 }  // namespace dropfront::search

@@ -11,43 +11,43 @@ namespace dropfront::search {
 namespace {
 
 /// The stages before the proof; true when they came to their end by themselves.
-bool find_designs(Session& session) {
-  Prospects prospects(session);
-  if (session.options.switches.relax && !session.axes.empty()) relax_and_snap(session, prospects);
-  scatter(session, prospects);
-  return close(session, prospects);
+bool find_designs(SearchState& state) {
+  Prospects prospects(state);
+  if (state.options.switches.relax && !state.axes.empty()) relax_and_snap(state, prospects);
+  scatter(state, prospects);
+  return close(state, prospects);
 }
 
 }  // namespace
 
 SearchOutcome run_search(const Evaluator& evaluator, const SearchOptions& options, const Bounder* bounder) {
-  Session session(evaluator, options);
+  SearchState state(evaluator, options);
   SearchOutcome outcome;
-  if (session.space.size() < 1 || worth_enumerating(session)) {
-    outcome.proof = enumerate(session);
+  if (state.space.size() < 1 || worth_enumerating(state)) {
+    outcome.proof = enumerate(state);
     outcome.exhaustive = outcome.closed = outcome.proof->complete;
   } else {
-    const bool wanted = bounder && worth_proving(session);
-    const std::int64_t looks = session.plan.looks;
+    const bool wanted = bounder && worth_proving(state);
+    const std::int64_t looks = state.plan.looks;
     // The proof needs its share of what a budget allows.
-    if (wanted && options.budget) session.plan.looks = (looks + 1) / 2;
-    outcome.closed = find_designs(session);
-    session.plan.looks = looks;
-    if (wanted) outcome.proof = prove(session, *bounder);
+    if (wanted && options.budget) state.plan.looks = (looks + 1) / 2;
+    outcome.closed = find_designs(state);
+    state.plan.looks = looks;
+    if (wanted) outcome.proof = prove(state, *bounder);
   }
-  session.report("rank", 0);
-  const std::vector<Candidate> fillers = fillers_for(session, options.top);
-  settle_near_misses(session);
-  outcome.front = front_of(session.ledger);
+  state.report("rank", 0);
+  const std::vector<Candidate> fillers = fillers_for(state, options.top);
+  settle_near_misses(state);
+  outcome.front = front_of(state.ledger);
   outcome.ranked = rank(outcome.front, fillers, options.top, evaluator.resolution());
-  outcome.near_misses = session.ledger.near_misses().result();
-  outcome.tallies = session.ledger.tallies();
-  outcome.counts = session.ledger.counts();
+  outcome.near_misses = state.ledger.near_misses().result();
+  outcome.tallies = state.ledger.tallies();
+  outcome.counts = state.ledger.counts();
   const bool budget_spent =
-      options.budget && (session.looks_refused || session.pairs_refused || !session.may_look());
+      options.budget && (state.looks_refused || state.pairs_refused || !state.may_look());
   const bool proven = outcome.proof && outcome.proof->complete;
-  outcome.cut_short = session.ended() || (!proven && (budget_spent || outcome.proof));
-  session.report("rank", 1);
+  outcome.cut_short = state.ended() || (!proven && (budget_spent || outcome.proof));
+  state.report("rank", 1);
   return outcome;
 }
 

@@ -16,16 +16,16 @@ constexpr double cheap = 0.0;
 
 class Snapper {
  public:
-  Snapper(const Session& session, const RelaxedOptimum& optimum, const ObjectiveRange& range)
-      : session_(session),
+  Snapper(const SearchState& state, const RelaxedOptimum& optimum, const ObjectiveRange& range)
+      : state_(state),
         optimum_(optimum),
         range_(range),
-        here_(session.space.slots.size()),
-        near_(session.space.slots.size()) {
-    for (std::size_t a = 0; a < session.axes.size(); ++a) place(session.axes[a], optimum.design.position[a]);
+        here_(state.space.slots.size()),
+        near_(state.space.slots.size()) {
+    for (std::size_t a = 0; a < state.axes.size(); ++a) place(state.axes[a], optimum.design.position[a]);
     for (std::size_t s = 0; s < here_.size(); ++s) {
       if (!here_[s].empty()) continue;
-      const Slot& slot = session.space.slots[s];
+      const Slot& slot = state.space.slots[s];
       for (std::int32_t option = 0; option < slot.size; ++option)
         if (!slot.category || option == optimum.design.categories[s]) here_[s].push_back(option);
       near_[s] = here_[s];
@@ -62,7 +62,7 @@ class Snapper {
     };
     for (const Choice& from : bases) {
       Choice below = from, above = from;
-      for (const Axis& axis : session_.axes) {
+      for (const Axis& axis : state_.axes) {
         below[axis.slot] = near_[axis.slot].front();
         above[axis.slot] = near_[axis.slot].back();
       }
@@ -92,7 +92,7 @@ class Snapper {
 
   // How good a look is for the aim: violation first, then the weighted sum of what is known.
   std::pair<double, double> merit(const Choice& choice) const {
-    const Evaluation look = session_.evaluator.look(choice);
+    const Evaluation look = state_.evaluator.look(choice);
     double sum = 0;
     for (std::size_t k = 0; k < look.objectives.size(); ++k)
       if (!std::isnan(look.objectives[k]))
@@ -101,7 +101,7 @@ class Snapper {
     return {violation, sum};
   }
 
-  const Session& session_;
+  const SearchState& state_;
   const RelaxedOptimum& optimum_;
   const ObjectiveRange& range_;
   std::vector<Options> here_;  ///< options of the bases, by slot
@@ -110,8 +110,8 @@ class Snapper {
 
 }  // namespace
 
-Snapped snap(const Session& session, const RelaxedOptimum& optimum, const ObjectiveRange& range) {
-  const Snapper snapper(session, optimum, range);
+Snapped snap(const SearchState& state, const RelaxedOptimum& optimum, const ObjectiveRange& range) {
+  const Snapper snapper(state, optimum, range);
   Snapped result;
   for (double share : {dear, middle, cheap}) {
     Choice base = snapper.base(share);
@@ -122,8 +122,8 @@ Snapped snap(const Session& session, const RelaxedOptimum& optimum, const Object
   return result;
 }
 
-Snapped snap_dear(const Session& session, const RelaxedOptimum& optimum, const ObjectiveRange& range) {
-  const Snapper snapper(session, optimum, range);
+Snapped snap_dear(const SearchState& state, const RelaxedOptimum& optimum, const ObjectiveRange& range) {
+  const Snapper snapper(state, optimum, range);
   Snapped result;
   result.bases.push_back(snapper.base(dear));
   result.around = snapper.around(result.bases);

@@ -90,8 +90,8 @@ TEST_CASE("A required voltage above the unloaded rail leaves nothing, and says s
 
 TEST_CASE("A larger series resistor can raise the available current of a bridge in its knee") {
   // Bridge, 128.5 V, 60 Hz, 2.49 uF, threshold 17.6 V, 33 uF, 16 V wanted: 29.4/31.0/33.8 mA at 67/135/270
-  // ohm (stated to three digits by a simulator and by an independent prototype; drops and slopes as chosen
-  // here).
+  // ohm (stated to three digits by a simulator and by an independent piecewise-linear calculation; drops and
+  // slopes as chosen here).
   const double expected_A[] = {29.4e-3, 31.0e-3, 33.8e-3};
   const double series_ohm[] = {67, 135, 270};
   double previous_A = 0;

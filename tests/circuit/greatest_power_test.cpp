@@ -41,8 +41,8 @@ TEST_CASE("No load on a fine scan gives more power than the greatest found") {
 }
 
 TEST_CASE("The current available at the lowest rail overstates a constant-power load's reach") {
-  // 4/13/38 % for 12/24/47 V clamps (a published rule gives the sign only; the figures are a prototype's at
-  // unstated values, so this holds their order and size, not their digits).
+  // 4/13/38 % for 12/24/47 V clamps (a published rule gives the sign only; the figures are an independent
+  // piecewise-linear calculation's at unstated values, so this holds their order and size, not their digits).
   double previous = 0;
   for (const double clamp_V : {12.0, 24.0, 47.0}) {
     ElementValues v = ordinary_values();

@@ -31,7 +31,7 @@ SteadyState steady(const char* arrangement, const ElementValues& v) {
 
 TEST_CASE("A shunt halves the whole no-load input, and the input rises with the load") {
   // 0.451 -> 0.215 W at 0.2 mA; 0.412 W at 18 mA (zener 0.438): stated beforehand from a simulator and an
-  // independent prototype, trigger network and diodes as chosen here. 5 % covers those.
+  // independent piecewise-linear calculation, trigger network and diodes as chosen here. 5 % covers those.
   REQUIRE_THAT(steady("half-wave-clamp-ahead", shunt_values(0.2e-3)).input_power_W, WithinRel(0.451, 0.05));
   REQUIRE_THAT(steady("half-wave-thyristor-shunt", shunt_values(0.2e-3)).input_power_W,
                WithinRel(0.215, 0.05));

@@ -60,7 +60,8 @@ TEST_CASE("A worst re-plug puts half C times twice the crest squared into the se
 }
 
 TEST_CASE("Plug-in drives the rail through the reservoir's series resistance") {
-  // 47 ohm, ESR 0.1/0.8/2 ohm: 13.7/21.8/33.9 V, found with a simulator and an independent prototype.
+  // 47 ohm, ESR 0.1/0.8/2 ohm: 13.7/21.8/33.9 V, found with a simulator and an independent
+  // piecewise-linear calculation.
   const double esr_ohm[] = {0.1, 0.8, 2.0};
   const double expected_V[] = {13.7, 21.8, 33.9};
   for (int k = 0; k < 3; ++k) {

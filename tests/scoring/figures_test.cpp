@@ -45,8 +45,8 @@ double nominal_available_A(const test::Example& example) {
 
 TEST_CASE(
     "Standby of 0.68 uF, 47 ohm, 12 V, 0.2 mA at 230 V: 0.452 W nominal, 0.529 W at its production worst") {
-  // By an exact prototype (0.451 W by ngspice in the same circuit). Its discharge chain and tolerances are
-  // not known: 2 x 500 kilohm takes 53 mW here; film 10 %, zener and resistors 5 %.
+  // By an independent piecewise-linear calculation (0.451 W by ngspice in the same circuit). Its discharge
+  // chain and tolerances are not known: 2 x 500 kilohm takes 53 mW here; film 10 %, zener and resistors 5 %.
   test::Example example("half-wave-clamp-ahead");
   example.discharge.resistance_ohm = 500e3;
   Evidence evidence(example.design(), example.requirement, example.supply());
@@ -75,7 +75,8 @@ TEST_CASE("Ripple current in the reservoir: 0.7 mA asleep, 30.5 mA at load") {
 }
 
 TEST_CASE("In a bridge's knee a larger series resistor raises the available current: 29.4, 31.0, 33.8 mA") {
-  // By an exact prototype: 128.5 V, 60 Hz, 2.49 uF, V0 17.6 V, 33 uF, V_required 16 V; 67, 135, 270 ohm.
+  // By an independent piecewise-linear calculation: 128.5 V, 60 Hz, 2.49 uF, V0 17.6 V, 33 uF, V_required 16
+  // V; 67, 135, 270 ohm.
   const double resistor_ohm[] = {67, 135, 270};
   const double expected_mA[] = {29.4, 31.0, 33.8};
   circuit::ElementValues values;
@@ -135,8 +136,8 @@ TEST_CASE("Bench: 11.9 V unloaded, about 10.7 V at 22 mA, ripple about 1.2 V at 
 }
 
 TEST_CASE("Available current saturates: 9.1 V and above give the same, 8.2 V less, 7.5 V far less") {
-  // By an exact prototype: 29.66 mA for 9.1 V and above, 23.6 at 8.2, 8.6 at 7.5 V; the same shape is asked
-  // of the bench circuit behind a 5 V regulator that needs 6.7 V.
+  // By an independent piecewise-linear calculation: 29.66 mA for 9.1 V and above, 23.6 at 8.2, 8.6 at 7.5 V;
+  // the same shape is asked of the bench circuit behind a 5 V regulator that needs 6.7 V.
   auto example = bench();
   example.linear(5, 0.04, 1.7, 0);
   const auto with_clamp = [&](double volts) {

@@ -124,7 +124,8 @@ TEST_CASE("Until a shunt has fired its reservoir takes the plug-in pulse") {
 }
 
 TEST_CASE("Rail peaks at plug-in: 13.7, 21.8 and 33.9 V with 47 ohm and an ESR of 0.1, 0.8 and 2 ohm") {
-  // Measured with ngspice and an exact prototype: 12 V clamp across a full reservoir, 0.68 uF.
+  // With ngspice and by an independent piecewise-linear calculation: 12 V clamp across a full reservoir, 0.68
+  // uF.
   const double esr_ohm[] = {0.1, 0.8, 2.0};
   const double expected_V[] = {13.7, 21.8, 33.9};
   const test::Example example("half-wave-clamp-across");

@@ -74,8 +74,8 @@ TEST_CASE("The power law's capability is the greatest that a fine scan over the 
 
 TEST_CASE("'Available at the input minimum' overstates a step-down stage, more with a higher clamp") {
   // Such a claim takes the current there at the clamp's voltage. By charge balance that current exceeds the
-  // clamp's own by (Vpk - 6 V)/(Vpk - Vz), Vpk the low crest less the drops; an exact piecewise-linear
-  // prototype gave 4/13/38 % for 12/24/47 V clamps on 120 V mains.
+  // clamp's own by (Vpk - 6 V)/(Vpk - Vz), Vpk the low crest less the drops; an independent
+  // piecewise-linear calculation gave 4/13/38 % for 12/24/47 V clamps on 120 V mains.
   const double expected[] = {0.04, 0.13, 0.38};
   const parts::Clamp clamps[] = {test::zener_12V(), test::zener_24V(), test::zener_47V()};
   for (int i = 0; i < 3; ++i) {
@@ -84,7 +84,7 @@ TEST_CASE("'Available at the input minimum' overstates a step-down stage, more w
     example.clamp.knee_current_A.reset();     // no knee: the rail stands at the clamp until it lets go
     const auto result = capability(example);
     INFO("clamp " << clamps[i].voltage_V << " V: " << result.naive_A / result.by_law_A);
-    // The prototype's stage and tolerances are not known: a sixth of the figure, and 1 % for slopes.
+    // That calculation's stage and tolerances are not known: a sixth of the figure, and 1 % for slopes.
     REQUIRE_THAT(result.naive_A / result.by_law_A - 1, WithinAbs(expected[i], expected[i] / 6 + 0.01));
   }
 }

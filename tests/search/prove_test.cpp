@@ -1,7 +1,10 @@
 // The proof against full enumeration, on catalogues small enough for both.
 #include "dropfront/search/prove.hpp"
 
+#include <array>
+#include <atomic>
 #include <numeric>
+#include <set>
 
 #include "dropfront/search/rank.hpp"
 #include "search/proof_lists.hpp"
@@ -41,14 +44,26 @@ struct Proven {
   std::vector<Candidate> front;
 };
 
+/// Sets its stop flag at a given bound.
+struct StoppingLists : ProofLists {
+  StoppingLists(const ProofShape& shape, long after) : ProofLists(shape), stop_after(after) {}
+  Bounds bound(const Box& box, int depth) const override {
+    if (++bounds >= stop_after) stop = true;
+    return ProofLists::bound(box, depth);
+  }
+  long stop_after;
+  mutable std::atomic<long> bounds{0};
+  mutable std::atomic<bool> stop{false};
+};
+
 /// The proof alone: no search before it, so that it has to find everything itself.
 Proven prove_with(const ProofShape& shape, Fault fault) {
   const ProofLists lists(shape, fault);
   const SearchOptions options = proving();
-  Session session(lists, options);
+  SearchState state(lists, options);
   Proven result;
-  result.proof = prove(session, lists);
-  result.front = front_of(session.ledger);
+  result.proof = prove(state, lists);
+  result.front = front_of(state.ledger);
   return result;
 }
 
@@ -168,6 +183,35 @@ TEST_CASE("a budget cuts a proof cleanly: what is left is counted and its bounds
       for (const Candidate& c : exact) CHECK(c.evaluation.objectives[k] >= best);
     }
   }
+}
+
+TEST_CASE("a proof that is stopped keeps whole batches only, whatever the threads were at") {
+  // What stands after each batch of a proof that runs to its end.
+  using Standing = std::array<std::int64_t, 3>;
+  std::set<Standing> whole{{0, 0, 0}};
+  std::size_t inside = 0;
+  for (const bool stopping : {false, true})
+    for (const int threads : {1, 3})
+      for (long after = stopping ? 150 : 1'000'000'000; after <= (stopping ? 6000 : 1'000'000'000);
+           after += 450) {
+        const StoppingLists lists(catalogue(3, 0.0), after);
+        SearchOptions options = proving();
+        options.threads = threads;
+        options.stop = &lists.stop;
+        if (!stopping)
+          options.progress = [&whole](const Progress& p) { whole.insert({p.looked, p.scored, p.front}); };
+        SearchState state(lists, options);
+        const Proof proof = prove(state, lists);
+        require_counts_add_up(proof, lists.space());
+        if (!stopping) continue;
+        if (!lists.stop) break;
+        const SearchCounts& counts = state.ledger.counts();
+        INFO(threads << " threads, stopped at bound " << after << ", " << counts.looked << " looked at");
+        CHECK(whole.count({counts.looked, counts.scored, state.ledger.front().size()}) == 1);
+        inside += counts.looked > 0;
+      }
+  CHECK(whole.size() > 4);
+  CHECK(inside > 4);
 }
 
 TEST_CASE("a stop flag leaves everything open") {

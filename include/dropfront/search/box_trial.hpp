@@ -3,7 +3,7 @@
 #include <vector>
 
 #include "dropfront/search/box_split.hpp"
-#include "dropfront/search/session.hpp"
+#include "dropfront/search/search_state.hpp"
 
 namespace dropfront::search {
 
@@ -20,7 +20,7 @@ struct OpenBox {
 OpenBox open_box(Box box, int objectives);
 
 enum class Fate {
-  untried,    ///< the end came first
+  untried,    ///< the end came first: its batch does not count
   broken,     ///< every member breaks a limit
   undefined,  ///< every member lacks a figure
   dominated,  ///< the front dominates what any member could be at best
@@ -46,7 +46,6 @@ struct Tried : Verdict {
   std::vector<Shaved> shaved;   ///< members discarded next, option by option
   double members = 0;           ///< those that remained
   std::vector<OpenBox> halves;  ///< fate split
-  OpenBox rest;                 ///< fate untried: the box as it was
   struct Single : Verdict {
     Choice choice;
     bool seen = false;  ///< looked at before the proof
@@ -59,8 +58,8 @@ struct Tried : Verdict {
 /// Tries boxes against a front that stays as it is meanwhile. Safe from several threads at once.
 class BoxTrial {
  public:
-  BoxTrial(const Session& session, const Bounder& bounder, const BoxSplitter& splitter)
-      : session_(session), bounder_(bounder), splitter_(splitter), front_(session.ledger.front()) {}
+  BoxTrial(const SearchState& state, const Bounder& bounder, const BoxSplitter& splitter)
+      : state_(state), bounder_(bounder), splitter_(splitter), front_(state.ledger.front()) {}
 
   /// `extent`: see BoxSplitter::widest.
   Tried run(OpenBox open, const std::vector<double>& extent) const;
@@ -76,7 +75,7 @@ class BoxTrial {
   void settle(const Box& box, Tried& tried) const;
   Tried::Single settle(const Choice& choice) const;
 
-  const Session& session_;
+  const SearchState& state_;
   const Bounder& bounder_;
   const BoxSplitter& splitter_;
   const ParetoArchive& front_;

@@ -1,6 +1,6 @@
 #pragma once
 #include "dropfront/search/prospects.hpp"
-#include "dropfront/search/session.hpp"
+#include "dropfront/search/search_state.hpp"
 
 namespace dropfront::search {
 
@@ -9,6 +9,6 @@ namespace dropfront::search {
 /// then the two-part changes of coupled slots, and again. While nothing complies the designs that break
 /// limits least are taken up instead. Returns true when it came to that end by itself with no one-part change
 /// left out.
-bool close(Session& session, Prospects& queue);
+bool close(SearchState& state, Prospects& queue);
 
 }  // namespace dropfront::search

@@ -5,7 +5,7 @@
 #include <vector>
 
 #include "dropfront/search/candidate_queue.hpp"
-#include "dropfront/search/session.hpp"
+#include "dropfront/search/search_state.hpp"
 
 namespace dropfront::search {
 
@@ -33,7 +33,7 @@ struct Offspring {
 /// the parent's.
 class Prospector {
  public:
-  Prospector(Session& session, const std::vector<Parent>& parents);
+  Prospector(SearchState& state, const std::vector<Parent>& parents);
 
   std::vector<Guess> guess(const std::vector<Offspring>& offspring);
 
@@ -47,7 +47,7 @@ class Prospector {
   double known(std::size_t parent, int quantity) const;
   double value(const LocalFit& fit, const Offspring& design, int quantity) const;
 
-  Session& session_;
+  SearchState& state_;
   const std::vector<Parent>& parents_;
   std::vector<int> checks_;
   std::vector<int> wanted_;    ///< quantities fitted: unknown objectives, then telling checks

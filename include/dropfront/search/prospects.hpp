@@ -5,15 +5,15 @@
 
 #include "dropfront/search/candidate_queue.hpp"
 #include "dropfront/search/prospector.hpp"
-#include "dropfront/search/session.hpp"
+#include "dropfront/search/search_state.hpp"
 
 namespace dropfront::search {
 
 /// The designs under consideration: looked at, guessed at, waiting in order of promise.
 class Prospects {
  public:
-  explicit Prospects(Session& session)
-      : session_(session), queue_(session.codec, session.evaluator.objective_count()) {}
+  explicit Prospects(SearchState& state)
+      : state_(state), queue_(state.codec, state.evaluator.objective_count()) {}
 
   /// Looks at designs and queues those that stay in play. `made_from[i]`: index into `parents` of choice i.
   void add(const std::vector<Parent>& parents, const std::vector<Choice>& choices,
@@ -33,7 +33,7 @@ class Prospects {
  private:
   void reguess(std::size_t most);
 
-  Session& session_;
+  SearchState& state_;
   CandidateQueue queue_;
   std::vector<Parent> parents_;                   ///< of all designs ever queued
   std::map<std::int64_t, std::size_t> place_of_;  ///< tag of a compliant parent -> its place there

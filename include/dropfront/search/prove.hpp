@@ -1,11 +1,11 @@
 #pragma once
 #include "dropfront/search/proof.hpp"
-#include "dropfront/search/session.hpp"
+#include "dropfront/search/search_state.hpp"
 
 namespace dropfront::search {
 
 /// Whether a proof is asked for, or the space small enough to make one anyway.
-bool worth_proving(const Session& session);
+bool worth_proving(const SearchState& state);
 
 /// Stage prove: branch and bound over lists of options. A box is thinned out (Bounder::reduce) and discarded
 /// when every member breaks a limit or when the front rejects its bound; small boxes are settled design by
@@ -17,6 +17,6 @@ bool worth_proving(const Session& session);
 /// Boxes are taken up depth first in batches of a fixed size; a batch sees the front as it was before, and is
 /// merged in order: any thread count gives the same front and the same counts. The stop flag, the time and
 /// the budget (designs looked at and boxes bounded together) leave the rest open and say so.
-Proof prove(Session& session, const Bounder& bounder);
+Proof prove(SearchState& state, const Bounder& bounder);
 
 }  // namespace dropfront::search

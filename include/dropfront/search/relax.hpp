@@ -3,7 +3,7 @@
 
 #include "dropfront/search/achievement.hpp"
 #include "dropfront/search/relaxed_log.hpp"
-#include "dropfront/search/session.hpp"
+#include "dropfront/search/search_state.hpp"
 
 namespace dropfront::search {
 
@@ -22,9 +22,9 @@ struct Relaxation {
 /// Stage relax, every region (combination of category options) by itself: an even sample, then a global NLopt
 /// method on the violation alone until a design complies. Then a local one from the best of the log, first
 /// for a balanced aim in every region that has a complying design, then for the spread aims in the regions
-/// that serve each best. Regions beyond the effort's limit are thinned out evenly. Feeds the session's
+/// that serve each best. Regions beyond the effort's limit are thinned out evenly. Feeds the search state's
 /// relaxed model.
-Relaxation relax(Session& session);
+Relaxation relax(SearchState& state);
 
 /// Combinations of category options, at most `most` of them, evenly thinned.
 std::vector<Choice> regions_of(const Space& space, int most);

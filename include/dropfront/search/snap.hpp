@@ -2,7 +2,7 @@
 #include <vector>
 
 #include "dropfront/search/relax.hpp"
-#include "dropfront/search/session.hpp"
+#include "dropfront/search/search_state.hpp"
 
 namespace dropfront::search {
 
@@ -19,9 +19,9 @@ struct Snapped {
 };
 
 /// None twice, none of the bases among the others.
-Snapped snap(const Session& session, const RelaxedOptimum& optimum, const ObjectiveRange& range);
+Snapped snap(const SearchState& state, const RelaxedOptimum& optimum, const ObjectiveRange& range);
 
 /// The same from the dearest base alone.
-Snapped snap_dear(const Session& session, const RelaxedOptimum& optimum, const ObjectiveRange& range);
+Snapped snap_dear(const SearchState& state, const RelaxedOptimum& optimum, const ObjectiveRange& range);
 
 }  // namespace dropfront::search

@@ -1,4 +1,4 @@
-#include "dropfront/search/session.hpp"
+#include "dropfront/search/search_state.hpp"
 
 #include <algorithm>
 #include <cmath>
@@ -12,7 +12,7 @@ constexpr double unknown_headroom = 0.05;
 
 }  // namespace
 
-Session::Session(const Evaluator& the_evaluator, const SearchOptions& the_options)
+SearchState::SearchState(const Evaluator& the_evaluator, const SearchOptions& the_options)
     : evaluator(the_evaluator),
       space(the_evaluator.space()),
       options(the_options),
@@ -37,21 +37,21 @@ Session::Session(const Evaluator& the_evaluator, const SearchOptions& the_option
   }
 }
 
-bool Session::over() const {
+bool SearchState::over() const {
   if (halted_.load(std::memory_order_relaxed)) return true;
   const bool stop = options.stop && options.stop->load(std::memory_order_relaxed);
   return stop || (options.time_s && std::chrono::steady_clock::now() >= deadline_);
 }
 
-bool Session::ended() {
+bool SearchState::ended() {
   const bool over = this->over();
   if (over) halted_.store(true, std::memory_order_relaxed);
   return over;
 }
 
-void Session::lift_evaluation_limit() { plan.evaluations = evaluations_ + (std::int64_t{1} << 60); }
+void SearchState::lift_evaluation_limit() { plan.evaluations = evaluations_ + (std::int64_t{1} << 60); }
 
-std::vector<Looked> Session::look_new(const std::vector<Choice>& choices) {
+std::vector<Looked> SearchState::look_new(const std::vector<Choice>& choices) {
   std::vector<std::size_t> fresh;
   const std::int64_t left = plan.looks - ledger.counts().looked;
   for (std::size_t i = 0; i < choices.size(); ++i) {
@@ -72,7 +72,7 @@ std::vector<Looked> Session::look_new(const std::vector<Choice>& choices) {
   return alive;
 }
 
-std::vector<double> Session::quantities_of(const Evaluation& evaluation) const {
+std::vector<double> SearchState::quantities_of(const Evaluation& evaluation) const {
   std::vector<double> quantities = evaluation.objectives;
   const std::size_t checks = evaluator.check_names().size();
   if (evaluation.headroom.size() == checks)
@@ -88,14 +88,14 @@ std::vector<double> Session::quantities_of(const Evaluation& evaluation) const {
   return quantities;
 }
 
-void Session::learn(const Choice& choice, const Evaluation& evaluation) {
+void SearchState::learn(const Choice& choice, const Evaluation& evaluation) {
   record.note(choice, evaluation.outcome == Outcome::breaks_limits);
   model.add(region_of(choice), position_of(choice), quantities_of(evaluation));
   if (evaluation.outcome == Outcome::compliant) compliant_range.take(evaluation.objectives);
   for (std::int16_t check : evaluation.broken) ++broken_in_evaluation_[check];
 }
 
-FrontGauge Session::gauge() const {
+FrontGauge SearchState::gauge() const {
   std::vector<double> least(evaluator.objective_count(), 0.0);
   if (!compliant_range.empty())
     for (std::size_t k = 0; k < least.size(); ++k)
@@ -103,14 +103,14 @@ FrontGauge Session::gauge() const {
   return FrontGauge(ledger.front(), least);
 }
 
-std::vector<int> Session::telling_checks() const {
+std::vector<int> SearchState::telling_checks() const {
   std::vector<int> checks;
   for (std::size_t c = 0; c < broken_in_evaluation_.size(); ++c)
     if (broken_in_evaluation_[c] >= 5) checks.push_back(static_cast<int>(c));
   return checks;
 }
 
-std::vector<Merged> Session::evaluate(const std::vector<Choice>& choices) {
+std::vector<Merged> SearchState::evaluate(const std::vector<Choice>& choices) {
   std::vector<Merged> merged;
   for (std::size_t start = 0; start < choices.size() && may_evaluate() && !ended();) {
     const std::int64_t left = plan.evaluations - evaluations_;
@@ -136,15 +136,15 @@ std::vector<Merged> Session::evaluate(const std::vector<Choice>& choices) {
   return merged;
 }
 
-std::vector<Evaluation> Session::evaluate_apart(const std::vector<Choice>& choices,
-                                                const Dominated& dominated) {
+std::vector<Evaluation> SearchState::evaluate_apart(const std::vector<Choice>& choices,
+                                                    const Dominated& dominated) {
   std::vector<Evaluation> results(choices.size());
   workers.for_each(choices.size(), 1,
                    [&](std::size_t i) { results[i] = evaluator.evaluate(choices[i], dominated); });
   return results;
 }
 
-void Session::report(const std::string& stage, double fraction) {
+void SearchState::report(const std::string& stage, double fraction) {
   if (!options.progress) return;
   Progress progress;
   progress.stage = stage;
@@ -155,13 +155,13 @@ void Session::report(const std::string& stage, double fraction) {
   options.progress(progress);
 }
 
-std::vector<double> Session::position_of(const Choice& choice) const {
+std::vector<double> SearchState::position_of(const Choice& choice) const {
   std::vector<double> position(axes.size());
   for (std::size_t a = 0; a < axes.size(); ++a) position[a] = axes[a].position_of[choice[axes[a].slot]];
   return position;
 }
 
-std::int64_t Session::region_of(const Choice& choice) const {
+std::int64_t SearchState::region_of(const Choice& choice) const {
   std::int64_t region = 0;
   for (int slot : categories_) region = region * space.slots[slot].size + choice[slot];
   return region;

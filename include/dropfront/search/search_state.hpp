@@ -27,13 +27,13 @@ struct Looked {
 struct Merged {
   Choice choice;
   Entered entered;
-  std::vector<double> quantities;  ///< see Session::quantities_of
+  std::vector<double> quantities;  ///< see SearchState::quantities_of
 };
 
 /// What the stages of one search share: the memo of designs, the ledger, the limits, the threads.
-class Session {
+class SearchState {
  public:
-  Session(const Evaluator& evaluator, const SearchOptions& options);
+  SearchState(const Evaluator& evaluator, const SearchOptions& options);
 
   const Evaluator& evaluator;
   const Space& space;
