@@ -33,6 +33,7 @@ ExitStatus assess_command(const AssessArguments& arguments, Console& console) {
   problem::Problem& problem = chosen_problem(file, arguments);
   const scoring::Design design = problem::read_design_file(arguments.design, problem);
   scoring::Score score = scoring::score(design, problem.requirement, scoring::Depth::full);
+  if (score.complete) score.faults = scoring::faults_of(design, problem.requirement);
   score.cautions.insert(score.cautions.begin(), problem.cautions.begin(), problem.cautions.end());
   if (arguments.json)
     console.out << report::score_document(design, problem.requirement, score);

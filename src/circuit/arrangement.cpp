@@ -7,7 +7,7 @@
 namespace dropfront::circuit {
 
 const std::vector<Arrangement>& arrangements() {
-  // name, full wave, clamp ahead, clamps, rectifiers, builder, shunt
+  // name, full wave, clamp ahead, clamps, rectifiers, builder, shunt, dropper
   static const std::vector<Arrangement> table{
       {"half-wave-clamp-ahead", false, true, 1, 1, &build_half_wave_clamp_ahead},
       {"half-wave-clamp-across", false, false, 1, 2, &build_half_wave_clamp_across},
@@ -15,6 +15,7 @@ const std::vector<Arrangement>& arrangements() {
       {"bridge-clamp-ahead", true, true, 2, 4, &build_bridge_clamp_ahead},
       {"half-wave-thyristor-shunt", false, false, 1, 2, &build_half_wave_thyristor_shunt, true},
       {"bridge-thyristor-shunt", true, false, 1, 5, &build_bridge_thyristor_shunt, true},
+      {"resistive", false, false, 1, 1, &build_resistive, false, false},
   };
   return table;
 }

@@ -57,8 +57,10 @@ class LoadScan {
   StateVector cold_{};
 };
 
-/// Everything that crosses the dropper in a period, were it all to reach the rail.
+/// Everything that crosses the dropper in a period, were it all to reach the rail; without a dropper half the
+/// crest through the resistor.
 double charge_ceiling_A(const ElementValues& values) {
+  if (!(values.dropper_F > 0)) return 0.5 * values.mains.crest_V() / values.series_resistor_ohm;
   return 2 * values.mains.frequency_Hz() * values.dropper_F * values.mains.sum_of_rises_V() +
          2 * values.mains.crest_V() / values.discharge_ohm;
 }

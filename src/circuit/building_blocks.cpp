@@ -6,7 +6,7 @@
 
 namespace dropfront::circuit {
 
-Node add_mains_side(Network& network, const ElementValues& values) {
+Node add_line(Network& network, const ElementValues& values) {
   const Node line = network.add_node();
   network.source = {line, values.mains};
   Node entry = line;
@@ -23,6 +23,11 @@ Node add_mains_side(Network& network, const ElementValues& values) {
   for (const Curve& piece : values.varistor) {
     network.branches.push_back({0, guarded, piece.threshold_V, piece.slope_ohm, Owner::varistor});
   }
+  return after_resistor;
+}
+
+Node add_mains_side(Network& network, const ElementValues& values) {
+  const Node after_resistor = add_line(network, values);
   Node film = after_resistor;
   if (values.dropper_esr_ohm > 0) {
     film = network.add_node();
@@ -55,17 +60,6 @@ BridgeNodes add_bridge(Network& network, Node line_side, const ElementValues& va
   const int before = static_cast<int>(network.branches.size());
   for (int b = 0; b < before; ++b) network.half_period_partner.push_back((b + before / 2) % before);
   for (const int partner : {1, 0}) network.half_period_partner.push_back(before + partner);
-  if (values.single_diodes) {
-    network.half_period_partner.clear();
-    for (const Node a : {line_side, Node{0}}) {
-      network.branches.push_back(
-          {a, positive, values.rectifier.threshold_V, values.rectifier.slope_ohm, Owner::rectifier});
-      network.branches.push_back(
-          {negative, a, values.rectifier.threshold_V, values.rectifier.slope_ohm, Owner::rectifier});
-    }
-    network.resistors.push_back({negative, 0, kBridgeLeak_ohm, Owner::leak});
-    return {positive, negative};
-  }
   // Diodes that conduct together share their current to the last electron, so each pair is one branch.
   const double threshold_V = 2 * values.rectifier.threshold_V;
   const double slope_ohm = 2 * values.rectifier.slope_ohm;

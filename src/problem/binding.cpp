@@ -61,9 +61,9 @@ class Bound : public BoundProblem {
       evaluation.violation += 1;
       value = 0;
       if (requirement.objectives[k] == scoring::Objective::standby_loss) {
-        // The most real power a capacitor in series with a resistance can take: half of V·I.
-        value = stress_.line_Vrms() *
-                stress_.current_Arms(design.dropper_count * design.dropper->capacitance_F) / 2;
+        // The most real power a capacitor in series with a resistance can take: half of V·I. A resistor
+        // behind a diode takes half of V²/R.
+        value = stress_.line_Vrms() * relaxed_.current_Arms(design) / 2;
       } else if (requirement.objectives[k] == scoring::Objective::current_margin) {
         for (const scoring::Load& load : requirement.output.loads) value = std::max(value, load.current_A);
       }

@@ -59,6 +59,7 @@ class Boxes : public search::Bounder {
 
   bool out_of_reach(const search::Box& box, int objective, double value) const override {
     if (problem_.requirement.objectives[objective] != scoring::Objective::current_margin) return false;
+    if (problem_.offers.droppers.empty()) return false;
     return reach_.out_of_reach(design_box(problem_.offers, slots_.ids, box), -value - kSlack);
   }
 
@@ -82,9 +83,11 @@ class Boxes : public search::Bounder {
     return found;
   }
 
-  /// The bounds are derived for one dropper and one series resistor a design.
+  /// The bounds are derived for one dropper and one series resistor a design; the resistive yardstick has
+  /// none.
   bool single_parts() const {
-    return problem_.offers.dropper_parallel == 1 && problem_.offers.series_resistor_split == 1;
+    return !problem_.offers.droppers.empty() && problem_.offers.dropper_parallel == 1 &&
+           problem_.offers.series_resistor_split == 1;
   }
 
   static void add(scoring::Objective objective, const scoring::BoxBound& found, search::Bounds& out) {

@@ -48,10 +48,9 @@ const KeySet slots{"slots",
                     "discharge", "rectifier", "varistor", "fuse", "ceramic", "thyristor", "gate_resistor"}};
 const KeySet resolution{"resolution", {}, {"cost", "standby_loss", "board_area", "current_margin"}};
 const KeySet range{"range", {}, {"min", "max"}};
-const KeySet design{
-    "design",
-    {"arrangement", "dropper", "series_resistor", "clamp", "reservoir", "rectifier", "output_stage"},
-    {"discharge", "varistor", "fuse", "ceramic", "thyristor", "gate_resistor"}};
+const KeySet design{"design",
+                    {"arrangement", "series_resistor", "clamp", "reservoir", "rectifier", "output_stage"},
+                    {"dropper", "discharge", "varistor", "fuse", "ceramic", "thyristor", "gate_resistor"}};
 
 namespace {
 

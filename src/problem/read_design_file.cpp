@@ -50,7 +50,12 @@ scoring::Design read_design(const Cursor& cursor, Problem& problem) {
   scoring::Design design;
   design.arrangement = read_arrangement(reader.require("arrangement"));
   using parts::Resistor;
-  design.dropper = read_counted<parts::Dropper>(reader.require("dropper"), problem, design.dropper_count);
+  if (design.arrangement->dropper) {
+    design.dropper = read_counted<parts::Dropper>(reader.require("dropper"), problem, design.dropper_count);
+  } else {
+    refuse_unused(reader, "dropper", design);
+    refuse_unused(reader, "discharge", design);
+  }
   design.series_resistor =
       read_counted<Resistor>(reader.require("series_resistor"), problem, design.series_resistor_count);
   design.clamp = read_part<parts::Clamp>(reader.require("clamp"), problem);

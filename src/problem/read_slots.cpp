@@ -78,11 +78,12 @@ void read_arrangements(ObjectReader& slots, Problem& problem) {
     // A shunt is another part to buy and a source of emission: only where the problem asks for one.
     const bool shunts = slots.has("thyristor");
     for (const circuit::Arrangement& arrangement : circuit::arrangements()) {
-      if (shunts || !arrangement.thyristor_shunt) offered.push_back(&arrangement);
+      if (arrangement.dropper && (shunts || !arrangement.thyristor_shunt)) offered.push_back(&arrangement);
     }
-    note_default(problem, slots.object(), "arrangement",
-                 shunts ? "all arrangements" : "all arrangements without a thyristor",
-                 shunts ? "no filter given" : "the slot thyristor is not named");
+    note_default(
+        problem, slots.object(), "arrangement",
+        shunts ? "all arrangements with a dropper" : "all arrangements with a dropper and no thyristor",
+        shunts ? "no filter given" : "the slot thyristor is not named");
     return;
   }
   std::set<const circuit::Arrangement*> asked;
@@ -91,7 +92,14 @@ void read_arrangements(ObjectReader& slots, Problem& problem) {
       throw entry.error("found twice; allowed: each arrangement once");
   }
   for (const circuit::Arrangement& arrangement : circuit::arrangements()) {
-    if (asked.count(&arrangement) > 0) offered.push_back(&arrangement);
+    if (asked.count(&arrangement) == 0) continue;
+    if (!arrangement.dropper && asked.size() > 1) {
+      throw given->error(
+          fmt::format("{} has neither dropper nor discharge chain and is searched alone: give it a "
+                      "problem of its own, or one entry of \"vary\"",
+                      arrangement.name));
+    }
+    offered.push_back(&arrangement);
   }
 }
 
@@ -143,12 +151,16 @@ void keep_stages_in_band(const Cursor& slots, Problem& problem) {
                   values::format_quantity(need.tolerance, values::Unit::share), either(outputs)));
 }
 
+void note_unused(const char* name, Problem& problem) {
+  problem.cautions.push_back(fmt::format("slots.{} is not used by the arrangements asked for", name));
+}
+
 /// Slots that no arrangement asked for uses: read in full, offered to nobody, said so.
 template <class Part>
 void unused_slot(ObjectReader& slots, const char* name, Problem& problem, bool (*usable)(const Part&)) {
   if (!slots.has(name)) return;
   slot<Part>(slots, name, problem, usable);
-  problem.cautions.push_back(fmt::format("slots.{} is not used by the arrangements asked for", name));
+  note_unused(name, problem);
 }
 
 }  // namespace
@@ -160,15 +172,26 @@ void read_slots(const Cursor& cursor, Problem& problem) {
   read_arrangements(slots, problem);
   offers.output_stages = slot<parts::OutputStage>(slots, "output_stage", problem);
   keep_stages_in_band(slots.has("output_stage") ? slots.require("output_stage") : cursor, problem);
-  offers.droppers = slot<parts::Dropper>(
-      slots, "dropper", problem, any<parts::Dropper>,
-      [&](ObjectReader& reader) { offers.dropper_parallel = read_pieces(reader, "parallel"); });
+  const bool dropping = offers.arrangements.front()->dropper;
+  if (dropping || slots.has("dropper")) {
+    offers.droppers = slot<parts::Dropper>(
+        slots, "dropper", problem, any<parts::Dropper>,
+        [&](ObjectReader& reader) { offers.dropper_parallel = read_pieces(reader, "parallel"); });
+  }
   offers.series_resistors = slot<Resistor>(
       slots, "series_resistor", problem, [](const Resistor& part) { return serves(part, "series_resistor"); },
       [&](ObjectReader& reader) { offers.series_resistor_split = read_pieces(reader, "split"); });
   offers.clamps = slot<parts::Clamp>(slots, "clamp", problem);
   offers.reservoirs = slot<parts::Reservoir>(slots, "reservoir", problem);
-  read_discharges(slots, problem);
+  if (dropping || slots.has("discharge")) read_discharges(slots, problem);
+  if (!dropping) {
+    for (const char* name : {"dropper", "discharge"}) {
+      if (slots.has(name)) note_unused(name, problem);
+    }
+    offers.droppers.clear();
+    offers.discharges.clear();
+    offers.dropper_parallel = 1;
+  }
   offers.rectifiers = slot<parts::Rectifier>(slots, "rectifier", problem);
   offers.varistors = extra_slot<parts::Varistor>(slots, "varistor", problem, [&](ObjectReader& reader) {
     const auto place = reader.take("place");

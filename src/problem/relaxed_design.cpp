@@ -57,21 +57,26 @@ scoring::Design RelaxedDesigns::make(const search::Choice& categories, const std
   const scoring::Derating& derating = problem_.requirement.derating;
   const bool full_wave = design.arrangement->full_wave;
 
-  parts.dropper = droppers_.at(
-      position_of(SlotId::dropper, position),
-      [&](const parts::Dropper& part) {
-        return part.rated_voltage_Vrms * derating.dropper_voltage >= stress_.line_Vrms() &&
-               (part.series_rated || !problem_.requirement.limits.series_rated);
-      },
-      [](const parts::Dropper& part) { return part.rated_voltage_Vrms; });
-  design.dropper = &parts.dropper;
-  const double most_F = design.dropper_count * parts.dropper.capacitance_F * (1 + parts.dropper.tolerance);
+  double most_F = 0;
+  if (design.arrangement->dropper) {
+    parts.dropper = droppers_.at(
+        position_of(SlotId::dropper, position),
+        [&](const parts::Dropper& part) {
+          return part.rated_voltage_Vrms * derating.dropper_voltage >= stress_.line_Vrms() &&
+                 (part.series_rated || !problem_.requirement.limits.series_rated);
+        },
+        [](const parts::Dropper& part) { return part.rated_voltage_Vrms; });
+    design.dropper = &parts.dropper;
+    most_F = design.dropper_count * parts.dropper.capacitance_F * (1 + parts.dropper.tolerance);
+  }
 
   parts.series_resistor = series_resistors_.at(
       position_of(SlotId::series_resistor, position),
       [&](const parts::Resistor& part) {
-        return given(part.rated_power_W) * derating.resistor_power >=
-               stress_.resistor_W(most_F, part.resistance_ohm);
+        const double power_W = design.dropper
+                                   ? stress_.resistor_W(most_F, part.resistance_ohm)
+                                   : stress_.line_Vrms() * stress_.line_Vrms() / 2 / part.resistance_ohm;
+        return given(part.rated_power_W) * derating.resistor_power >= power_W;
       },
       [](const parts::Resistor& part) { return given(part.rated_power_W); });
   design.series_resistor = &parts.series_resistor;
@@ -80,8 +85,9 @@ scoring::Design RelaxedDesigns::make(const search::Choice& categories, const std
   parts.clamp = clamps_.at(
       position_of(SlotId::clamp, position),
       [&](const parts::Clamp& part) {
-        return given(part.rated_power_W) * derating.clamp_power * clamps >=
-               stress_.clamp_W(most_F, part.voltage_max_V, full_wave);
+        const double power_W = design.dropper ? stress_.clamp_W(most_F, part.voltage_max_V, full_wave)
+                                              : part.voltage_max_V * current_Arms(design);
+        return given(part.rated_power_W) * derating.clamp_power * clamps >= power_W;
       },
       [](const parts::Clamp& part) { return given(part.rated_power_W); });
   design.clamp = &parts.clamp;
@@ -95,6 +101,11 @@ scoring::Design RelaxedDesigns::make(const search::Choice& categories, const std
   design.reservoir = &parts.reservoir;
   make_chain(position_of(SlotId::discharge, position), parts, design);
   return design;
+}
+
+double RelaxedDesigns::current_Arms(const scoring::Design& design) const {
+  if (design.dropper) return stress_.current_Arms(design.dropper_count * design.dropper->capacitance_F);
+  return stress_.line_Vrms() / (design.series_resistor_count * design.series_resistor->resistance_ohm);
 }
 
 void RelaxedDesigns::make_chain(double position, RelaxedParts& parts, scoring::Design& design) const {

@@ -23,11 +23,6 @@ const circuit::Arrangement* read_arrangement(const Cursor& cursor) {
   std::vector<std::string> offered;
   for (const circuit::Arrangement& arrangement : circuit::arrangements())
     offered.emplace_back(arrangement.name);
-  const std::vector<std::string> planned{"resistive"};
-  if (std::find(planned.begin(), planned.end(), name) != planned.end()) {
-    throw cursor.error(fmt::format("the arrangement \"{}\" is not offered by this version; allowed: {}", name,
-                                   either(offered)));
-  }
   throw cursor.error(
       fmt::format("found \"{}\"{}; allowed: {}", name, values::did_you_mean(name, offered), either(offered)));
 }

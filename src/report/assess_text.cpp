@@ -6,6 +6,7 @@
 
 #include "dropfront/report/cautions.hpp"
 #include "dropfront/report/design_slots.hpp"
+#include "dropfront/report/faults_report.hpp"
 #include "dropfront/report/for_people.hpp"
 #include "dropfront/report/summary_text.hpp"
 #include "dropfront/report/text_table.hpp"
@@ -151,6 +152,7 @@ std::string assess_text(const std::string& title, const scoring::Design& design,
   text += "\nOperation\n";
   for (const auto& supply : score.operations) text += operations_text(supply, several);
   text += "\nChecks\n" + checks_text(score, options, several) + "\n";
+  if (!score.faults.empty()) text += faults_text(score.faults) + "\n";
   text += cautions_text(with_standing_cautions(score.cautions));
   return options.colour ? coloured(text) : text;
 }

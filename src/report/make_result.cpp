@@ -171,7 +171,9 @@ Result make_result(const problem::BoundProblem& bound, const search::SearchOutco
     entry.standby_supply = score.standby_supply;
     entry.margin_supply = score.margin_supply;
     entry.alternatives = sources.of(entry.design);
-    if (full) entry.evidence = std::move(score);
+    if (!full) return;
+    score.faults = scoring::faults_of(entry.design, problem.requirement);
+    entry.evidence = std::move(score);
   });
 
   const auto& names = bound.check_names();

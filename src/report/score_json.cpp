@@ -2,6 +2,7 @@
 
 #include "dropfront/report/cautions.hpp"
 #include "dropfront/report/design_json.hpp"
+#include "dropfront/report/faults_report.hpp"
 #include "dropfront/report/for_people.hpp"
 #include "dropfront/scoring/check_formulas.hpp"
 
@@ -182,6 +183,8 @@ void write_score(JsonWriter& json, const scoring::Design& design, const scoring:
   json.begin_array();
   for (const auto& check : score.checks) write_check(json, check);
   json.end_array();
+  json.key("faults");
+  write_faults(json, score.faults);
   json.key("cautions");
   write_texts(json, with_standing_cautions(score.cautions));
   json.end_object();

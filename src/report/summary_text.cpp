@@ -63,10 +63,11 @@ std::string nothing_found(const Result& result) {
   TextTable near({"one limit broken", ">value", ">limit", ">dropper", ">resistor", ">clamp", ">reservoir"});
   for (const auto& miss : result.near_misses) {
     const auto& design = miss.design;
-    near.row({miss.check, found_text(miss.broken), limit_text(miss.broken),
-              times(design.dropper_count) + with_unit(design.dropper->capacitance_F, "F"),
-              times(design.series_resistor_count) + short_value(*design.series_resistor),
-              short_value(*design.clamp), short_value(*design.reservoir)});
+    near.row(
+        {miss.check, found_text(miss.broken), limit_text(miss.broken),
+         design.dropper ? times(design.dropper_count) + with_unit(design.dropper->capacitance_F, "F") : "-",
+         times(design.series_resistor_count) + short_value(*design.series_resistor),
+         short_value(*design.clamp), short_value(*design.reservoir)});
     near.note(part_names(design), 6);
   }
   return text + '\n' + near.text();

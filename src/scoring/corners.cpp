@@ -90,9 +90,11 @@ circuit::ElementValues corner_values(const Design& design, const Recipe& recipe,
   circuit::ElementValues values;
   values.mains = *recipe.mains;
   values.series_resistor_ohm = series_resistor_ohm(design, recipe.series_resistor);
-  values.dropper_F = all_droppers_F(design, recipe.dropper, recipe.aged, film_degC);
-  values.dropper_esr_ohm = dropper_esr_ohm(*design.dropper, values.dropper_F, values.mains.frequency_Hz());
-  values.discharge_ohm = discharge_ohm(design, recipe.discharge);
+  if (design.arrangement->dropper) {
+    values.dropper_F = all_droppers_F(design, recipe.dropper, recipe.aged, film_degC);
+    values.dropper_esr_ohm = dropper_esr_ohm(*design.dropper, values.dropper_F, values.mains.frequency_Hz());
+    values.discharge_ohm = discharge_ohm(design, recipe.discharge);
+  }
   values.rectifier = rectifier_curve(*design.rectifier, recipe.drops, air_degC);
   values.clamp = zener_curve(*design.clamp, recipe.clamp, junction_degC);
   values.reservoir_F = can.capacitance_F;

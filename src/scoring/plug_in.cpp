@@ -46,8 +46,10 @@ circuit::StateVector left_charged(const circuit::Network& network, double crest_
   return state;
 }
 
-/// The pulse is over after ten time constants; beyond half a period it would be the mains again.
+/// The pulse is over after ten time constants; beyond half a period it would be the mains again. Without a
+/// dropper there is no pulse but the half period itself.
 double pulse_duration_s(const circuit::ElementValues& values) {
+  if (!(values.dropper_F > 0)) return 0.5 * values.mains.period_s();
   const double resistance = values.series_resistor_ohm + values.dropper_esr_ohm + values.reservoir_esr_ohm +
                             values.clamp.main.slope_ohm + 2 * values.rectifier.slope_ohm;
   return std::min(0.5 * values.mains.period_s(), 10 * resistance * values.dropper_F);

@@ -60,7 +60,9 @@ Rises PointSolver::estimated_rises(const circuit::ElementValues& values, double 
   const auto& wiring = *design_->arrangement;
   const double clamp_V = values.clamp.main.threshold_V;
   const double delivered_A = charge_balance_A(wiring, values, clamp_V);
-  const double line_A = values.mains.omega() * values.dropper_F * values.mains.voltage_Vrms();
+  const double line_A = wiring.dropper
+                            ? values.mains.omega() * values.dropper_F * values.mains.voltage_Vrms()
+                            : values.mains.voltage_Vrms() / (std::sqrt(2) * values.series_resistor_ohm);
   double clamp_W = clamp_V * std::max(0.0, delivered_A - load_A);
   if (wiring.clamp_ahead && !wiring.full_wave) clamp_W += values.rectifier.threshold_V * delivered_A;
   const double input_W = clamp_V * delivered_A + line_A * line_A * values.series_resistor_ohm +

@@ -23,7 +23,7 @@ using Evidences = std::vector<std::unique_ptr<Evidence>>;
 const char* missing_slot(const Design& design) {
   if (design.arrangement == nullptr || design.arrangement->build == nullptr) return "arrangement";
   if (design.output_stage == nullptr) return "output_stage";
-  if (design.dropper == nullptr) return "dropper";
+  if (design.arrangement->dropper && design.dropper == nullptr) return "dropper";
   if (design.series_resistor == nullptr) return "series_resistor";
   if (design.clamp == nullptr) return "clamp";
   if (design.reservoir == nullptr) return "reservoir";

@@ -21,7 +21,7 @@ double rail_min_V(const Arrangement& arrangement, ElementValues v, double load_A
 }  // namespace
 
 TEST_CASE("The rail just holds at the available current and no longer above it") {
-  for (const auto& arrangement : arrangements()) {
+  for (const auto& arrangement : dropping()) {
     for (const double required_V : {5.0, 9.0, 10.5, 11.0}) {
       ElementValues v = ordinary_values();
       v.load_cutoff_V = 0.5 * required_V;
@@ -40,7 +40,7 @@ TEST_CASE("Random designs: confirmed at the answer, failing just above, every li
   dropfront::values::RandomStream random(20260501);
   int with_current = 0;
   for (int k = 0; k < 250; ++k) {
-    const auto& arrangement = arrangements()[static_cast<std::size_t>(k) % arrangements().size()];
+    const auto& arrangement = dropping()[static_cast<std::size_t>(k) % dropping().size()];
     const auto between = [&](double a, double b) { return a * std::pow(b / a, random.uniform01()); };
     ElementValues v;
     v.mains = Waveform(between(90, 280), random.uniform01() < 0.5 ? 49.5 : 59.5, {{3, 0.03, 0}});

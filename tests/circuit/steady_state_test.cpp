@@ -15,7 +15,7 @@ double loss(const SteadyState& state, Owner owner) { return state.loss_W[static_
 }  // namespace
 
 TEST_CASE("Power in equals power dissipated in every arrangement at every load") {
-  for (const auto& arrangement : arrangements()) {
+  for (const auto& arrangement : dropping()) {
     for (const double load_A : {0.0, 0.2e-3, 5e-3, 15e-3, 24e-3, 45e-3}) {
       ElementValues v = ordinary_values();
       v.rail_current_A = load_A;
@@ -33,7 +33,7 @@ TEST_CASE("Power in equals power dissipated in every arrangement at every load")
 
 TEST_CASE("Everything scales: n-fold capacitances and currents, resistances by n, give n-fold power") {
   const double n = 3;
-  for (const auto& arrangement : arrangements()) {
+  for (const auto& arrangement : dropping()) {
     ElementValues v = ordinary_values();
     const SteadyState one = solve_steady_state(arrangement.build(v));
     v.dropper_F *= n;
@@ -60,7 +60,7 @@ TEST_CASE("Everything scales: n-fold capacitances and currents, resistances by n
 }
 
 TEST_CASE("More load never raises the half-wave rail minimum") {
-  for (const auto& arrangement : arrangements()) {
+  for (const auto& arrangement : dropping()) {
     // A shunt fires at another moment with another load, and where it alternates the rail jumps about.
     if (arrangement.full_wave || arrangement.thyristor_shunt) continue;
     double previous = INFINITY;
@@ -76,7 +76,7 @@ TEST_CASE("More load never raises the half-wave rail minimum") {
 }
 
 TEST_CASE("Half a period with turned signs is the whole period of a bridge") {
-  for (const auto& arrangement : arrangements()) {
+  for (const auto& arrangement : dropping()) {
     if (!arrangement.full_wave) continue;
     for (const bool third : {false, true}) {
       ElementValues v = ordinary_values();
@@ -108,7 +108,7 @@ TEST_CASE("Even harmonics take the whole period of a bridge") {
 }
 
 TEST_CASE("The start state does not decide the answer") {
-  for (const auto& arrangement : arrangements()) {
+  for (const auto& arrangement : dropping()) {
     const Network network = arrangement.build(ordinary_values());
     const SteadyState cold = solve_steady_state(network);
     const StateVector far{250.0, 3.0};

@@ -75,6 +75,8 @@ const std::vector<Broken> kProblemRules{
      "input_min"},
     {"slot not empty", ADD("\"slots\": {\"reservoir\": {\"where\": {\"rated_voltage\": \"400 V\"}}}"),
      "no part of this slot"},
+    {"yardstick alone", ADD("\"slots\": {\"arrangement\": [\"resistive\", \"bridge-clamp-across\"]}"),
+     "searched alone"},
     {"output band", "\"5 V\"", "\"5.2 V\", \"tolerance\": \"1 %\"", "offered are stages of 3.3 V or 5 V"},
     {"study keys", ADD("\"vary\": {\"output.volts\": [3.3, 5]}"), "unknown key \"volts\""},
     {"study keys", ADD("\"vary\": {\"output.voltage.low\": [3.3, 5]}"), "holds no keys"},
@@ -88,6 +90,8 @@ const std::vector<Broken> kDesignRules{
      "{\"kind\": \"step-down\", \"output_voltage\": 5, \"tolerance\": 0.01, \"efficiency\": "
      "0.8, \"input_min\": 3}",
      "input_min"},
+    {"dropper", "\"dropper\": \"film-470n\",", "", "dropper"},
+    {"unused slot", "half-wave-clamp-ahead", "resistive", "has no dropper"},
     {"unused slot", "\"z12\"", "\"z12\", \"gate_resistor\": \"any-1k\"", "has no gate_resistor"},
 };
 

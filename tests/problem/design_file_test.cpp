@@ -87,7 +87,7 @@ TEST_CASE("mistakes of a design file name file, place and what is meant") {
       {with(kNames, "\"z12\"", "\"z21\""), "design.json:2:44: /clamp: found \"z21\" (did you mean 'z12'?)"},
       {with(kNames, "\"z12\"", "12"), "/clamp: found the number 12; allowed: a part's name or an object"},
       {with(kNames, "bridge-clamp-across", "resistive"),
-       "design.json:1:17: /arrangement: the arrangement \"resistive\" is not offered"},
+       "/dropper: the arrangement resistive has no dropper"},
       {with(kNames, "bridge-clamp-across", "bridge"), "allowed: half-wave-clamp-ahead"},
       {with(kInline, "\"12 V\"", "\"12 W\""), "design.json:4:24: /clamp/voltage: "},
       {with(kInline, "\"series_rated\": true", "\"series_rated\": \"yes\""),

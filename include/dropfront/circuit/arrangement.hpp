@@ -16,6 +16,7 @@ struct Arrangement {
   int rectifier_count = 1;
   Network (*build)(const ElementValues&) = nullptr;
   bool thyristor_shunt = false;  ///< needs thyristor and gate resistor; the clamp is the trigger zener
+  bool dropper = true;           ///< false: the series resistor alone drops the line, no discharge chain
 };
 
 /// All arrangements in their fixed order; a design names one by its address.

@@ -7,7 +7,10 @@ namespace dropfront::circuit {
 /// Resistance of the documented leak that fixes the potential of a bridge's output while all diodes are off.
 inline constexpr double kBridgeLeak_ohm = 1e9;
 
-/// Line, series resistor, dropper with its loss and discharge chain. Returns the node behind the dropper.
+/// Line, varistor and series resistor. Returns the node behind the resistor.
+Node add_line(Network& network, const ElementValues& values);
+
+/// The same, then the dropper with its loss and discharge chain. Returns the node behind the dropper.
 Node add_mains_side(Network& network, const ElementValues& values);
 
 /// Zener breakdown from cathode to anode, knee branch included.

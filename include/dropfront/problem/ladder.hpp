@@ -31,8 +31,9 @@ class Ladder {
   double least() const { return rungs_.front().front()->*value_; }
   double greatest() const { return rungs_.back().front()->*value_; }
 
-  /// The part at `position` in [0, 1] of the logarithmic axis. From each rung beside it comes the cheapest
-  /// part that `suffices`, else the one of the greatest `strength`.
+  bool empty() const { return rungs_.empty(); }
+  /// Of a ladder that is not empty: the part at `position` in [0, 1] of the logarithmic axis. From each rung
+  /// beside it comes the cheapest part that `suffices`, else the one of the greatest `strength`.
   template <class Suffices, class Strength>
   Part at(double position, Suffices suffices, Strength strength) const {
     const double wanted = std::exp(std::log(least()) + position * (std::log(greatest()) - std::log(least())));

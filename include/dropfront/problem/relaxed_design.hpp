@@ -26,6 +26,8 @@ class RelaxedDesigns {
   /// to an empty discharge slot and further, leave that slot empty. `parts` must outlive the design.
   scoring::Design make(const search::Choice& categories, const std::vector<double>& position,
                        RelaxedParts& parts) const;
+  /// Line current, no series element but the dropper (or the resistor that stands in for it) taken in.
+  double current_Arms(const scoring::Design& design) const;
 
  private:
   double position_of(SlotId id, const std::vector<double>& position) const;

@@ -9,6 +9,7 @@
 #include "dropfront/scoring/check.hpp"
 #include "dropfront/scoring/corners/mains_shape.hpp"
 #include "dropfront/scoring/design.hpp"
+#include "dropfront/scoring/faults.hpp"
 #include "dropfront/scoring/requirement.hpp"
 
 namespace dropfront::scoring {
@@ -62,6 +63,7 @@ struct Score {
   std::optional<double> current_margin_horizon_years;
   std::vector<Check> checks;                 ///< in the fixed order of the check table
   std::vector<SupplyOperations> operations;  ///< Depth::full only
+  std::vector<FaultRow> faults;  ///< left to faults_of(): only whole evidence carries them
   std::vector<std::string> cautions;
   /// Graded, finite measure of broken limits: sum over failed checks of the relative shortfall, at least 1
   /// per undefined check. 0 when compliant. For the relaxation only.

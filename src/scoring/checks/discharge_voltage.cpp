@@ -11,7 +11,7 @@ namespace dropfront::scoring {
 std::optional<Check> discharge_voltage(Evidence& evidence) {
   const auto& rule = evidence.requirement().limits.discharge;
   const Design& design = evidence.design();
-  if (!rule) return std::nullopt;
+  if (!rule || design.dropper == nullptr) return std::nullopt;
   const double greatest_F =
       design.dropper_count * design.dropper->capacitance_F * (1 + design.dropper->tolerance);
   if (greatest_F <= rule->not_below_F) return std::nullopt;

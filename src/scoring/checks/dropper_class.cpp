@@ -4,6 +4,7 @@
 namespace dropfront::scoring {
 
 std::optional<Check> dropper_class(Evidence& evidence) {
+  if (evidence.design().dropper == nullptr) return std::nullopt;
   const std::string& name = evidence.design().dropper->class_name;
   std::optional<bool> fit;
   if (!name.empty()) fit = name == "X1" || name == "X2";

@@ -8,6 +8,7 @@ namespace dropfront::scoring {
 /// several droppers in parallel.
 std::optional<Check> dropper_slew(Evidence& evidence) {
   const Design& design = evidence.design();
+  if (design.dropper == nullptr) return std::nullopt;
   const double hot_degC = evidence.requirement().surroundings.ambient_degC.high;
   const double capacitance = all_droppers_F(design, End::low, 1, hot_degC);
   const double resistance = series_resistor_ohm(design, End::low);

@@ -7,6 +7,7 @@ namespace dropfront::scoring {
 /// the line, so the r.m.s. across the dropper stays below the line's own as long as the clamp is well below
 /// the crest: the whole line r.m.s. is the safe side, and needs no solution.
 std::optional<Check> dropper_voltage(Evidence& evidence) {
+  if (evidence.design().dropper == nullptr) return std::nullopt;
   const parts::Dropper& dropper = *evidence.design().dropper;
   const double share = evidence.requirement().derating.dropper_voltage;
   return with(

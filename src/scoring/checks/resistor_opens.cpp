@@ -9,6 +9,7 @@ namespace dropfront::scoring {
 /// fuse stands before it or not: no limit, never a pass.
 std::optional<Check> resistor_opens(Evidence& evidence) {
   const Design& design = evidence.design();
+  if (design.dropper == nullptr) return std::nullopt;  // nothing can short: the line is on it all the time
   const parts::Resistor& part = *design.series_resistor;
   const double line = evidence.supply().voltage_Vrms.low;
   std::optional<double> limit;

@@ -9,6 +9,7 @@ namespace dropfront::scoring {
 /// The energy hardly depends on Rs; what a film part may take does (its pulse is shorter at the low end), so
 /// both ends are judged.
 std::optional<Check> resistor_pulse(Evidence& evidence) {
+  if (evidence.design().dropper == nullptr) return std::nullopt;  // no charge to rush in: no pulse
   const PlugInAnswer& plug_in = evidence.plug_in();
   const parts::Resistor& part = *evidence.design().series_resistor;
   const auto judge = [&](const PlugIn& run, double energy_J, End end) {

@@ -19,5 +19,8 @@ Network build_bridge_clamp_ahead(const ElementValues& values);
 Network build_half_wave_thyristor_shunt(const ElementValues& values);
 /// Thyristor across the bridge's output, then a blocking diode; the rail fires it.
 Network build_bridge_thyristor_shunt(const ElementValues& values);
+/// The yardstick for tiny loads: no dropper, the series resistor alone, a series diode, zener across the
+/// reservoir. dropper_F and discharge_ohm are not used.
+Network build_resistive(const ElementValues& values);
 
 }  // namespace dropfront::circuit
