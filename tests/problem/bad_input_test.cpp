@@ -166,7 +166,7 @@ TEST_CASE("mistakes in slots are refused with their place") {
       {"[\"lists\"]", "[\"lists\"], \"slots\": {\"dropper\": {\"parallel\": @0}}", "/slots/dropper/parallel",
        "from 1 to 2"},
       {"[\"lists\"]", "[\"lists\"], \"slots\": {\"arrangement\": @[\"resistive\", \"bridge-clamp-across\"]}",
-       "/slots/arrangement", "is searched alone"},
+       "/slots/arrangement", "is searched alone", true},
       {"[\"lists\"]", "[\"lists\"], \"slots\": {\"arrangement\": @\"bridge-clamp-acros\"}",
        "/slots/arrangement", "did you mean 'bridge-clamp-across'?"},
       {"[\"lists\"]", "[\"lists\"], \"slots\": {\"varistor\": @{}}", "/slots/varistor",

@@ -61,7 +61,7 @@ TEST_CASE("every default of the interface is filled in and noted with its reason
       {"top", "5"},
       {"effort", "normal"},
       {"seed", "1"},
-      {"slots.arrangement", "all arrangements without a thyristor"},
+      {"slots.arrangement", "all arrangements with a dropper and no thyristor"},
       {"slots.dropper", "all rows"},
       {"slots.discharge.count", "1, 2, 3"},
       {"slots.varistor", "none"},
