@@ -12,6 +12,7 @@
 #include "dropfront/problem/box_binding.hpp"
 #include "dropfront/report/candidates_json.hpp"
 #include "dropfront/report/cautions.hpp"
+#include "dropfront/report/confirm_ranked.hpp"
 #include "dropfront/report/folder_writer.hpp"
 #include "dropfront/report/make_result.hpp"
 #include "dropfront/report/summary_text.hpp"
@@ -117,6 +118,7 @@ class Run {
     const auto bounds = problem::bind_bounds(problem);
     const auto outcome = search::run_search(*bound, options, bounds.get());
     auto result = report::make_result(*bound, outcome, options, DROPFRONT_VERSION);
+    report::confirm_ranked(result, options);
     none_ = none_ || result.front.empty();
     cautions_.insert(cautions_.end(), problem.cautions.begin(), problem.cautions.end());
     if (arguments_.json) documents_.push_back(report::candidates_json(result));

@@ -3,6 +3,7 @@
 #include <algorithm>
 #include <nlohmann/json.hpp>
 
+#include "dropfront/report/confirmation_json.hpp"
 #include "dropfront/report/design_json.hpp"
 #include "dropfront/report/json_writer.hpp"
 #include "dropfront/report/make_result.hpp"
@@ -60,6 +61,7 @@ void write_entries(JsonWriter& json, const std::vector<Entry>& entries) {
       json.begin_object(kFlat);
       json.member("check", entry.tightest_check);
       json.member("headroom", entry.tightest_headroom);
+      if (entry.tightest_inside) json.member("inside_tolerances", true);
       if (!entry.tightest_supply.empty()) json.member("supply", entry.tightest_supply);
       json.end_object();
     }
@@ -94,7 +96,8 @@ void write_evidence(JsonWriter& json, const Result& result) {
     for (const auto& entry : *list)
       if (entry.evidence) {
         json.key(std::to_string(entry.number));
-        write_score(json, entry.design, result.problem->requirement, *entry.evidence);
+        write_score(json, entry.design, result.problem->requirement, *entry.evidence,
+                    [&entry](JsonWriter& more) { write_confirmation(more, entry.confirmation); });
       }
   json.end_object();
 }

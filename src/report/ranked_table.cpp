@@ -16,6 +16,7 @@ std::string tightest_words(const Entry& entry) {
   if (entry.tightest_check.empty()) return "";
   std::string text = fmt::format("; tightest {} {}", entry.tightest_check, percent(entry.tightest_headroom));
   if (!entry.tightest_supply.empty()) text += " on " + entry.tightest_supply;
+  if (entry.tightest_inside) text += " inside the tolerances";
   if (entry.standby_supply.empty()) return text;
   return text +
          fmt::format("; standby decided by {}, margin by {}", entry.standby_supply, entry.margin_supply);

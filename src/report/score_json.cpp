@@ -147,7 +147,7 @@ void write_texts(JsonWriter& json, const std::vector<std::string>& texts) {
 }
 
 void write_score(JsonWriter& json, const scoring::Design& design, const scoring::Requirement& requirement,
-                 const scoring::Score& score) {
+                 const scoring::Score& score, const std::function<void(JsonWriter&)>& more) {
   json.begin_object();
   json.key("design");
   write_design(json, design);
@@ -187,6 +187,7 @@ void write_score(JsonWriter& json, const scoring::Design& design, const scoring:
   write_faults(json, score.faults);
   json.key("cautions");
   write_texts(json, with_standing_cautions(score.cautions));
+  if (more) more(json);
   json.end_object();
 }
 

@@ -5,6 +5,7 @@
 #include <algorithm>
 #include <set>
 
+#include "dropfront/report/confirmation_text.hpp"
 #include "dropfront/report/design_slots.hpp"
 #include "dropfront/report/for_people.hpp"
 #include "dropfront/report/proof_text.hpp"
@@ -99,6 +100,7 @@ std::string summary_body(const Result& result) {
   for (const auto& list : result.ranked)
     text += '\n' + ranked_heading(list.name) + '\n' + ranked_table(result, list, described);
   if (!result.extras.empty()) text += "  * complies, not on the front\n";
+  if (const std::string confirmed = confirmation_text(result); !confirmed.empty()) text += '\n' + confirmed;
   return text + "\n" +
          wrapped(
              "Margin: output current to spare in the worst case at the end of life. Standby: nominal "

@@ -4,6 +4,7 @@
 #include <string>
 #include <vector>
 
+#include "dropfront/problem/confirm.hpp"
 #include "dropfront/problem/problem.hpp"
 #include "dropfront/scoring/score.hpp"
 #include "dropfront/search/search.hpp"
@@ -19,11 +20,13 @@ struct Entry {
   scoring::Objectives objectives;
   std::string tightest_check;
   std::optional<double> tightest_headroom;
-  std::string tightest_supply;  ///< where that check was worst; empty with one unnamed supply
-  std::string standby_supply;   ///< with the greatest standby loss
-  std::string margin_supply;    ///< with the least margin
+  bool tightest_inside = false;  ///< it is tightest inside the tolerances, where no corner stands
+  std::string tightest_supply;   ///< where that check was worst; empty with one unnamed supply
+  std::string standby_supply;    ///< with the greatest standby loss
+  std::string margin_supply;     ///< with the least margin
   bool on_front = true;
-  std::optional<scoring::Score> evidence;  ///< ranked designs only
+  std::optional<scoring::Score> evidence;             ///< ranked designs only
+  std::optional<problem::Confirmation> confirmation;  ///< ranked designs, once confirmed
   struct Alternative {
     std::string slot;
     std::vector<std::string> parts;  ///< electrically equal, not better in price or size

@@ -1,4 +1,6 @@
 #pragma once
+#include <functional>
+
 #include "dropfront/report/json_writer.hpp"
 #include "dropfront/scoring/score.hpp"
 
@@ -6,9 +8,9 @@ namespace dropfront::report {
 
 /// The assess document: design, verdict, objectives, current_margin_new_A (zero_year and horizon_years beside
 /// it), operation, checks, cautions. `operation` is {corner: {...}} with one supply, {supply: {corner:
-/// {...}}} with several.
+/// {...}}} with several. `more` may add members of its own at the end.
 void write_score(JsonWriter& json, const scoring::Design& design, const scoring::Requirement& requirement,
-                 const scoring::Score& score);
+                 const scoring::Score& score, const std::function<void(JsonWriter&)>& more = {});
 
 /// The document by itself, ended by a line break.
 std::string score_document(const scoring::Design& design, const scoring::Requirement& requirement,
