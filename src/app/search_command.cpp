@@ -13,6 +13,7 @@
 #include "dropfront/report/candidates_json.hpp"
 #include "dropfront/report/cautions.hpp"
 #include "dropfront/report/confirm_ranked.hpp"
+#include "dropfront/report/explain.hpp"
 #include "dropfront/report/folder_writer.hpp"
 #include "dropfront/report/make_result.hpp"
 #include "dropfront/report/summary_text.hpp"
@@ -119,6 +120,7 @@ class Run {
     const auto outcome = search::run_search(*bound, options, bounds.get());
     auto result = report::make_result(*bound, outcome, options, DROPFRONT_VERSION);
     report::confirm_ranked(result, options);
+    report::explain(result, *bound, options);
     none_ = none_ || result.front.empty();
     cautions_.insert(cautions_.end(), problem.cautions.begin(), problem.cautions.end());
     if (arguments_.json) documents_.push_back(report::candidates_json(result));

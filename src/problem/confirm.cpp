@@ -12,9 +12,14 @@ namespace {
 using scoring::BoxQuantity;
 
 bool complete(const scoring::Design& design) {
-  return design.arrangement != nullptr && design.dropper != nullptr && design.series_resistor != nullptr &&
-         design.clamp != nullptr && design.reservoir != nullptr && design.rectifier != nullptr &&
-         design.output_stage != nullptr;
+  if (design.arrangement == nullptr) return false;
+  if (design.arrangement->dropper && design.dropper == nullptr) return false;
+  if (design.arrangement->thyristor_shunt &&
+      (design.thyristor == nullptr || design.gate_resistor == nullptr ||
+       !design.thyristor->trigger_current_A || !design.thyristor->holding_current_A))
+    return false;
+  return design.series_resistor != nullptr && design.clamp != nullptr && design.reservoir != nullptr &&
+         design.rectifier != nullptr && design.output_stage != nullptr;
 }
 
 bool worse(BoxQuantity quantity, double a, double b) {

@@ -4,9 +4,11 @@
 #include <nlohmann/json.hpp>
 
 #include "dropfront/report/confirmation_json.hpp"
+#include "dropfront/report/conflict_json.hpp"
 #include "dropfront/report/design_json.hpp"
 #include "dropfront/report/json_writer.hpp"
 #include "dropfront/report/make_result.hpp"
+#include "dropfront/report/prices_text.hpp"
 #include "dropfront/report/proof_json.hpp"
 #include "dropfront/report/score_json.hpp"
 
@@ -102,15 +104,6 @@ void write_evidence(JsonWriter& json, const Result& result) {
   json.end_object();
 }
 
-/// Value and limit of a broken check in its own unit, where it was made.
-void write_side(JsonWriter& json, const std::optional<scoring::Check>& check) {
-  if (!check) return;
-  json.member("value", check->value);
-  json.member("limit", check->limit);
-  json.member("unit", check->unit);
-  json.member("side", check->at_most ? "<=" : ">=");
-}
-
 void write_near_misses(JsonWriter& json, const Result& result) {
   json.begin_array();
   for (const auto& miss : result.near_misses) {
@@ -120,19 +113,6 @@ void write_near_misses(JsonWriter& json, const Result& result) {
     write_side(json, miss.broken);
     json.key("design");
     write_design(json, miss.design);
-    json.end_object();
-  }
-  json.end_array();
-}
-
-void write_conflict(JsonWriter& json, const Result& result) {
-  json.begin_array();
-  for (const auto& conflict : result.conflict) {
-    json.begin_object(kFlat);
-    json.member("check", conflict.check);
-    json.member("failed", conflict.failed);
-    json.member("least_shortfall", conflict.least_shortfall);
-    write_side(json, conflict.closest);
     json.end_object();
   }
   json.end_array();
@@ -166,6 +146,8 @@ std::string candidates_json(const Result& result) {
   write_evidence(json, result);
   json.key("near_misses");
   write_near_misses(json, result);
+  json.key("prices");
+  write_prices(json, result);
   json.key("conflict");
   write_conflict(json, result);
   json.key("cautions");

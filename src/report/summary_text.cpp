@@ -6,8 +6,9 @@
 #include <set>
 
 #include "dropfront/report/confirmation_text.hpp"
-#include "dropfront/report/design_slots.hpp"
+#include "dropfront/report/conflict_text.hpp"
 #include "dropfront/report/for_people.hpp"
+#include "dropfront/report/prices_text.hpp"
 #include "dropfront/report/proof_text.hpp"
 #include "dropfront/report/ranked_table.hpp"
 #include "dropfront/report/text_table.hpp"
@@ -23,55 +24,6 @@ std::string counts_text(const Result& result) {
                      counted(counts.space) + " possible";
   if (proven(result) && result.proof->enumerated) text += " (all of them)";
   return text + ".";
-}
-
-/// Value and limit of a broken check in its own unit.
-std::string found_text(const std::optional<scoring::Check>& check) {
-  if (!check || !check->value) return "-";
-  return check->yes_or_no() ? "no" : with_unit(*check->value, check->unit);
-}
-
-std::string limit_text(const std::optional<scoring::Check>& check) {
-  if (!check || !check->limit) return "-";
-  if (check->yes_or_no()) return "yes";
-  return (check->at_most ? "<= " : ">= ") + with_unit(*check->limit, check->unit);
-}
-
-std::string closest_text(const Result::Conflict& conflict) {
-  const std::string missed = percent(conflict.least_shortfall);
-  const auto& check = conflict.closest;
-  if (!check || !check->value || !check->limit) return "missed its limit by " + missed;
-  if (check->yes_or_no()) return "answers no where yes is asked";
-  return fmt::format("reaches {} where {} is asked, missed by {}", found_text(check), limit_text(check),
-                     missed);
-}
-
-std::string nothing_found(const Result& result) {
-  std::string text = proven(result) && result.proof->enumerated
-                         ? "No design of this problem complies: every one was looked at.\n"
-                     : proven(result) ? "No design of this problem complies.\n"
-                                      : "No compliant design was found.\n";
-  if (result.conflict.empty()) return text;
-  const auto& worst = result.conflict.front();
-  text += wrapped(fmt::format("Failed most often: {}, by {} designs; the best of them {}.", worst.check,
-                              counted(static_cast<double>(worst.failed)), closest_text(worst)));
-  TextTable table({"limit broken", ">designs", ">best value", ">limit", ">missed by"});
-  for (const auto& conflict : result.conflict)
-    table.row({conflict.check, counted(static_cast<double>(conflict.failed)), found_text(conflict.closest),
-               limit_text(conflict.closest), percent(conflict.least_shortfall)});
-  text += '\n' + table.text();
-  if (result.near_misses.empty()) return text;
-  TextTable near({"one limit broken", ">value", ">limit", ">dropper", ">resistor", ">clamp", ">reservoir"});
-  for (const auto& miss : result.near_misses) {
-    const auto& design = miss.design;
-    near.row(
-        {miss.check, found_text(miss.broken), limit_text(miss.broken),
-         design.dropper ? times(design.dropper_count) + with_unit(design.dropper->capacitance_F, "F") : "-",
-         times(design.series_resistor_count) + short_value(*design.series_resistor),
-         short_value(*design.clamp), short_value(*design.reservoir)});
-    near.note(part_names(design), 6);
-  }
-  return text + '\n' + near.text();
 }
 
 }  // namespace
@@ -101,6 +53,7 @@ std::string summary_body(const Result& result) {
     text += '\n' + ranked_heading(list.name) + '\n' + ranked_table(result, list, described);
   if (!result.extras.empty()) text += "  * complies, not on the front\n";
   if (const std::string confirmed = confirmation_text(result); !confirmed.empty()) text += '\n' + confirmed;
+  if (const std::string prices = prices_text(result); !prices.empty()) text += '\n' + prices;
   return text + "\n" +
          wrapped(
              "Margin: output current to spare in the worst case at the end of life. Standby: nominal "

@@ -24,6 +24,7 @@ Range range_of(const Design& design, BuildAxis axis) {
   };
   switch (axis) {
     case BuildAxis::dropper:
+      if (design.dropper == nullptr) return {};
       return within(design.dropper->capacitance_F, design.dropper->tolerance);
     case BuildAxis::series_resistor:
       return resistor(design.series_resistor);

@@ -153,8 +153,7 @@ std::optional<double> ToleranceBox::margin_A(const Build& build, const Condition
   return solver.capability_A(found) - loads.heaviest_output_A();
 }
 
-OperatingPoint ToleranceBox::steady(const Build& build, const Conditions& conditions,
-                                    const OperatingPoint* warm) const {
+OperatingPoint ToleranceBox::steady(const Build& build, const Conditions& conditions) const {
   const Design& design = build.design();
   const LoadProfile loads = load_profile(requirement_->output);
   const double required_V = required_rail_V(*design.output_stage, requirement_->output, loads).value_or(0);
@@ -167,7 +166,7 @@ OperatingPoint ToleranceBox::steady(const Build& build, const Conditions& condit
   if (quantity_ == BoxQuantity::standby) {
     const LoadCase load{loads.standby_name, loads.standby_A, leakage_A + loads.rail_A, Quiescent::data,
                         false};
-    return points.solve("standby", recipe, load, kStandby_degC, warm);
+    return points.solve("standby", recipe, load, kStandby_degC);
   }
   // The builds have no tolerance: their low ends are those that age.
   recipe.dropper = recipe.reservoir = End::low;
@@ -179,7 +178,7 @@ OperatingPoint ToleranceBox::steady(const Build& build, const Conditions& condit
   const LoadCase load{"", share * loads.heaviest_output_A(),
                       std::max(1e-7, 0.1 * leakage_A) + loads.rail_A + share * loads.burst_mean_rail_A,
                       Quiescent::least, false};
-  return points.solve("rich", recipe, load, conditions.ambient_degC, warm);
+  return points.solve("rich", recipe, load, conditions.ambient_degC);
 }
 
 std::optional<double> ToleranceBox::at(const std::vector<double>& position, const LeanSolution* near) const {
@@ -190,17 +189,17 @@ std::optional<double> ToleranceBox::at(const std::vector<double>& position, cons
   if (quantity_ == BoxQuantity::margin)
     value = margin_A(build, conditions, near, nullptr);
   else
-    value = box_value(quantity_, build.design(), *supply_, steady(build, conditions, nullptr));
+    value = box_value(quantity_, build.design(), *supply_, steady(build, conditions));
   if (value && !std::isfinite(*value)) value.reset();
   return value;
 }
 
-OperatingPoint ToleranceBox::point_at(const std::vector<double>& position, const OperatingPoint* warm) const {
+OperatingPoint ToleranceBox::point_at(const std::vector<double>& position) const {
   if (quantity_ == BoxQuantity::margin) return {};
   Build build(design_);
   Conditions conditions;
   set(position, build, conditions);
-  return steady(build, conditions, warm);
+  return steady(build, conditions);
 }
 
 LeanSolution ToleranceBox::lean_at(const std::vector<double>& position) const {

@@ -63,8 +63,8 @@ TEST_CASE("candidates.json has the promised keys in their order") {
   const auto document = Json::parse(candidates_json(m.result));
   CHECK(keys_of(document) == std::vector<std::string>{"format", "title", "name", "status", "problem",
                                                       "provenance", "counts", "proof", "front", "ranked",
-                                                      "extras", "evidence", "near_misses", "conflict",
-                                                      "cautions"});
+                                                      "extras", "evidence", "near_misses", "prices",
+                                                      "conflict", "cautions"});
   CHECK(document["name"] == "towel-rail-timer");
   CHECK(document["status"] == "done");
   CHECK(document["problem"]["title"] == document["title"]);
@@ -173,7 +173,7 @@ TEST_CASE("where nothing complies, the text names the limit broken most often an
   CHECK(text.find("Failed most often: " + check + ", by 9 designs; the best of them ") != std::string::npos);
   const auto document = Json::parse(candidates_json(m.result));
   CHECK(document["status"] == "none found");
-  CHECK(document["conflict"][0]["check"] == check);
+  CHECK(document["conflict"]["checks"][0]["check"] == check);
   CHECK(document["near_misses"][0]["shortfall"] == 0.03);
   CHECK(document["front"].empty());
 }

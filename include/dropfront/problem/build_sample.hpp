@@ -19,6 +19,7 @@ struct ScrambleTally {
   int passed_all = 0;
   std::vector<double> margins_A;  ///< one a build with an answer
   std::vector<double> standbys_W;
+  friend bool operator==(const ScrambleTally&, const ScrambleTally&) = default;
 };
 
 /// Share of builds that pass, with a 95 % interval.

@@ -7,7 +7,8 @@
 namespace dropfront::report {
 
 /// candidates.json: format, title, name, status, problem, provenance, counts, proof, front, ranked, extras,
-/// evidence, near_misses, conflict, cautions. Same result, same bytes; no times, paths or thread counts.
+/// evidence, near_misses, prices, conflict, cautions. Same result, same bytes; no times, paths or thread
+/// counts.
 std::string candidates_json(const Result& result);
 
 /// {"problems": [...]}, one candidates document each, in order.

@@ -5,6 +5,7 @@
 #include <vector>
 
 #include "dropfront/problem/confirm.hpp"
+#include "dropfront/problem/conflict.hpp"
 #include "dropfront/problem/problem.hpp"
 #include "dropfront/scoring/score.hpp"
 #include "dropfront/search/search.hpp"
@@ -67,6 +68,12 @@ struct Result {
     std::optional<scoring::Check> closest;  ///< the check as the design that came closest meets it
   };
   std::vector<Conflict> conflict;  ///< most often failed first; filled when nothing complies
+  /// Limits that cannot hold together, each with the design that relaxing it alone would admit.
+  struct Explained {
+    problem::ConflictSet set;
+    std::vector<std::optional<scoring::Design>> designs;  ///< one a limit of the set
+  };
+  std::optional<Explained> explained;
   std::vector<std::string> cautions;
 };
 

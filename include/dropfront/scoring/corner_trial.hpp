@@ -30,7 +30,6 @@ class CornerTrial {
   ToleranceBox margin_, rich_, standby_;
   std::vector<double> margin_corner_, rich_corner_, standby_corner_;
   LeanSolution near_margin_;
-  OperatingPoint near_rich_, near_standby_;
 };
 
 }  // namespace dropfront::scoring

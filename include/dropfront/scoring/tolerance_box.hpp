@@ -59,8 +59,7 @@ class ToleranceBox {
   /// answer by no more than the solver's tolerance.
   std::optional<double> at(const std::vector<double>& position, const LeanSolution* near = nullptr) const;
   /// The steady state behind it, at a point; for the margin one that is not usable.
-  /// `warm`: the point somewhere else in this box, as `near` of at(), or null.
-  OperatingPoint point_at(const std::vector<double>& position, const OperatingPoint* warm = nullptr) const;
+  OperatingPoint point_at(const std::vector<double>& position) const;
   /// The whole lean solution at a point, for `near`; not usable for other quantities than the margin.
   LeanSolution lean_at(const std::vector<double>& position) const;
   /// The values of a point by axis name, SI.
@@ -77,7 +76,7 @@ class ToleranceBox {
   circuit::Waveform mains(const Conditions& conditions) const;
   std::optional<double> margin_A(const Build& build, const Conditions& conditions, const LeanSolution* near,
                                  LeanSolution* whole) const;
-  OperatingPoint steady(const Build& build, const Conditions& conditions, const OperatingPoint* warm) const;
+  OperatingPoint steady(const Build& build, const Conditions& conditions) const;
 
   const Design design_;
   const Requirement* requirement_;
