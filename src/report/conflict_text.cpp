@@ -2,6 +2,9 @@
 
 #include <fmt/core.h>
 
+#include <algorithm>
+#include <set>
+
 #include "dropfront/report/design_slots.hpp"
 #include "dropfront/report/for_people.hpp"
 #include "dropfront/report/ranked_table.hpp"
@@ -67,6 +70,33 @@ std::string explained_text(const Result::Explained& explained) {
 
 }  // namespace
 
+std::string near_misses_text(const Result& result, std::size_t most) {
+  std::vector<const Result::NearMiss*> misses;
+  for (const auto& miss : result.near_misses) misses.push_back(&miss);
+  if (misses.size() > most) {
+    // The nearest of each limit, nearest first.
+    std::stable_sort(misses.begin(), misses.end(),
+                     [](const auto* a, const auto* b) { return a->shortfall < b->shortfall; });
+    std::set<std::string> named;
+    misses.erase(std::remove_if(misses.begin(), misses.end(),
+                                [&](const auto* miss) { return !named.insert(miss->check).second; }),
+                 misses.end());
+    misses.resize(std::min(most, misses.size()));
+  }
+  if (misses.empty()) return "";
+  TextTable near({"one limit broken", ">value", ">limit", ">dropper", ">resistor", ">clamp", ">reservoir"});
+  for (const auto* miss : misses) {
+    const auto& design = miss->design;
+    near.row(
+        {miss->check, found_text(miss->broken), limit_text(miss->broken),
+         design.dropper ? times(design.dropper_count) + with_unit(design.dropper->capacitance_F, "F") : "-",
+         times(design.series_resistor_count) + short_value(*design.series_resistor),
+         short_value(*design.clamp), short_value(*design.reservoir)});
+    near.note(part_names(design), 6);
+  }
+  return near.text();
+}
+
 std::string nothing_found(const Result& result) {
   std::string text = proven(result) && result.proof->enumerated
                          ? "No design of this problem complies: every one was looked at.\n"
@@ -82,18 +112,8 @@ std::string nothing_found(const Result& result) {
     table.row({conflict.check, counted(static_cast<double>(conflict.failed)), found_text(conflict.closest),
                limit_text(conflict.closest), percent(conflict.least_shortfall)});
   text += '\n' + table.text();
-  if (result.near_misses.empty()) return text;
-  TextTable near({"one limit broken", ">value", ">limit", ">dropper", ">resistor", ">clamp", ">reservoir"});
-  for (const auto& miss : result.near_misses) {
-    const auto& design = miss.design;
-    near.row(
-        {miss.check, found_text(miss.broken), limit_text(miss.broken),
-         design.dropper ? times(design.dropper_count) + with_unit(design.dropper->capacitance_F, "F") : "-",
-         times(design.series_resistor_count) + short_value(*design.series_resistor),
-         short_value(*design.clamp), short_value(*design.reservoir)});
-    near.note(part_names(design), 6);
-  }
-  return text + '\n' + near.text();
+  const std::string near = near_misses_text(result, result.near_misses.size());
+  return near.empty() ? text : text + '\n' + near;
 }
 
 }  // namespace dropfront::report

@@ -54,6 +54,8 @@ std::string summary_body(const Result& result) {
   if (!result.extras.empty()) text += "  * complies, not on the front\n";
   if (const std::string confirmed = confirmation_text(result); !confirmed.empty()) text += '\n' + confirmed;
   if (const std::string prices = prices_text(result); !prices.empty()) text += '\n' + prices;
+  if (const std::string near = near_misses_text(result, 3); !near.empty())
+    text += "\nMissed by one limit only, the nearest\n" + near;
   return text + "\n" +
          wrapped(
              "Margin: output current to spare in the worst case at the end of life. Standby: nominal "

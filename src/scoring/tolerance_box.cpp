@@ -159,21 +159,20 @@ OperatingPoint ToleranceBox::steady(const Build& build, const Conditions& condit
   const double required_V = required_rail_V(*design.output_stage, requirement_->output, loads).value_or(0);
   PointSolver points(design, *requirement_, required_V);
   const auto wave = mains(conditions);
-  Recipe recipe;
-  recipe.mains = &wave;
-  recipe.clamp = ZenerCurve::high;
+  static const MainsShapes kNone{};
   const double leakage_A = design.reservoir->leakage_A;
   if (quantity_ == BoxQuantity::standby) {
+    Recipe recipe = production_recipe(kNone, End::high);
+    recipe.mains = &wave;
     const LoadCase load{loads.standby_name, loads.standby_A, leakage_A + loads.rail_A, Quiescent::data,
                         false};
     return points.solve("standby", recipe, load, kStandby_degC);
   }
-  // The builds have no tolerance: their low ends are those that age.
-  recipe.dropper = recipe.reservoir = End::low;
-  recipe.esr = End::high;
-  recipe.drops = Drops::least;
+  Recipe recipe = rich_recipe(kNone);
+  recipe.mains = &wave;
+  // The builds have no tolerance: their low end is the one that ages.
+  recipe.dropper = End::low;
   recipe.aged = conditions.age;
-  recipe.temperature = true;
   const double share = conditions.load_share;
   const LoadCase load{"", share * loads.heaviest_output_A(),
                       std::max(1e-7, 0.1 * leakage_A) + loads.rail_A + share * loads.burst_mean_rail_A,
