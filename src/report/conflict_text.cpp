@@ -102,7 +102,10 @@ std::string nothing_found(const Result& result) {
                          ? "No design of this problem complies: every one was looked at.\n"
                      : proven(result) ? "No design of this problem complies.\n"
                                       : "No compliant design was found.\n";
-  if (result.explained) text += explained_text(*result.explained);
+  if (result.explained)
+    text += explained_text(*result.explained);
+  else if (result.effort == "quick")
+    text += "Which limits cannot be kept together is worked out from normal effort on.\n";
   if (result.conflict.empty()) return text;
   const auto& worst = result.conflict.front();
   text += wrapped(fmt::format("Failed most often: {}, by {} designs; the best of them {}.", worst.check,
