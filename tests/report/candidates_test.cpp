@@ -89,7 +89,7 @@ TEST_CASE("ranked sets are named by their objective and point at entries with ev
       CHECK(keys_of(evidence) == std::vector<std::string>{"design", "verdict", "objectives",
                                                           "current_margin_new_A", "current_margin_zero_year",
                                                           "current_margin_horizon_years", "operation",
-                                                          "checks", "faults", "cautions"});
+                                                          "checks", "faults", "cautions", "confirmation"});
     }
 }
 
