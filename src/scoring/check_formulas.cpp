@@ -50,7 +50,8 @@ std::string_view check_formula(std::string_view id) {
       {"clamp.pulse",
        "stress_W_sqrt_s / (rated_pulse_power_W x sqrt(rated_pulse_s)) x (max_junction_degC - 25) / "
        "(max_junction_degC - clamp_junction_degC) <= 1; stress_W_sqrt_s the greatest over t of half the "
-       "integral of P(u) / sqrt(t - u), at least peak power x sqrt(shortest_pulse_s)"},
+       "integral of P(u) / sqrt(t - u), at least peak power x sqrt(shortest_pulse_s); "
+       "share_without_extrapolation: the same with rated_pulse_s for shortest_pulse_s"},
       {"rectifier.reverse", "2 x line_crest_V (half-wave) or line_crest_V (bridge) <= reverse voltage"},
       {"rectifier.surge",
        "greatest rectifier current after closing on the crest, the dropper at the opposite one <= surge "
@@ -72,7 +73,9 @@ std::string_view check_formula(std::string_view id) {
        "for a bridge"},
       {"reservoir.life",
        "rated_life_h x 2^((rated_life_degC - can_degC) / 10) x ripple_factor >= life; can_degC not below 35"},
-      {"reservoir.leakage", "data leakage <= data leakage + spare_rail_current_A"},
+      {"reservoir.leakage",
+       "data_leakage_A x rail_V / rated_voltage_V x warm_factor <= data_leakage_A + spare_rail_current_A; "
+       "warm_factor = 5^((air_degC - 20) / 65), not below 1"},
       {"discharge.voltage", "line_crest_V x exp(-after_s / (discharge_chain_ohm x dropper_F)) <= the rule's"},
       {"discharge.power",
        "chain_Vrms^2 x R / (sum of R)^2, each R element_ohm x (1 +/- tolerance) at its worst <= "

@@ -33,7 +33,7 @@ const std::vector<CheckRule>& check_table() {
       {"reservoir.voltage", Tier::steady, reservoir_voltage},
       {"reservoir.ripple", Tier::steady, reservoir_ripple},
       {"reservoir.life", Tier::steady, reservoir_life},
-      {"reservoir.leakage", Tier::lean, reservoir_leakage},
+      {"reservoir.leakage", Tier::steady, reservoir_leakage},
       {"discharge.voltage", Tier::list, discharge_voltage},
       {"discharge.power", Tier::steady, discharge_power},
       {"discharge.working_voltage", Tier::steady, discharge_working_voltage},

@@ -81,22 +81,18 @@ void set_shunt(const Design& design, const Recipe& recipe, circuit::ElementValue
 
 circuit::ElementValues corner_values(const Design& design, const Recipe& recipe, const Temperatures& at,
                                      double load_cutoff_V) {
-  constexpr double kFilmReference_degC = 20;
-  constexpr double kReference_degC = 25;
-  const double film_degC = recipe.temperature ? at.local_degC : kFilmReference_degC;
-  const double air_degC = recipe.temperature ? at.local_degC : kReference_degC;
-  const double junction_degC = recipe.temperature ? at.clamp_junction_degC : kReference_degC;
+  const double air_degC = at.local_degC;
   const auto& can = *design.reservoir;
   circuit::ElementValues values;
   values.mains = *recipe.mains;
   values.series_resistor_ohm = series_resistor_ohm(design, recipe.series_resistor);
   if (design.arrangement->dropper) {
-    values.dropper_F = all_droppers_F(design, recipe.dropper, recipe.aged, film_degC);
+    values.dropper_F = all_droppers_F(design, recipe.dropper, recipe.aged, air_degC);
     values.dropper_esr_ohm = dropper_esr_ohm(*design.dropper, values.dropper_F, values.mains.frequency_Hz());
     values.discharge_ohm = discharge_ohm(design, recipe.discharge);
   }
   values.rectifier = rectifier_curve(*design.rectifier, recipe.drops, air_degC);
-  values.clamp = zener_curve(*design.clamp, recipe.clamp, junction_degC);
+  values.clamp = zener_curve(*design.clamp, recipe.clamp, at.clamp_junction_degC);
   values.reservoir_F = can.capacitance_F;
   if (recipe.reservoir == End::low) values.reservoir_F = reservoir_least_F(can, recipe.aged, air_degC);
   if (recipe.reservoir == End::high) values.reservoir_F = reservoir_greatest_F(can);

@@ -32,14 +32,21 @@ struct Evidence::Impl {
   }
 
   /// Loads of the corners. Rich corners take nothing that may be missing: no leakage, least Iq.
-  LoadCase heaviest(bool at_trough) const {
-    return {loads.heaviest_name, loads.heaviest_output_A(),
-            design.reservoir->leakage_A + loads.heaviest_rail_A(), Quiescent::data, at_trough};
+  LoadCase heaviest(bool at_trough, End output) const {
+    return {loads.heaviest_name,
+            loads.heaviest_output_A(),
+            design.reservoir->leakage_A + loads.heaviest_rail_A(),
+            Quiescent::data,
+            at_trough,
+            output};
   }
-  LoadCase asleep() const {
-    return {loads.standby_name, loads.standby_A, design.reservoir->leakage_A + loads.rail_A, Quiescent::data,
-            false};
+  LoadCase asleep(End output) const {
+    return {loads.standby_name, loads.standby_A, design.reservoir->leakage_A + loads.rail_A,
+            Quiescent::data,    false,           output};
   }
+  /// A zener takes what the load leaves, at a voltage no lower: least input power comes with most load. A
+  /// shunt takes it at about a volt, and input rises with load.
+  LoadCase worst_asleep() const { return asleep(design.arrangement->thyristor_shunt ? End::high : End::low); }
   /// An unloaded rail still feeds the reservoir's own leakage, at least a tenth of the data maximum: without
   /// it a reservoir behind a diode would keep any charge, and the rail would have no steady state of its own.
   LoadCase rich_share(double share, const char* name) const {
@@ -60,7 +67,7 @@ struct Evidence::Impl {
     if (point) return *point;
     const auto& found = lean_search.at(hot);
     point = points.solve(hot ? "lean_hot" : "lean_cold", lean_search.solver().recipe(found.where.ends),
-                         heaviest(true), ambient_degC(hot));
+                         heaviest(true, End::high), ambient_degC(hot));
     point->ends = ends_text(found.where.ends, bled());
     return *point;
   }

@@ -7,8 +7,8 @@ const OperatingPoint& Evidence::nominal() {
   auto& point = impl_->nominal;
   if (!point) {
     const double ambient_degC = impl_->requirement->surroundings.ambient_degC.nominal;
-    point =
-        impl_->points.solve("nominal", nominal_recipe(*impl_->shapes), impl_->heaviest(false), ambient_degC);
+    point = impl_->points.solve("nominal", nominal_recipe(*impl_->shapes),
+                                impl_->heaviest(false, End::nominal), ambient_degC);
     point->ends = kNominalEnds;
   }
   return *point;
@@ -59,7 +59,8 @@ const OperatingPoint& Evidence::rich_loaded() {
 const OperatingPoint& Evidence::standby() {
   auto& point = impl_->standby;
   if (!point) {
-    point = impl_->points.solve("standby", nominal_recipe(*impl_->shapes), impl_->asleep(), kStandby_degC);
+    point = impl_->points.solve("standby", nominal_recipe(*impl_->shapes), impl_->asleep(End::nominal),
+                                kStandby_degC);
     point->ends = kNominalEnds;
   }
   return *point;
@@ -70,7 +71,7 @@ const OperatingPoint& Evidence::standby_worst() {
   if (point) return *point;
   const auto at = [&](End series, const OperatingPoint* warm) {
     auto solved = impl_->points.solve("standby_worst", production_recipe(*impl_->shapes, series),
-                                      impl_->asleep(), kStandby_degC, warm);
+                                      impl_->worst_asleep(), kStandby_degC, warm);
     solved.ends = production_ends(series, impl_->bled());
     return solved;
   };

@@ -48,7 +48,6 @@ Recipe LeanCaseSolver::recipe(const LeanEnds& ends) const {
   recipe.esr = ends.esr;
   recipe.drops = Drops::greatest;
   recipe.aged = aged_;
-  recipe.temperature = true;
   return recipe;
 }
 
@@ -60,7 +59,7 @@ double LeanCaseSolver::capability_A(const LeanSolution& solution) const {
   const auto& stage = *points_->design().output_stage;
   const double spare_A = solution.best_A - overhead_A_;
   if (!stepping()) return spare_A;
-  return stage.efficiency.value_or(0) * spare_A * solution.best_rail_V / stage.output_voltage_V;
+  return stage.efficiency.value_or(0) * spare_A * solution.best_rail_V / stage_output_V(stage, End::high);
 }
 
 /// Greatest (I - overhead)·rail_min(I) up to the available current: by its derivative along the rail voltage,
@@ -148,6 +147,23 @@ LeanSolution LeanCaseSolver::solve(const LeanCase& where, const LeanSolution* ne
     if (pass + 1 < kMostRisePasses) found.rises = {implied.local_K, next_K};
   }
   found.usable = true;
+  return found;
+}
+
+LeanSolution LeanCaseSolver::solve_at(double rail_V, const LeanCase& where, const Rises& rises,
+                                      const LeanSolution* neighbour) {
+  LeanSolution found;
+  found.where = where;
+  found.rises = rises;
+  found.available = circuit::find_available_current(
+      points_->design().arrangement->build, points_->values(recipe(where.ends), rises, where.ambient_degC),
+      rail_V, neighbour != nullptr ? &neighbour->available : nullptr);
+  points_->count(found.available.steady_states);
+  found.usable = found.available.usable;
+  found.reason = found.available.reason;
+  found.available_A = found.best_A = found.available.current_A;
+  found.best_rail_V = rail_V;
+  found.best_state = found.available.state;
   return found;
 }
 

@@ -20,18 +20,28 @@ LeanSearch::LeanSearch(PointSolver& points, const circuit::Waveform& lean_mains,
                        double aged)
     : solver_(points, lean_mains, overhead_A, aged) {}
 
-/// Whether the clamp stands so little above the required rail that the cold end of its curve decides: its
-/// room is then of the order of the ripple. A step-down stage always works where the clamp lets go.
+LeanSearch::Cases LeanSearch::settled_cases() {
+  return {[this](const LeanCase& where, const LeanSolution* near) { return solver_.solve(where, near); },
+          [this](const LeanCase& where, const LeanSolution& known) { return solver_.rail_V(where, known); },
+          [this](const LeanSolution& solution) { return solver_.capability_A(solution); }};
+}
+
+/// A step-down stage always works where the clamp lets go.
 bool LeanSearch::knee_presumed() const {
-  if (solver_.stepping()) return true;
+  return solver_.stepping() || little_room(solver_.points().required_V());
+}
+
+/// Whether the clamp stands so little above a rail that the cold end of its curve decides: its room is then
+/// of the order of the ripple.
+bool LeanSearch::little_room(double rail_V) const {
   const auto& points = solver_.points();
   const auto& wiring = *points.design().arrangement;
   const auto values =
       points.values(solver_.recipe({}), {}, points.requirement().surroundings.ambient_degC.low);
   const double drop_V = wiring.clamp_ahead ? values.rectifier.threshold_V : 0;
-  const double room_V = values.clamp.main.threshold_V - drop_V - points.required_V();
+  const double room_V = values.clamp.main.threshold_V - drop_V - rail_V;
   const double ripples_a_period = wiring.full_wave ? 2 : 1;
-  const double ripple_V = charge_balance_A(wiring, values, points.required_V()) /
+  const double ripple_V = charge_balance_A(wiring, values, rail_V) /
                           (ripples_a_period * values.mains.frequency_Hz() * values.reservoir_F);
   return room_V < 1.2 * ripple_V;
 }
@@ -44,7 +54,8 @@ LeanEnds LeanSearch::presumed_ends(bool knee) const {
 
 /// Cases next to a solution whose rail falls short of it at its load: at each ambient the same ends and each
 /// of them turned. Turns that lower the rail further at one ambient are joined into one case.
-std::vector<LeanSearch::Short> LeanSearch::short_cases(const std::vector<double>& ambients,
+std::vector<LeanSearch::Short> LeanSearch::short_cases(const Cases& cases,
+                                                       const std::vector<double>& ambients,
                                                        const LeanSolution& least) {
   const auto& design = solver_.points().design();
   const bool bled = design.discharge != nullptr && design.discharge_count > 0;
@@ -52,13 +63,13 @@ std::vector<LeanSearch::Short> LeanSearch::short_cases(const std::vector<double>
   std::vector<Short> found;
   for (const double t : ambients) {
     const LeanCase same{t, least.where.ends};
-    const double same_V = t == least.where.ambient_degC ? least.best_rail_V : solver_.rail_V(same, least);
+    const double same_V = t == least.where.ambient_degC ? least.best_rail_V : cases.rail_V(same, least);
     Short joined{same, same_V};
     for (const auto member : {&LeanEnds::series_resistor, &LeanEnds::esr, &LeanEnds::discharge}) {
       if (member == &LeanEnds::discharge && !bled) continue;
       LeanCase turned = same;
       turned.ends.*member = flipped(turned.ends.*member);
-      const double rail_V = solver_.rail_V(turned, least);
+      const double rail_V = cases.rail_V(turned, least);
       if (!(rail_V < same_V - kRailTolerance_V)) continue;
       joined.where.ends.*member = turned.ends.*member;
       joined.rail_V = std::min(joined.rail_V, rail_V);
@@ -70,17 +81,18 @@ std::vector<LeanSearch::Short> LeanSearch::short_cases(const std::vector<double>
   return found;
 }
 
-LeanSolution LeanSearch::least_of(const std::vector<double>& ambients, const LeanEnds& first) {
-  LeanSolution least = solver_.solve({ambients.front(), first}, nullptr);
+LeanSolution LeanSearch::least_of(const Cases& cases, const std::vector<double>& ambients,
+                                  const LeanEnds& first) {
+  LeanSolution least = cases.solve({ambients.front(), first}, nullptr);
   std::vector<LeanCase> tried{least.where};
   for (int round = 0; round < kMostRounds && least.usable && least.best_A > 0; ++round) {
     bool lowered = false;
-    for (const auto& next : short_cases(ambients, least)) {
+    for (const auto& next : short_cases(cases, ambients, least)) {
       if (std::find(tried.begin(), tried.end(), next.where) != tried.end()) continue;
       tried.push_back(next.where);
-      auto solved = solver_.solve(next.where, &least);
+      auto solved = cases.solve(next.where, &least);
       // A rail that falls short with a borrowed junction may hold with its own.
-      lowered = !solved.usable || solver_.capability_A(solved) < solver_.capability_A(least);
+      lowered = !solved.usable || cases.capability_A(solved) < cases.capability_A(least);
       if (!lowered) continue;
       least = std::move(solved);
       break;
@@ -96,7 +108,7 @@ const LeanSolution& LeanSearch::least() {
   const bool knee = knee_presumed();
   std::vector<double> ambients{ambient.low};
   if (ambient.high != ambient.low) ambients.insert(knee ? ambients.end() : ambients.begin(), ambient.high);
-  least_ = least_of(ambients, presumed_ends(knee));
+  least_ = least_of(settled_cases(), ambients, presumed_ends(knee));
   return *least_;
 }
 
@@ -106,8 +118,9 @@ const LeanSolution& LeanSearch::at(bool hot) {
     const auto& ambient = solver_.points().requirement().surroundings.ambient_degC;
     const double here_degC = hot ? ambient.high : ambient.low;
     const auto& overall = least();
-    answer = overall.where.ambient_degC == here_degC ? overall
-                                                     : least_of({here_degC}, presumed_ends(knee_presumed()));
+    answer = overall.where.ambient_degC == here_degC
+                 ? overall
+                 : least_of(settled_cases(), {here_degC}, presumed_ends(knee_presumed()));
   }
   return *answer;
 }
@@ -118,16 +131,28 @@ std::optional<double> LeanSearch::current_at_A(double rail_V) {
   auto& points = solver_.points();
   if (rail_V == points.required_V()) return known.available_A;
   const auto& ambient = points.requirement().surroundings.ambient_degC;
-  std::optional<double> lesser;
-  for (const double t : {ambient.low, ambient.high}) {
-    const auto values = points.values(solver_.recipe(known.where.ends), known.rises, t);
-    const auto answer = circuit::find_available_current(points.design().arrangement->build, values, rail_V);
-    points.count(answer.steady_states);
-    if (!answer.usable) return std::nullopt;
-    if (!lesser || answer.current_A < *lesser) lesser = answer.current_A;
-    if (ambient.low == ambient.high) break;
+  const bool one_ambient = ambient.low == ambient.high;
+  std::optional<double> least_A;
+  for (const bool warm : {false, true}) {
+    const auto rises_at = [&](double degC) {
+      return (one_ambient ? warm : degC == ambient.high) ? known.rises : Rises{};
+    };
+    const Cases cases{[&](const LeanCase& where, const LeanSolution* near) {
+                        return solver_.solve_at(rail_V, where, rises_at(where.ambient_degC), near);
+                      },
+                      [&](const LeanCase& where, LeanSolution solution) {
+                        solution.rises = rises_at(where.ambient_degC);
+                        return solver_.rail_V(where, solution);
+                      },
+                      [](const LeanSolution& solution) { return solution.available_A; }};
+    std::vector<double> ambients{ambient.high};
+    if (!one_ambient) ambients.push_back(ambient.low);
+    const auto found = least_of(cases, ambients, presumed_ends(little_room(rail_V)));
+    if (!found.usable) return std::nullopt;
+    least_A = std::min(least_A.value_or(found.available_A), found.available_A);
+    if (!one_ambient) break;  // one descent has seen both
   }
-  return lesser;
+  return least_A;
 }
 
 }  // namespace dropfront::scoring

@@ -44,7 +44,7 @@ double Evidence::margin_ceiling_A() {
       const double high_V = *impl.required + (clamp_V - *impl.required) * (k + 1) / 9;
       power_W = std::max(power_W, high_V * (ceiling_A(wiring, values, low_V) - overhead_A));
     }
-    most_A = std::max(most_A, efficiency * power_W / impl.design.output_stage->output_voltage_V);
+    most_A = std::max(most_A, efficiency * power_W / stage_output_V(*impl.design.output_stage, End::high));
   }
   return most_A - impl.loads.heaviest_output_A();
 }

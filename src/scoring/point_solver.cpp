@@ -88,14 +88,15 @@ OperatingPoint PointSolver::solve(const char* corner, const Recipe& recipe, cons
     rises = {warm->local_degC - warm->ambient_degC, warm->clamp_junction_degC - warm->local_degC};
     start = warm->state.start;
     guess = &start;
-  } else if (recipe.temperature) {
+  } else {
     rises = estimated_rises(values(recipe, {}, ambient_degC), load.output_A + load.beside_A);
   }
   for (int pass = 0; pass < kMostPasses; ++pass) {
     point.values = values(recipe, rises, ambient_degC);
     const double reached_V = std::max(rail_V, required_V_);  // below it the stage has cut out
     point.rail_current_A =
-        stage_current_A(*design_->output_stage, load.output_A, reached_V, quiescent) + load.beside_A;
+        stage_current_A(*design_->output_stage, load.output_A, reached_V, quiescent, load.output) +
+        load.beside_A;
     point.values.rail_current_A = point.rail_current_A;
     point.state = steady(point.values, {}, guess);
     if (!point.state.usable()) break;
@@ -105,9 +106,8 @@ OperatingPoint PointSolver::solve(const char* corner, const Recipe& recipe, cons
     const auto used = rises.over(ambient_degC);
     const auto implied = now.over(ambient_degC);
     const bool cool =
-        !recipe.temperature ||
-        (std::abs(implied.local_degC - used.local_degC) <= kTemperatureTolerance_K &&
-         std::abs(implied.clamp_junction_degC - used.clamp_junction_degC) <= kTemperatureTolerance_K);
+        std::abs(implied.local_degC - used.local_degC) <= kTemperatureTolerance_K &&
+        std::abs(implied.clamp_junction_degC - used.clamp_junction_degC) <= kTemperatureTolerance_K;
     rises = now;
     bool steady_current = true;
     if (stepping) {

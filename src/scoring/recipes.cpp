@@ -13,7 +13,6 @@ Recipe rich_recipe(const MainsShapes& shapes) {
   recipe.esr = End::high;
   recipe.drops = Drops::least;
   recipe.aged = 1;
-  recipe.temperature = true;
   return recipe;
 }
 

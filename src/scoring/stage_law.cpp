@@ -16,12 +16,18 @@ double quiescent_A(const parts::OutputStage& stage, Quiescent quiescent) {
   return stage.quiescent_current_A;
 }
 
-double stage_current_A(const parts::OutputStage& stage, double output_A, double rail_V, Quiescent quiescent) {
+double stage_output_V(const parts::OutputStage& stage, End output) {
+  const double part = output == End::low ? -stage.tolerance : output == End::high ? stage.tolerance : 0;
+  return stage.output_voltage_V * (1 + part);
+}
+
+double stage_current_A(const parts::OutputStage& stage, double output_A, double rail_V, Quiescent quiescent,
+                       End output) {
   const double own_A = quiescent_A(stage, quiescent);
   if (stage.kind != parts::StageKind::step_down) return output_A + own_A;
   const double efficiency = stage.efficiency.value_or(1);
   if (!(efficiency > 0) || !(rail_V > 0)) return output_A + own_A;
-  return stage.output_voltage_V * output_A / (efficiency * rail_V) + own_A;
+  return stage_output_V(stage, output) * output_A / (efficiency * rail_V) + own_A;
 }
 
 std::optional<double> stage_required_V(const parts::OutputStage& stage, const OutputNeed& need,

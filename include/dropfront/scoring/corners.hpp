@@ -23,7 +23,6 @@ struct Recipe {
   /// Age in lives: 0 new, 1 end of life. Loss of dropper and reservoir and the rise of the ESR are straight
   /// in time, beyond the life too.
   double aged = 0;
-  bool temperature = false;  ///< the temperature laws apply; else every part is at its reference
 };
 
 /// Where the parts are: air around them, and the clamp's own junction.
@@ -32,7 +31,8 @@ struct Temperatures {
   double clamp_junction_degC = 25;
 };
 
-/// Values of `design` by `recipe`. rail_current_A is left 0. The design's mandatory parts must be present.
+/// Values of `design` by `recipe`: film, drops and electrolytics at the air around them, the clamp at its own
+/// junction, in every corner. rail_current_A is left 0. The design's mandatory parts must be present.
 circuit::ElementValues corner_values(const Design& design, const Recipe& recipe, const Temperatures& at,
                                      double load_cutoff_V);
 

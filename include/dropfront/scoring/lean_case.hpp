@@ -47,11 +47,15 @@ class LeanCaseSolver {
   /// Largest load, or for a step-down stage the load of greatest power. The junction's rise settles to 0.1 K.
   /// `neighbour`: a solution of another case to take first guesses from, or null.
   LeanSolution solve(const LeanCase& where, const LeanSolution* neighbour);
+  /// The available current for a required rail of `rail_V` at given rises: nothing settles, no power law.
+  LeanSolution solve_at(double rail_V, const LeanCase& where, const Rises& rises,
+                        const LeanSolution* neighbour);
   /// Rail minimum at `where` with the load and rises of a solution found elsewhere; far below zero when there
   /// is no steady state.
   double rail_V(const LeanCase& where, const LeanSolution& known);
   /// Greatest sustained output current of a solution: rail current less overhead; for a step-down stage its
-  /// power eta·I·v over the output voltage.
+  /// power eta·I·v over the greatest output voltage, Vout·(1 + tolerance): the load's current is given, and a
+  /// stage at the upper end of its tolerance needs the most power for it.
   double capability_A(const LeanSolution& solution) const;
 
   PointSolver& points() { return *points_; }

@@ -15,6 +15,7 @@ struct LoadCase {
   double beside_A = 0;  ///< leakage and rail loads
   Quiescent quiescent = Quiescent::data;
   bool at_trough = false;  ///< a step-down stage's current is taken at the rail's minimum, else at its mean
+  End output = End::high;  ///< end of its output tolerance a step-down stage stands at
 };
 
 /// Rises over the ambient at which the values of a point were taken.

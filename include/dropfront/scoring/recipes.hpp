@@ -14,7 +14,7 @@ Recipe rich_recipe(const MainsShapes& shapes);
 /// Its ends in words; the discharge chain is named where there is one (`bled`).
 const char* rich_ends(bool bled);
 
-/// Nominal values, new, at their reference temperature.
+/// Nominal values, new.
 Recipe nominal_recipe(const MainsShapes& shapes);
 
 /// Production worst for standby: tolerances only, new; C max, Rb min, high clamp curve, one end of Rs.

@@ -6,6 +6,7 @@
 #include <string_view>
 
 #include "dropfront/scoring/corners.hpp"
+#include "dropfront/scoring/recipes.hpp"
 #include "dropfront/scoring/stage_law.hpp"
 
 namespace dropfront::scoring {
@@ -59,16 +60,13 @@ BoxEnds::BoxEnds(const DesignBox& box, const BoundContext& context) {
   take_cold_figures(box, context);
   take_air(box, context);
   take_warm_figures(box, context);
+  take_standby_figures(box, context);
 }
 
 /// What does not depend on how warm the box gets.
 void BoxEnds::take_cold_figures(const DesignBox& box, const BoundContext& context) {
-  constexpr double kFilmReference_degC = 20;
   constexpr double kReference_degC = 25;
-  for (const auto* part : box.droppers) {
-    take(Figure::new_F, dropper_F(*part, End::high, false, kFilmReference_degC));
-    take(Figure::loss_tangent, part->loss_tangent);
-  }
+  for (const auto* part : box.droppers) take(Figure::loss_tangent, part->loss_tangent);
   for (const auto* part : box.series_resistors) {
     take(Figure::series_low_ohm, resistor_ohm(*part, End::low));
     take(Figure::series_high_ohm, resistor_ohm(*part, End::high));
@@ -84,9 +82,7 @@ void BoxEnds::take_cold_figures(const DesignBox& box, const BoundContext& contex
     take(Figure::drop_ohm, least.slope_ohm);
   }
   for (const auto* part : box.clamps) {
-    const auto high = zener_curve(*part, ZenerCurve::high, kReference_degC);
-    take(Figure::new_clamp_V, high.main.threshold_V);
-    take(Figure::clamp_ohm, high.main.slope_ohm);
+    take(Figure::clamp_ohm, zener_curve(*part, ZenerCurve::high, kReference_degC).main.slope_ohm);
   }
   for (const auto* part : box.reservoirs) {
     take(Figure::new_can_F, part->capacitance_F);
@@ -102,10 +98,12 @@ void BoxEnds::take_cold_figures(const DesignBox& box, const BoundContext& contex
 /// greatest voltage times the charge of both directions) and the chain.
 void BoxEnds::take_air(const DesignBox& box, const BoundContext& context) {
   double most_F = 0;
+  double least_F = kInfinity;
   double most_V = 0;
   for (const auto* part : box.droppers) {
-    for (const double degC : {context.ambient_low_degC(), kHottest_degC}) {
+    for (const double degC : {std::min(kStandby_degC, context.ambient_low_degC()), kHottest_degC}) {
       most_F = std::max(most_F, dropper_F(*part, End::high, false, degC));
+      least_F = std::min(least_F, dropper_F(*part, End::high, false, degC));
     }
   }
   for (const auto* part : box.clamps) {
@@ -120,9 +118,8 @@ void BoxEnds::take_air(const DesignBox& box, const BoundContext& context) {
       const double peak_A =
           1.05 * most_F * line->slope_V_per_s + line->crest_V / least(Figure::chain_low_ohm);
       peak_A_ = std::max(peak_A_, peak_A);
-      const double series_ohm =
-          greatest(Figure::series_high_ohm) +
-          greatest(Figure::loss_tangent) / (line->omega * std::max(1e-12, least(Figure::new_F)));
+      const double series_ohm = greatest(Figure::series_high_ohm) +
+                                greatest(Figure::loss_tangent) / (line->omega * std::max(1e-12, least_F));
       const double behind_V = most_V + greatest(Figure::clamp_ohm) * peak_A +
                               2 * (greatest(Figure::drop_V) + 0.2 + greatest(Figure::drop_ohm) * peak_A);
       const double charge_A = 2 * line->frequency_Hz * most_F * line->rises_V;
@@ -131,8 +128,9 @@ void BoxEnds::take_air(const DesignBox& box, const BoundContext& context) {
                                       chain_V * chain_V / least(Figure::chain_low_ohm));
     }
   }
-  hottest_air_degC_ =
-      std::min(kHottest_degC, context.ambient_high_degC() + context.enclosure_K_per_W() * power_W);
+  const double warmed_K = context.enclosure_K_per_W() * power_W;
+  hottest_air_degC_ = std::min(kHottest_degC, context.ambient_high_degC() + warmed_K);
+  standby_air_degC_ = std::min(kHottest_degC, kStandby_degC + warmed_K);
 }
 
 /// What takes the temperatures of the corners.
@@ -172,6 +170,30 @@ void BoxEnds::take_warm_figures(const DesignBox& box, const BoundContext& contex
     take(Figure::aged_can_F, reservoir_least_F(*part, true, hot_degC));
     take(Figure::aged_can_ohm, reservoir_greatest_esr_ohm(*part, true, hottest_air_degC_),
          reservoir_greatest_esr_ohm(*part, true, hot_degC));
+  }
+}
+
+/// What takes the temperatures of standby: air from kStandby_degC on.
+void BoxEnds::take_standby_figures(const DesignBox& box, const BoundContext& context) {
+  for (const auto* part : box.droppers) {
+    for (const double degC : {kStandby_degC, standby_air_degC_}) {
+      take(Figure::new_F, dropper_F(*part, End::high, false, degC));
+    }
+  }
+  ClampHeat heat;
+  heat.coolest_degC = kStandby_degC - kSettled_K;
+  heat.air_degC = standby_air_degC_ + kSettled_K;
+  heat.peak_A = peak_A_;
+  heat.forward_V = greatest(Figure::drop_V) + greatest(Figure::drop_ohm) * peak_A_;
+  const double crossings = box.arrangement->full_wave && !box.arrangement->clamp_ahead ? 2 : 1;
+  for (const auto& supply : context.supplies) {
+    const double charge_A = supply.standby.frequency_Hz * greatest(Figure::new_F) * supply.standby.rises_V +
+                            supply.standby.crest_V / least(Figure::chain_low_ohm);
+    heat.mean_A = std::max(heat.mean_A, crossings * charge_A);
+  }
+  for (const auto* part : box.clamps) {
+    const auto span = high_clamp_span(*part, heat);
+    take(Figure::new_clamp_V, span.least_V, span.greatest_V);
   }
 }
 

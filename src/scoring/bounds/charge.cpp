@@ -3,6 +3,8 @@
 #include <algorithm>
 #include <cmath>
 
+#include "dropfront/scoring/bounds/clamp_heat.hpp"
+#include "dropfront/scoring/recipes.hpp"
 #include "dropfront/scoring/stage_law.hpp"
 
 namespace dropfront::scoring {
@@ -50,6 +52,16 @@ const Line& line_of(const BoxQuestion& question, BoxCorner corner) {
   return corner == BoxCorner::rich ? question.supply.rich : question.supply.standby;
 }
 
+/// Least clamp threshold asleep: the charge the rail does not draw passes the clamp and warms it.
+double self_heated_least_V(const BoxQuestion& question, const CornerCharge& charge, double load_A) {
+  const double share = question.ahead() && question.full_wave() ? 0.5 : 1.0;  // two parts take turns
+  const double spare_A = share * std::max(0.0, charge.both_A - load_A);
+  const double forward_A = question.ahead() ? (question.full_wave() ? spare_A : charge.each_way_A) : 0;
+  return question.least_over(question.box.clamps, [&](const parts::Clamp* part) {
+    return self_heated_V(*part, kStandby_degC - kSettled_K, spare_A, charge.drop_least_V * forward_A);
+  });
+}
+
 }  // namespace
 
 CornerCharge corner_charge(const BoxQuestion& question, BoxCorner corner) {
@@ -72,7 +84,8 @@ CornerCharge corner_charge(const BoxQuestion& question, BoxCorner corner) {
   const auto can = rich ? Figure::aged_can_F : Figure::new_can_F;
   const auto can_ohm = rich ? Figure::aged_can_ohm : Figure::new_can_ohm;
   const double chain_S = 1 / ends.least(Figure::chain_low_ohm);
-  const double fall_V_per_s = load_most_A(question, corner, 1) / ends.least(can);
+  const double load_A = load_most_A(question, corner, 1);
+  const double fall_V_per_s = load_A / ends.least(can);
   const auto each_way_A = [&](double capacitance_F) {
     const double resistance_ohm = ends.greatest(Figure::series_high_ohm) + ends.greatest(Figure::clamp_ohm) +
                                   ends.greatest(Figure::loss_tangent) / (line.omega * capacitance_F) +
@@ -85,6 +98,7 @@ CornerCharge corner_charge(const BoxQuestion& question, BoxCorner corner) {
   };
   charge.each_way_A = std::max(0.0, std::min(each_way_A(ends.least(film)), each_way_A(ends.greatest(film))));
   charge.both_A = (question.full_wave() ? 2 : 1) * charge.each_way_A;
+  if (!rich) charge.clamp_V = std::max(charge.clamp_V, self_heated_least_V(question, charge, load_A));
   return charge;
 }
 
@@ -101,7 +115,8 @@ double load_most_A(const BoxQuestion& question, BoxCorner corner, double share) 
   const double stage_A = question.greatest_over(question.box.output_stages, [&](const auto* stage) {
     // Below V_required a step-down stage draws what it draws there.
     const double least_V = required_rail_V(*stage, question.context.requirement->output, loads).value_or(0);
-    return stage_current_A(*stage, output_A, least_V, rich ? Quiescent::least : Quiescent::dropout);
+    return stage_current_A(*stage, output_A, least_V, rich ? Quiescent::least : Quiescent::dropout,
+                           rich ? End::high : End::low);
   });
   const double leakage_A = question.ends.greatest(Figure::leakage_A);
   if (!rich) return stage_A + leakage_A + loads.rail_A;

@@ -2,6 +2,8 @@
 
 #include <algorithm>
 
+#include "dropfront/scoring/corners/zener_curve.hpp"
+
 namespace dropfront::scoring {
 
 namespace {
@@ -36,6 +38,16 @@ ClampSpan high_clamp_span(const parts::Clamp& part, const ClampHeat& heat) {
   const double least_ohm = std::max(kLeastSlope_ohm, part.slope_min_ohm);
   const double most_ohm = std::max(least_ohm, part.slope_resistance_ohm);
   return clamp_span(part, part.voltage_max_V, least_ohm, most_ohm, heat);
+}
+
+double self_heated_V(const parts::Clamp& part, double air_degC, double mean_A, double other_W) {
+  const double tempco = part.temperature_coefficient_per_K;
+  if (!(tempco > 0)) return 0;
+  const auto at_V = [&](double degC) { return zener_curve(part, ZenerCurve::high, degC).main.threshold_V; };
+  const double per_W = part.voltage_max_V * tempco * part.thermal_resistance_K_per_W;
+  const double k = std::clamp(per_W * mean_A, 0.0, 0.9);
+  const double warm_V = (at_V(air_degC) + per_W * std::max(0.0, other_W)) / (1 - k);
+  return std::min(warm_V, at_V(kHottest_degC));
 }
 
 }  // namespace dropfront::scoring

@@ -40,7 +40,7 @@ std::optional<Need> need_of(const DesignBox& box, const Requirement& requirement
     if (stage->kind != parts::StageKind::step_down) continue;
     const double efficiency = stage->efficiency.value_or(0);
     if (!(efficiency > 0)) return std::nullopt;
-    const double power_W = stage->output_voltage_V * need.output_A / efficiency;
+    const double power_W = stage_output_V(*stage, End::high) * need.output_A / efficiency;
     need.stepping_W = std::min(need.stepping_W.value_or(INFINITY), power_W);
   }
   need.beside_A += leakage_A + loads.heaviest_rail_A();

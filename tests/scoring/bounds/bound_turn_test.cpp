@@ -91,7 +91,7 @@ Outcome turned(const BoundRule& rule, const std::vector<Asked>& all, const Turn&
     question.lists_turned = turn.lists;
     const auto box = say(rule, question);
     // Second-order turns (what else warms the clamp a little) drown in the engine's tolerances.
-    if (!(tighter(box, asked.box) > 100 * slack_of(rule))) continue;
+    if (!(tighter(box, asked.box) > 1000 * slack_of(rule))) continue;
     outcome.changed = true;
     outcome.worst = std::max(outcome.worst, asked.worst(box));
   }

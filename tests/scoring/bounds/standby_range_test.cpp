@@ -16,6 +16,9 @@ struct TwoClamps {
   test::Example example{"bridge-clamp-across"};
   std::array<parts::Clamp, 2> clamps{test::one_watt_zener(43, 0.006, 70, 1500, 0.25e-3, 0.00095),
                                      test::one_watt_zener(82, 0.003, 200, 3000, 0.25e-3, 0.00099)};
+  TwoClamps() {
+    for (auto& clamp : clamps) clamp.thermal_resistance_K_per_W = 2;  // heat is not the question here
+  }
 
   double standby_W(std::size_t i) const {
     Design design = example.design();
@@ -50,6 +53,6 @@ TEST_CASE("With an ordinary chain the higher clamp loses more, and the bound is 
   const auto bound_W = two.engine_W();
   REQUIRE(bound_W);
   REQUIRE(*bound_W <= two.standby_W(0));
-  // Only the slope differs from the lower clamp's own and is the same: the load settles to a millionth.
-  REQUIRE_THAT(*bound_W, Catch::Matchers::WithinRel(two.standby_W(0), 1e-4));
+  // Only the slope differs from the lower clamp's own and is the same, and 0.1 K of warmth is given away.
+  REQUIRE_THAT(*bound_W, Catch::Matchers::WithinRel(two.standby_W(0), 1e-3));
 }

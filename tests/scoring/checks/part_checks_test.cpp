@@ -126,11 +126,34 @@ TEST_CASE("ripple is judged under load and not asleep") {
   CHECK(*check.value >= 10e-3);
 }
 
-TEST_CASE("leakage is spared from the margin to the ampere") {
+TEST_CASE("leakage has the data's and the margin to live on, and grows fivefold from 20 to 85 degC") {
   Example example;
-  const Check margin = judge(example, supply_margin).value();
-  const Check leakage = judge(example, reservoir_leakage).value();
-  CHECK_THAT(*leakage.limit - *leakage.value, WithinRel(*margin.value, 1e-9));
+  example.linear(5, 0.04, 1.7, 60e-6);
+  example.requirement.surroundings.enclosure_K_per_W = 0;
+  for (const double hot_degC : {20.0, 52.5, 85.0}) {
+    example.requirement.surroundings.ambient_degC = {0, 20, hot_degC};
+    const Check check = judge(example, reservoir_leakage).value();
+    // 55 uA at 25 V by the data; half of the way in log is the root of five.
+    const double factor = hot_degC == 20 ? 1 : hot_degC == 85 ? 5 : std::sqrt(5.0);
+    Evidence evidence(example.design(), example.requirement, example.supply());
+    CHECK_THAT(*check.value, WithinRel(55e-6 * evidence.rich_empty().rail_greatest_V / 25 * factor, 1e-9));
+    const double margin_A = *judge(example, supply_margin).value().value;
+    CHECK_THAT(*check.limit, WithinRel(55e-6 + margin_A, 1e-9));
+  }
+}
+
+TEST_CASE("a margin that holds by the data leakage can be lost to the leakage of warm air") {
+  Example example;
+  example.linear(5, 0.04, 1.7, 60e-6);
+  example.requirement.surroundings.ambient_degC = {0, 25, 65};
+  example.reservoir.leakage_A = 0.5e-3;
+  auto& load_A = example.requirement.output.loads.back().current_A;
+  load_A += *judge(example, supply_margin).value().value - 0.1e-3;
+  CHECK(judge(example, supply_margin).value().pass == true);
+  CHECK(judge(example, reservoir_leakage).value().pass == false);
+  // 12.6 V of 25 V at 65 degC: 3.05 times half the data, so half as much again; 0.3 mA more margin is enough.
+  load_A -= 0.3e-3;
+  CHECK(judge(example, reservoir_leakage).value().pass == true);
 }
 
 TEST_CASE("a linear stage is hottest awake, and more so with more load") {

@@ -122,6 +122,27 @@ TEST_CASE("the junction judged is the one the clamp's voltage was solved with") 
              WithinAbs(evidence.rich_empty_hot().clamp_junction_degC, 0.1));  // its fixed point: 0.05 K
 }
 
+TEST_CASE(
+    "the share of a clamp's pulse rating is told as extrapolated, and beside it what the data alone say") {
+  Example example;
+  const Check check = judge(example, clamp_pulse).value();
+  CHECK(check.basis.find("extrapolated below the data's shortest pulse (from memory)") != std::string::npos);
+  const auto figure = [&](std::string_view name) {
+    for (const Term& term : check.figures)
+      if (term.name == name) return term.value;
+    FAIL("no figure " << name);
+    return 0.0;
+  };
+  CHECK(figure("share_extrapolated") == *check.value);
+  // The peak taken for 8.3 ms: by hand some 2·Vcrest/Rs of current, 747 V over 45 ohm, at 12.6 V and a few
+  // ohms of the low slope, against 4.5 W. A third covers slope, rail and the warm junction.
+  const double peak_A = 2 * 1.03 * 253 * std::sqrt(2.0) / (0.95 * 47);
+  const double peak_W = peak_A * (12.6 + 0.9 * peak_A);
+  CHECK_THAT(figure("share_without_extrapolation"), WithinRel(1.3 * peak_W / 4.5, 0.33));
+  // The pulse lasts some Rs·C/2 = 16 us, a twentieth of 8.3 ms in the root of time.
+  CHECK(*check.value < 0.2 * figure("share_without_extrapolation"));
+}
+
 TEST_CASE("a clamp with twice the pulse rating uses half of it") {
   Example example;
   const double once = value_of(example, clamp_pulse);

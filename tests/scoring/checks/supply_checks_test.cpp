@@ -28,7 +28,7 @@ TEST_CASE("a milliampere more load is a milliampere less margin on a clamped rai
 }
 
 TEST_CASE("a step-down starts exactly where its turn-on rule says") {
-  // input_on > P/(efficiency·(Id - Iq)), with leakage in the place of more Iq.
+  // input_on > P/(efficiency·(Id - Iq)), with leakage in the place of more Iq; the output 3 % high.
   Example example;
   test::step_down(example);
   for (double load : {1e-3, 5e-3, 20e-3, 35e-3, 60e-3}) {
@@ -36,7 +36,7 @@ TEST_CASE("a step-down starts exactly where its turn-on rule says") {
     const Check check = judge(example, supply_start).value();
     const double own = example.stage.quiescent_current_A + example.reservoir.leakage_A;
     const double needed_V =
-        example.stage.output_voltage_V * load / (*example.stage.efficiency * (*check.value - own));
+        1.03 * example.stage.output_voltage_V * load / (*example.stage.efficiency * (*check.value - own));
     INFO(load << " A at the output, " << needed_V << " V needed");
     CHECK(check.pass == (*example.stage.input_on_V > needed_V));
   }

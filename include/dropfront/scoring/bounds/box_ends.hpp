@@ -10,7 +10,7 @@ namespace dropfront::scoring {
 /// Figures of a part (or chain) that bounds take the least or greatest of over a list.
 enum class Figure {
   lean_F,           ///< dropper, end of life, low end; the most the lesser of both ambients can leave
-  new_F,            ///< dropper, high end, new, 20 degC: standby
+  new_F,            ///< dropper, high end, new, over the air temperatures of standby
   rich_F,           ///< dropper, high end, over the temperatures the hot rich corner can reach
   loss_tangent,     ///< of the dropper
   series_low_ohm,   ///< series resistor, low end
@@ -20,7 +20,7 @@ enum class Figure {
   drop_V,           ///< rectifier threshold by its data
   least_drop_V,     ///< and at the least drop of the rich corner
   drop_ohm,         ///< its slope
-  new_clamp_V,      ///< threshold of the high clamp curve at 25 degC
+  new_clamp_V,      ///< threshold of the high clamp curve over the junction temperatures of standby
   rich_clamp_V,     ///< and over the junction temperatures of the hot rich corner
   cold_clamp_V,     ///< the same from the low ambient on
   clamp_ohm,        ///< greatest slope of the clamp
@@ -64,10 +64,12 @@ class BoxEnds {
   void take_cold_figures(const DesignBox& box, const BoundContext& context);
   void take_air(const DesignBox& box, const BoundContext& context);
   void take_warm_figures(const DesignBox& box, const BoundContext& context);
+  void take_standby_figures(const DesignBox& box, const BoundContext& context);
 
   std::array<Ends, static_cast<std::size_t>(Figure::count)> ends_;
   bool known_circuit_ = false;
   double hottest_air_degC_ = 0;
+  double standby_air_degC_ = 0;  ///< the same when asleep
   double peak_A_ = 0;
   ClampHeat rich_heat_;
 };

@@ -66,8 +66,8 @@ double greatest_W(const ChargeLine& line, double overhead_A, double least_V, dou
 }  // namespace
 
 /// Charge balance (charge.hpp) at V_required, less the least the stage, the leakage and the rail's own loads
-/// take; step-down: eta·max v·(I(v) - overhead)/Vout over v up to the clamp. Nothing where no clamp lets the
-/// rail reach V_required. Worst over stages. Theorem.
+/// take; step-down: eta·max v·(I(v) - overhead)/(Vout·(1 + tol)) over v up to the clamp. Nothing where no
+/// clamp lets the rail reach V_required. Worst over stages. Theorem.
 std::optional<double> margin_by_charge(const BoxQuestion& question) {
   const auto& ends = question.ends;
   if (!ends.known_circuit()) return std::nullopt;
@@ -89,7 +89,7 @@ std::optional<double> margin_by_charge(const BoxQuestion& question) {
       power_W = std::max(power_W, greatest_W(line, overhead_A, required_V, most_V));
     }
     const double efficiency = stage->efficiency.value_or(0);
-    return efficiency * power_W / stage->output_voltage_V;
+    return efficiency * power_W / stage_output_V(*stage, End::high);
   });
   return most_A + kSolved_A + kSolvedShare * std::abs(most_A) - loads.heaviest_output_A();
 }

@@ -46,12 +46,17 @@ std::vector<const Part*> unlike(const std::vector<const Part*>& list) {
 
 }  // namespace
 
-/// Input power of a steady state with the least C, Rs, clamp threshold and slope, the greatest chain and the
-/// greatest load of the box; reservoirs and rectifiers are tried. Monotone by test, in the range of
-/// `in_range`; a state that does not converge shows nothing.
+/// Input power of a steady state with the least C (over the air of standby), Rs, clamp threshold and slope,
+/// the greatest chain and the greatest load of the box; reservoirs and rectifiers are tried. Monotone by
+/// test, in the range of `in_range`; a state that does not converge shows nothing. A clamp that warms itself
+/// stands higher by its tempco and takes more: its threshold is the least over the junctions there can be,
+/// warmed by the least charge that must pass it (self_heated_V); one that falls as it warms counts at its
+/// hottest.
 std::optional<double> standby_by_engine(const BoxQuestion& question) {
   const auto& ends = question.ends;
-  if (!ends.known_circuit() || !in_range(question, question.charge(BoxCorner::standby))) return std::nullopt;
+  if (!ends.known_circuit()) return std::nullopt;
+  const auto& charge = question.charge(BoxCorner::standby);
+  if (!in_range(question, charge)) return std::nullopt;
   const auto reservoirs = unlike(question.box.reservoirs);
   const auto rectifiers = unlike(question.box.rectifiers);
   if (reservoirs.size() * rectifiers.size() > kMostTried) return std::nullopt;
@@ -61,7 +66,7 @@ std::optional<double> standby_by_engine(const BoxQuestion& question) {
   values.dropper_F = ends.least(Figure::new_F);
   values.dropper_esr_ohm = ends.least(Figure::loss_tangent) / (values.mains.omega() * values.dropper_F);
   values.discharge_ohm = ends.greatest(Figure::chain_low_ohm);
-  values.clamp.main = {ends.least(Figure::new_clamp_V), ends.least(Figure::clamp_ohm)};
+  values.clamp.main = {charge.clamp_V, ends.least(Figure::clamp_ohm)};
   values.rail_current_A = load_most_A(question, BoxCorner::standby, 1);
   values.load_cutoff_V = 0.5 * ends.least(Figure::required_V);
   std::optional<double> least_W;
