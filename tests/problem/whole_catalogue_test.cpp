@@ -134,7 +134,7 @@ TEST_CASE(
   for (const bool raw : {true, false}) {
     evaluator.set_resolution(raw ? std::vector<double>(4, 0.0) : bound->resolution());
     const auto exact = front_by_definition(all, evaluator.resolution());
-    CHECK(exact.size() >= 20);
+    CHECK(exact.size() >= 15);  // a front worth comparing
     for (const bool enumerate : {true, false}) {
       INFO((raw ? "raw, " : "default resolution, ") << (enumerate ? "enumerated" : "searched"));
       search::SearchOptions options;
