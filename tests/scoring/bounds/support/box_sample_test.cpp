@@ -96,7 +96,7 @@ const Offers& offers() {
 const parts::Catalogue& demo_parts() {
   static const parts::Catalogue catalogue = [] {
     parts::Catalogue read;
-    parts::read_parts_folder(std::string(DROPFRONT_SOURCE_DIR) + "/problems/parts/demo", read);
+    parts::read_parts_folder(DROPFRONT_SOURCE_DIR "/problems/parts/demo", read);
     // What the lists do not hold: lossy films, a class for lesser impulses or none, a capacitance that rises
     // with temperature, ratings left out.
     for (std::size_t i = 0; i < read.droppers.size(); i += 5) {
