@@ -42,7 +42,8 @@ void confirm_ranked(Result& result, const search::SearchOptions& options) {
         designs.push_back(entry.design);
       }
   if (entries.empty()) return;
-  const auto plan = problem::confirm_plan(options.effort);
+  auto plan = problem::confirm_plan(options.effort);
+  if (result.status == Status::cut_short) plan.sample_units = 0;  // who sets a limit of time or work means it
   auto confirmations =
       problem::confirm(*result.problem, designs, sample_order(result, entries, plan.sample_units < 0), plan,
                        options.threads, options.stop);
