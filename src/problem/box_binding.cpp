@@ -45,16 +45,13 @@ class Boxes : public search::Bounder {
   search::Bounds bound(const search::Box& box, int depth) const override {
     scoring::BoxBound found;  // nothing known
     if (single_parts()) found = known(box, depth);
-    search::Bounds out;
-    for (const scoring::Objective objective : problem_.requirement.objectives) add(objective, found, out);
-    if (depth == 0 && found.broken.empty()) add_corners(box, out);
-    const auto& names = view_.check_names();
-    const auto broken = std::find(names.begin(), names.end(), found.broken);
-    if (!found.broken.empty() && broken != names.end()) {
-      out.broken = static_cast<int>(broken - names.begin());
-      out.broken_kind = kind_of(found.broken_class);
-    }
-    return out;
+    return as_bounds(found, box, depth);
+  }
+
+  search::Bounds outlook(const search::Box& box) const override {
+    scoring::BoxBound found;
+    if (single_parts()) found = bounder_.outlook(design_box(problem_.offers, slots_.ids, box));
+    return as_bounds(found, box, 0);
   }
 
   bool out_of_reach(const search::Box& box, int objective, double value) const override {
@@ -73,10 +70,24 @@ class Boxes : public search::Bounder {
   }
 
  private:
+  search::Bounds as_bounds(const scoring::BoxBound& found, const search::Box& box, int depth) const {
+    search::Bounds out;
+    out.shares = found.shares;
+    for (const scoring::Objective objective : problem_.requirement.objectives) add(objective, found, out);
+    if (depth == 0 && found.broken.empty()) add_corners(box, out);
+    const auto& names = view_.check_names();
+    const auto broken = std::find(names.begin(), names.end(), found.broken);
+    if (!found.broken.empty() && broken != names.end()) {
+      out.broken = static_cast<int>(broken - names.begin());
+      out.broken_kind = kind_of(found.broken_class);
+    }
+    return out;
+  }
+
   scoring::BoxBound known(const search::Box& box, int depth) const {
     const scoring::DesignBox parts = design_box(problem_.offers, slots_.ids, box);
-    scoring::BoxBound found = bounder_.bound(parts, depth);
-    if (depth > 0 && found.broken.empty() && reach_.out_of_reach(parts, wanted_margin_A_)) {
+    scoring::BoxBound found = bounder_.bound(parts, depth, depth);
+    if (depth == 1 && found.broken.empty() && reach_.out_of_reach(parts, wanted_margin_A_)) {
       found.broken = "supply.margin";
       found.broken_class = scoring::BoundClass::monotone;
     }

@@ -149,13 +149,9 @@ std::optional<Check> margin_out_of_reach(const Evidences& evidences) {
   return std::nullopt;
 }
 
-/// The greatest power of a step-down stage costs more than all other checks together. It waits for them where
-/// it is no objective that could show the design to be dominated.
+/// The greatest power of a step-down stage costs more than all other checks together: it waits for them.
 bool margin_is_dear(const Evidences& evidences) {
-  const Evidence& evidence = *evidences.front();
-  const auto& objectives = evidence.requirement().objectives;
-  return evidence.design().output_stage->kind == parts::StageKind::step_down &&
-         std::find(objectives.begin(), objectives.end(), Objective::current_margin) == objectives.end();
+  return evidences.front()->design().output_stage->kind == parts::StageKind::step_down;
 }
 
 /// Tiers by cost, and the objective that becomes known with each; false when the score stops there.

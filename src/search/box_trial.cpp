@@ -4,9 +4,13 @@
 #include <cmath>
 #include <limits>
 
+#include "dropfront/search/box_prospect.hpp"
+
 namespace dropfront::search {
 namespace {
 
+constexpr double few_members = 4;      // so few that any split does
+constexpr double corner_members = 12;  // so few that bounds of depth 2 are worth their time
 constexpr double unknown = -std::numeric_limits<double>::infinity();
 
 Choice least_choice(const Box& box) {
@@ -57,7 +61,7 @@ bool BoxTrial::discard(OpenBox& open, int depth, Verdict& verdict) const {
   }
   sharpen(open, found);
   if (!found.corners.empty()) open.corners = found.corners;
-  if (!rejects(open, BoundKind::monotone)) return depth > 0 && discard_by_questions(open, verdict);
+  if (!rejects(open, BoundKind::monotone)) return depth == 1 && discard_by_questions(open, verdict);
   verdict.fate = Fate::dominated;
   // The strongest reasoning that suffices.
   verdict.kind = BoundKind::exact;
@@ -156,7 +160,26 @@ void BoxTrial::settle(const Box& box, Tried& tried) const {
   } while (advance(at, box));
 }
 
-Tried BoxTrial::run(OpenBox open, const std::vector<double>& extent) const {
+/// The split whose halves come nearest to being discarded, judged by what costs no solving; where none comes
+/// nearer, that of the list whose options lie farthest apart.
+std::pair<Box, Box> BoxTrial::split(const OpenBox& open, const FrontGauge& gauge) const {
+  const Prospect now(bounder_, gauge, open.box, open.bound);
+  int best_slot = splitter_.widest(open.box, gauge.extent());
+  std::pair<Box, Box> best = splitter_.split(open.box, best_slot);
+  if (open.box.members() <= few_members) return best;
+  double least = now.work_left(best);
+  for (int slot = 0; slot < static_cast<int>(open.box.options.size()); ++slot) {
+    if (slot == best_slot || open.box.options[slot].size() < 2) continue;
+    auto halves = splitter_.split(open.box, slot);
+    const double left = now.work_left(halves);
+    if (!(left < least)) continue;
+    least = left;
+    best = std::move(halves);
+  }
+  return best;
+}
+
+Tried BoxTrial::run(OpenBox open, const FrontGauge& gauge) const {
   Tried tried;
   if (state_.over()) return tried;
   tried.members = open.box.members();
@@ -167,12 +190,13 @@ Tried BoxTrial::run(OpenBox open, const std::vector<double>& extent) const {
   tried.members = open.box.members();
   if (tried.members == 0) {
     tried.fate = Fate::shaved;
-  } else if (discard(open, 1, tried)) {
+  } else if (discard(open, 1, tried) ||
+             (tried.members > 1 && tried.members <= corner_members && discard(open, 2, tried))) {
   } else if (tried.members <= most_singles) {
     settle(open.box, tried);
   } else {
     tried.fate = Fate::split;
-    auto halves = splitter_.split(open.box, splitter_.widest(open.box, extent));
+    auto halves = split(open, gauge);
     for (Box* half : {&halves.first, &halves.second})
       tried.halves.push_back(OpenBox{std::move(*half), open.bound, open.kinds, {}, open.weight / 2});
   }

@@ -25,7 +25,7 @@ FrontGauge::FrontGauge(const ParetoArchive& front, const std::vector<double>& le
   for (std::size_t k = 0; k < objectives_; ++k) best_.push_back(range.low(static_cast<int>(k)) / extent_[k]);
 }
 
-double FrontGauge::gain(const std::vector<double>& point, double enough) const {
+double FrontGauge::lead(const std::vector<double>& point, double enough) const {
   if (members_.empty()) return 1;
   double scaled[16];
   const std::size_t m = std::min<std::size_t>(objectives_, 16);
@@ -37,8 +37,14 @@ double FrontGauge::gain(const std::vector<double>& point, double enough) const {
     least = std::min(least, most);
     if (least <= enough) return least;
   }
+  return least;
+}
+
+double FrontGauge::gain(const std::vector<double>& point, double enough) const {
+  const double least = lead(point, enough);
+  if (members_.empty() || least <= enough) return least;
   double beyond = 0;
-  for (std::size_t k = 0; k < m; ++k) beyond = std::max(beyond, best_[k] - scaled[k]);
+  for (std::size_t k = 0; k < objectives_; ++k) beyond = std::max(beyond, best_[k] - point[k] / extent_[k]);
   return least + beyond_weight * beyond;
 }
 

@@ -55,9 +55,9 @@ class Prover {
   bool batch(std::size_t count) {
     std::vector<OpenBox> boxes;
     for (; boxes.size() < count; open_.pop_back()) boxes.push_back(std::move(open_.back()));
-    const std::vector<double> extent = state_.gauge().extent();
+    const FrontGauge gauge = state_.gauge();
     std::vector<Tried> tried(count);
-    state_.workers.for_each(count, 1, [&](std::size_t i) { tried[i] = trial_.run(boxes[i], extent); });
+    state_.workers.for_each(count, 1, [&](std::size_t i) { tried[i] = trial_.run(boxes[i], gauge); });
     if (state_.ended()) {
       for (; !boxes.empty(); boxes.pop_back()) open_.push_back(std::move(boxes.back()));
       return false;

@@ -27,6 +27,9 @@ struct Bounds {
   std::vector<std::vector<double>> corners;
   int broken = -1;  ///< index into the evaluator's check names that every member breaks
   BoundKind broken_kind = BoundKind::theorem;
+  /// Filled in by outlook(), in an order of its own: the shares of limits that no member stays below; above 1
+  /// every member breaks that limit.
+  std::vector<double> shares;
   bool undefined = false;  ///< every member lacks a figure without which it cannot comply (exact)
 };
 
@@ -35,8 +38,11 @@ struct Bounds {
 class Bounder {
  public:
   virtual ~Bounder() = default;
-  /// `depth` 0: what needs no solving; 1: solving allowed. A deeper bound is never looser.
+  /// `depth` 0: what needs no solving; 1: a few points solved; 2: whole corners. A deeper bound need not
+  /// repeat what a lesser one says.
   virtual Bounds bound(const Box& box, int depth) const = 0;
+  /// As depth 0, with `shares` filled in: how far a box is from being discarded. Need not know anything.
+  virtual Bounds outlook(const Box& box) const { return bound(box, 0); }
   /// True: no member's objective is below `value`. May be cheaper than a bound on it (one question at one
   /// point), and sharper; known no better than monotone. Nothing need be known.
   virtual bool out_of_reach(const Box& /*box*/, int /*objective*/, double /*value*/) const { return false; }

@@ -61,8 +61,8 @@ class BoxTrial {
   BoxTrial(const SearchState& state, const Bounder& bounder, const BoxSplitter& splitter)
       : state_(state), bounder_(bounder), splitter_(splitter), front_(state.ledger.front()) {}
 
-  /// `extent`: see BoxSplitter::widest.
-  Tried run(OpenBox open, const std::vector<double>& extent) const;
+  /// `gauge`: of the front as it is.
+  Tried run(OpenBox open, const FrontGauge& gauge) const;
 
   /// Boxes of at most so many members are settled design by design.
   static constexpr int most_singles = 2;
@@ -72,6 +72,7 @@ class BoxTrial {
   void shave(OpenBox& open, Tried& tried) const;
   bool discard_by_questions(const OpenBox& open, Verdict& verdict) const;
   bool rejects(const OpenBox& open, BoundKind weakest) const;
+  std::pair<Box, Box> split(const OpenBox& open, const FrontGauge& gauge) const;
   void settle(const Box& box, Tried& tried) const;
   Tried::Single settle(const Choice& choice) const;
 

@@ -18,6 +18,10 @@ class FrontGauge {
   /// is known not to exceed `enough`.
   double gain(const std::vector<double>& point, double enough) const;
 
+  /// The first of the two alone: by how much a vector (with -infinity where nothing is known) is not yet
+  /// behind a member. 1 for an empty front.
+  double lead(const std::vector<double>& point, double enough) const;
+
   const std::vector<double>& extent() const { return extent_; }
 
  private:

@@ -13,6 +13,9 @@ constexpr const char* kSeries = "as before, w·Rs·C < 1 over the box";
 constexpr const char* kStandby =
     "p = w·Rs·C <= 0.4, q = 1/(w·C·Rb) <= 0.15; behind the dropper at most (0.5 - 1.5q) of the crest, bridge "
     "(0.42 - 0.5p - 1.5q); at most four reservoirs times rectifiers";
+constexpr const char* kRich =
+    "the four plainly clamped arrangements; rectifiers alike; behind the dropper at most 0.4 of the crest";
+constexpr const char* kPulse = "as before, clamps alike";
 constexpr const char* kSingle = "series resistor, chain, rectifier and ESR single; no step-down stage";
 
 BoundRule objective(std::string_view id, BoundClass known, int depth, std::string_view range,
@@ -21,6 +24,9 @@ BoundRule objective(std::string_view id, BoundClass known, int depth, std::strin
 }
 BoundRule limit(std::string_view id, std::string_view range, bounds::LimitBound* rule) {
   return {id, kTheorem, 0, range, nullptr, rule};
+}
+BoundRule solved_limit(std::string_view id, std::string_view range, bounds::LimitBound* rule) {
+  return {id, BoundClass::monotone, 2, range, nullptr, rule};
 }
 
 }  // namespace
@@ -57,7 +63,12 @@ const std::vector<BoundRule>& bound_table() {
       limit("rectifier.surge", kCrest, bounds::rectifier_surge),
       limit("rail.transient", kCrest, bounds::rail_transient),
       objective("standby_loss", BoundClass::monotone, 1, kStandby, bounds::standby_by_engine),
-      objective("current_margin", BoundClass::monotone, 2, kSingle, bounds::margin_by_engine),
+      solved_limit("rail.max", kRich, bounds::rail_max_by_engine),
+      solved_limit("clamp.power", kRich, bounds::clamp_power_by_engine),
+      solved_limit("clamp.junction", kRich, bounds::clamp_junction_by_engine),
+      solved_limit("rail.transient", kRich, bounds::rail_transient_by_engine),
+      solved_limit("clamp.pulse", kPulse, bounds::clamp_pulse_by_engine),
+      objective("current_margin", BoundClass::monotone, 3, kSingle, bounds::margin_by_engine),
   };
   return table;
 }

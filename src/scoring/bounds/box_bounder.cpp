@@ -42,6 +42,15 @@ void take_objective(const BoundRule& rule, double value, const BoundContext& con
   }
 }
 
+/// How much of the limit on an objective its bound leaves used at least; 0: no limit.
+double objective_share(const BoundRule& rule, double value, const BoundContext& context) {
+  const auto& limits = context.requirement->limits;
+  if (rule.id == "standby_loss" && limits.standby_power_W) return value / *limits.standby_power_W;
+  if (rule.id != "current_margin") return 0;
+  const double load_A = context.loads.heaviest_output_A();
+  return value + load_A > 0 ? (1 + limits.current_margin) * load_A / (value + load_A) : 2;
+}
+
 bool any_empty(const DesignBox& box) {
   return box.output_stages.empty() || box.droppers.empty() || box.series_resistors.empty() ||
          box.clamps.empty() || box.reservoirs.empty() || box.discharges.empty() || box.rectifiers.empty();
@@ -62,23 +71,33 @@ double members(const DesignBox& box) {
 
 BoxBounder::BoxBounder(const Requirement& requirement) : context_(requirement) {}
 
-BoxBound BoxBounder::bound(const DesignBox& box, int depth) const {
+BoxBound BoxBounder::bound(const DesignBox& box, int least_depth, int depth) const {
+  return ask(box, least_depth, depth, false);
+}
+
+BoxBound BoxBounder::outlook(const DesignBox& box) const { return ask(box, 0, 0, true); }
+
+BoxBound BoxBounder::ask(const DesignBox& box, int least_depth, int depth, bool shares) const {
   BoxBound bound;
   if (box.arrangement == nullptr || any_empty(box)) return bound;
   const BoxEnds ends(box, context_);
   std::vector<BoxQuestion> questions;
   questions.reserve(context_.supplies.size());
   for (const auto& supply : context_.supplies) {
-    questions.emplace_back(box, ends, context_, supply).verdict_only = true;
+    questions.emplace_back(box, ends, context_, supply).verdict_only = !shares;
   }
   for (const auto& rule : bound_table()) {
-    if (rule.depth > depth) continue;
+    if (rule.depth < least_depth || rule.depth > depth) continue;
     for (const auto& question : questions) {
       if (rule.objective != nullptr) {
         const auto value = rule.objective(question);
-        if (value && std::isfinite(*value)) take_objective(rule, *value, context_, bound);
-      } else if (rule.limit(question) > kBroken) {
-        broken(bound, rule.id, rule.bound_class);
+        if (!value || !std::isfinite(*value)) continue;
+        take_objective(rule, *value, context_, bound);
+        if (shares) bound.shares.push_back(objective_share(rule, *value, context_));
+      } else {
+        const double share = rule.limit(question);
+        if (shares) bound.shares.push_back(share);
+        if (share > kBroken) broken(bound, rule.id, rule.bound_class);
       }
       if (!bound.broken.empty()) return bound;
     }

@@ -10,7 +10,8 @@ namespace dropfront::scoring {
 struct BoundRule {
   std::string_view id;  ///< a check id, or the objective: cost, board_area, current_margin, standby_loss
   BoundClass bound_class = BoundClass::theorem;
-  int depth = 0;           ///< 0: nothing is solved; 1: up to four steady states; 2: available currents
+  /// 0: nothing is solved; 1: up to four steady states; 2: rich corners and plug-ins; 3: available currents.
+  int depth = 0;
   std::string_view range;  ///< where it says something; elsewhere it says nothing
   bounds::ObjectiveBound* objective = nullptr;
   bounds::LimitBound* limit = nullptr;

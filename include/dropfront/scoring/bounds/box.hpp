@@ -45,6 +45,9 @@ struct BoxBound {
   std::optional<double> current_margin_A;      ///< no member has more
   BoundClass standby_class = BoundClass::monotone;
   BoundClass margin_class = BoundClass::theorem;
+  /// Only of outlook(), in the order of the table and its supplies: the share of each limit (limit over value
+  /// where more is better) that no member stays below.
+  std::vector<double> shares;
   /// A check that every member breaks, by its id in the check table; empty: none shown.
   std::string_view broken;
   BoundClass broken_class = BoundClass::theorem;

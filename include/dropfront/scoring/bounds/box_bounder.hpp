@@ -11,16 +11,21 @@ class BoxBounder {
  public:
   explicit BoxBounder(const Requirement& requirement);
 
-  /// `depth` 0: nothing is solved; 1: a few steady states; 2: available currents too, where the box is small
-  /// enough for them (about half a millisecond). A deeper bound is never looser. Once a limit
-  /// is shown to be broken the objectives not worked out by then are left absent.
-  BoxBound bound(const DesignBox& box, int depth) const;
+  /// By the rules of `depth` and less: see BoundRule. A deeper bound is never looser. Once a limit is shown
+  /// to be broken the objectives not worked out by then are left absent.
+  BoxBound bound(const DesignBox& box, int depth) const { return bound(box, 0, depth); }
+  /// By the rules of those depths only.
+  BoxBound bound(const DesignBox& box, int least_depth, int depth) const;
+  /// As depth 0, with `shares`.
+  BoxBound outlook(const DesignBox& box) const;
 
   /// Drops parts that another part of the same list replaces at no loss: see replaces.hpp. Returns how many
   /// designs of the box were dropped.
   double reduce(DesignBox& box) const;
 
  private:
+  BoxBound ask(const DesignBox& box, int least_depth, int depth, bool shares) const;
+
   BoundContext context_;
 };
 

@@ -1,10 +1,12 @@
 #pragma once
 #include <algorithm>
+#include <memory>
 #include <optional>
 #include <vector>
 
 #include "dropfront/scoring/bounds/box_ends.hpp"
 #include "dropfront/scoring/bounds/corner_charge.hpp"
+#include "dropfront/scoring/bounds/rich_composite.hpp"
 
 namespace dropfront::scoring {
 
@@ -24,6 +26,8 @@ struct BoxQuestion {
   bool ahead() const { return box.arrangement->clamp_ahead; }
   /// corner_charge of this question, worked out once.
   const CornerCharge& charge(BoxCorner corner) const;
+  /// The composite of this question, made once; null where it can say nothing.
+  RichComposite* rich() const;
 
   /// Least of f over a list: what no entry of it can undercut.
   template <class Entry, class Function>
@@ -60,6 +64,7 @@ struct BoxQuestion {
     return best;
   }
   mutable std::optional<CornerCharge> charges_[2];
+  mutable std::shared_ptr<RichComposite> rich_;
 };
 
 }  // namespace dropfront::scoring
