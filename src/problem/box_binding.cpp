@@ -40,7 +40,9 @@ class Boxes : public search::Bounder {
         bounder_(problem.requirement),
         reach_(problem.requirement),
         wanted_margin_A_(problem.requirement.limits.current_margin *
-                         scoring::load_profile(problem.requirement.output).heaviest_output_A()) {}
+                         scoring::load_profile(problem.requirement.output).heaviest_output_A()),
+        margin_asked_(std::count(problem.requirement.objectives.begin(), problem.requirement.objectives.end(),
+                                 scoring::Objective::current_margin) > 0) {}
 
   search::Bounds bound(const search::Box& box, int depth) const override {
     scoring::BoxBound found;  // nothing known
@@ -60,6 +62,11 @@ class Boxes : public search::Bounder {
     return reach_.out_of_reach(design_box(problem_.offers, slots_.ids, box), -value - kSlack);
   }
 
+  Limit limit_on(int objective) const override {
+    if (problem_.requirement.objectives[objective] != scoring::Objective::current_margin) return {};
+    return {-wanted_margin_A_, check_index("supply.margin")};
+  }
+
   double reduce(search::Box& box) const override {
     if (!single_parts()) return 0;
     scoring::DesignBox parts = design_box(problem_.offers, slots_.ids, box);
@@ -75,19 +82,24 @@ class Boxes : public search::Bounder {
     out.shares = found.shares;
     for (const scoring::Objective objective : problem_.requirement.objectives) add(objective, found, out);
     if (depth == 0 && found.broken.empty()) add_corners(box, out);
-    const auto& names = view_.check_names();
-    const auto broken = std::find(names.begin(), names.end(), found.broken);
-    if (!found.broken.empty() && broken != names.end()) {
-      out.broken = static_cast<int>(broken - names.begin());
-      out.broken_kind = kind_of(found.broken_class);
-    }
+    if (!found.broken.empty()) out.broken = check_index(found.broken);
+    out.broken_kind = kind_of(found.broken_class);
     return out;
+  }
+
+  /// -1: no such check.
+  int check_index(std::string_view id) const {
+    const auto& names = view_.check_names();
+    const auto at = std::find(names.begin(), names.end(), id);
+    return at == names.end() ? -1 : static_cast<int>(at - names.begin());
   }
 
   scoring::BoxBound known(const search::Box& box, int depth) const {
     const scoring::DesignBox parts = design_box(problem_.offers, slots_.ids, box);
     scoring::BoxBound found = bounder_.bound(parts, depth, depth);
-    if (depth == 1 && found.broken.empty() && reach_.out_of_reach(parts, wanted_margin_A_)) {
+    // Where the margin is an objective its limit is asked for together with the front.
+    if (depth == 1 && found.broken.empty() && !margin_asked_ &&
+        reach_.out_of_reach(parts, wanted_margin_A_)) {
       found.broken = "supply.margin";
       found.broken_class = scoring::BoundClass::monotone;
     }
@@ -149,6 +161,7 @@ class Boxes : public search::Bounder {
   scoring::BoxBounder bounder_;
   scoring::LeanReach reach_;
   double wanted_margin_A_;
+  bool margin_asked_;
 };
 
 }  // namespace

@@ -78,8 +78,13 @@ bool BoxTrial::discard_by_questions(const OpenBox& open, Verdict& verdict) const
       for (std::size_t j = 0; j < corner.size(); ++j) corner[j] = std::max(corner[j], open.bound[j]);
       value = std::max(value, front_.surely_rejected_from(corner, k));
     }
+    // Asked once for both: the front or the limit on it, whichever is the harder.
+    const Bounder::Limit limit = bounder_.limit_on(k);
+    const bool by_limit = limit.check >= 0 && !(value < limit.value);
+    if (by_limit) value = limit.value;
     if (!std::isfinite(value) || !bounder_.out_of_reach(open.box, k, value)) continue;
-    verdict.fate = Fate::dominated;
+    verdict.fate = by_limit ? Fate::broken : Fate::dominated;
+    verdict.check = by_limit ? limit.check : -1;
     verdict.kind = BoundKind::monotone;
     return true;
   }

@@ -1,5 +1,6 @@
 #pragma once
 #include <cstdint>
+#include <limits>
 #include <vector>
 
 namespace dropfront::search {
@@ -43,6 +44,12 @@ class Bounder {
   virtual Bounds bound(const Box& box, int depth) const = 0;
   /// As depth 0, with `shares` filled in: how far a box is from being discarded. Need not know anything.
   virtual Bounds outlook(const Box& box) const { return bound(box, 0); }
+  /// What an objective must not exceed in any design that complies, and the check that says so.
+  struct Limit {
+    double value = std::numeric_limits<double>::infinity();
+    int check = -1;  ///< -1: none
+  };
+  virtual Limit limit_on(int /*objective*/) const { return {}; }
   /// True: no member's objective is below `value`. May be cheaper than a bound on it (one question at one
   /// point), and sharper; known no better than monotone. Nothing need be known.
   virtual bool out_of_reach(const Box& /*box*/, int /*objective*/, double /*value*/) const { return false; }

@@ -5,6 +5,7 @@
 #include "dropfront/scoring/corners.hpp"
 #include "dropfront/scoring/corners/mains_shape.hpp"
 #include "dropfront/scoring/lean_case.hpp"
+#include "dropfront/scoring/point_solver.hpp"
 #include "dropfront/scoring/requirement.hpp"
 
 namespace dropfront::scoring {
@@ -29,9 +30,22 @@ class LeanComposite {
   /// Ambients, the more telling one first.
   const std::vector<bool>& ambients() const { return ambients_; }
 
-  /// With the ends that decide most often; load left out.
-  circuit::ElementValues values(const parts::Resistor& series_resistor, bool high_esr, bool high_chain,
-                                bool hot) const;
+  /// What is chosen of all that is given one by one.
+  struct Case {
+    const parts::Resistor* series_resistor = nullptr;
+    bool high_esr = false, high_chain = false, hot = false;
+    LeanEnds ends;
+  };
+  struct Lean {
+    circuit::ElementValues values;  ///< load left out
+    double spare_A = 0;             ///< no clamp carries more, of what the load leaves
+  };
+  /// `load_A`: a rail current that is drawn at least: what it takes does not warm the clamp. `most`: rises
+  /// that are known not to be exceeded.
+  Lean lean(const Case& at, double load_A, const Rises& most) const;
+  /// Rises no member exceeds: those that the composite's own state implies, and a little for what settling
+  /// leaves open. The rises of `state` must not have been exceeded by any.
+  Rises rises(const circuit::ElementValues& values, const circuit::SteadyState& state) const;
 
  private:
   /// Temperatures a part can have.
@@ -40,13 +54,12 @@ class LeanComposite {
   };
   double greatest_F(const Span& air, const parts::Dropper*& which) const;
   circuit::ClampCurve greatest_curve(const Span& junction) const;
-  double esr_ohm(bool greatest, double air_degC) const;
+  double esr_ohm(End end, bool greatest, double air_degC) const;
 
   const DesignBox* box_;
   const Requirement* requirement_;
   const MainsShapes* shapes_;
   double required_V_;
-  LeanEnds ends_;
   std::vector<const parts::Resistor*> series_resistors_;
   std::vector<bool> esr_ends_{false}, chain_ends_{false}, ambients_;
   Chain least_chain_, greatest_chain_;
