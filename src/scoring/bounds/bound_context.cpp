@@ -30,11 +30,7 @@ SupplyLines::SupplyLines(const Supply& of, const MainsShapes& made)
     : supply(&of), shapes(made), lean(made.lean), rich(made.rich), standby(made.nominal) {}
 
 BoundContext::BoundContext(const Requirement& of)
-    : requirement(&of),
-      without_enclosure(of),
-      loads(load_profile(of.output)),
-      mains_margin_um(scoring::mains_margin_um(of)) {
-  without_enclosure.surroundings.enclosure_K_per_W = 0;
+    : requirement(&of), loads(load_profile(of.output)), mains_margin_um(scoring::mains_margin_um(of)) {
   supplies.reserve(of.supplies.size());
   for (const auto& supply : of.supplies) supplies.emplace_back(supply, mains_shapes(supply));
 }

@@ -14,8 +14,10 @@ constexpr const char* kStandby =
     "p = w·Rs·C <= 0.4, q = 1/(w·C·Rb) <= 0.15; behind the dropper at most (0.5 - 1.5q) of the crest, bridge "
     "(0.42 - 0.5p - 1.5q); at most four reservoirs times rectifiers";
 constexpr const char* kRich =
-    "the four plainly clamped arrangements; rectifiers alike; behind the dropper at most 0.4 of the crest";
-constexpr const char* kPulse = "as before, clamps alike";
+    "the four plainly clamped arrangements; series resistor, film loss, chain and rectifier single; no clamp "
+    "whose voltage falls with heat; behind the dropper at most 0.4 of the crest";
+constexpr const char* kHeat = "as before, reservoir single";
+constexpr const char* kPulse = "as before, reservoir and clamp single";
 constexpr const char* kSingle = "series resistor, chain, rectifier and ESR single; no step-down stage";
 
 BoundRule objective(std::string_view id, BoundClass known, int depth, std::string_view range,
@@ -64,8 +66,8 @@ const std::vector<BoundRule>& bound_table() {
       limit("rail.transient", kCrest, bounds::rail_transient),
       objective("standby_loss", BoundClass::monotone, 1, kStandby, bounds::standby_by_engine),
       solved_limit("rail.max", kRich, bounds::rail_max_by_engine),
-      solved_limit("clamp.power", kRich, bounds::clamp_power_by_engine),
-      solved_limit("clamp.junction", kRich, bounds::clamp_junction_by_engine),
+      solved_limit("clamp.power", kHeat, bounds::clamp_power_by_engine),
+      solved_limit("clamp.junction", kHeat, bounds::clamp_junction_by_engine),
       solved_limit("rail.transient", kRich, bounds::rail_transient_by_engine),
       solved_limit("clamp.pulse", kPulse, bounds::clamp_pulse_by_engine),
       objective("current_margin", BoundClass::monotone, 3, kSingle, bounds::margin_by_engine),

@@ -6,6 +6,7 @@
 #include "dropfront/parts/defaults.hpp"
 #include "dropfront/scoring/bounds/charge.hpp"
 #include "dropfront/scoring/corners.hpp"
+#include "dropfront/scoring/stage_law.hpp"
 
 namespace dropfront::scoring {
 
@@ -47,12 +48,25 @@ double line_below(const BoxQuestion& question, double tempco, double reference_d
   return least;
 }
 
+/// Series resistor, loss and chain, which heat the air beside what the clamp takes, are the same in every
+/// member.
+bool one_heater(const DesignBox& box) {
+  return one_value(box.series_resistors, [](const auto* part) { return resistor_ohm(*part, End::low); }) &&
+         one_value(box.series_resistors, [](const auto* part) { return resistor_ohm(*part, End::high); }) &&
+         one_value(box.droppers, [](const auto* part) { return part->loss_tangent; }) &&
+         one_value(box.discharges, chain_ohm);
+}
+
 }  // namespace
 
 bool RichComposite::possible(const BoxQuestion& question) {
-  if (!question.ends.known_circuit()) return false;
+  if (!question.ends.known_circuit() || !one_heater(question.box)) return false;
   const auto& rectifiers = question.box.rectifiers;
   const auto same = [&](const auto* part) { return alike(*part, *rectifiers.front()); };
+  const auto rises = [](const auto* part) { return part->temperature_coefficient_per_K >= 0; };
+  const auto& box = question.box;
+  const bool one = box.droppers.size() == 1 && box.clamps.size() == 1 && box.reservoirs.size() == 1;
+  if (!one && !std::all_of(box.clamps.begin(), box.clamps.end(), rises)) return false;
   return std::all_of(rectifiers.begin(), rectifiers.end(), same) &&
          question.charge(BoxCorner::rich).node_most_V <= kGreatestShare * question.supply.rich.crest_V;
 }
@@ -67,16 +81,14 @@ RichComposite::RichComposite(const BoxQuestion& question) {
   design_.arrangement = box.arrangement;
   design_.rectifier = box.rectifiers.front();
   take_dropper(question);
-  take_resistors(question);
+  design_.series_resistor = box.series_resistors.front();
+  design_.discharge = box.discharges.front().element;
+  design_.discharge_count = box.discharges.front().count;
   take_clamp(question);
   take_reservoir(question);
   take_stage(question);
-  const bool one_heater =
-      one_value(box.series_resistors, [](const auto* part) { return resistor_ohm(*part, End::high); }) &&
-      one_value(box.droppers, [](const auto* part) { return part->loss_tangent; });
-  const auto& requirement = one_heater ? *question.context.requirement : question.context.without_enclosure;
-  evidence_ =
-      std::make_unique<Evidence>(design_, requirement, *question.supply.supply, question.supply.shapes);
+  evidence_ = std::make_unique<Evidence>(design_, *question.context.requirement, *question.supply.supply,
+                                         question.supply.shapes);
 }
 
 /// Only its high end is looked at.
@@ -86,7 +98,6 @@ void RichComposite::take_dropper(const BoxQuestion& question) {
   if (list.size() == 1) return;
   dropper_ = *list.front();
   dropper_.tolerance = 0;
-  dropper_.loss_tangent = question.greatest_over(list, [](const auto* part) { return part->loss_tangent; });
   dropper_.temperature_coefficient_per_K =
       question.least_over(list, [](const auto* part) { return part->temperature_coefficient_per_K; });
   dropper_.capacitance_F = question.least_over(list, [&](const auto* part) {
@@ -94,30 +105,6 @@ void RichComposite::take_dropper(const BoxQuestion& question) {
                       [&](double degC) { return dropper_F(*part, End::high, 0, degC); });
   });
   design_.dropper = &dropper_;
-}
-
-void RichComposite::take_resistors(const BoxQuestion& question) {
-  const auto& list = question.box.series_resistors;
-  design_.series_resistor = list.front();
-  if (list.size() > 1) {
-    series_resistor_ = *list.front();
-    const double low_ohm =
-        question.greatest_over(list, [](const auto* part) { return resistor_ohm(*part, End::low); });
-    const double high_ohm =
-        question.greatest_over(list, [](const auto* part) { return resistor_ohm(*part, End::high); });
-    series_resistor_.resistance_ohm = 0.5 * (low_ohm + high_ohm);
-    series_resistor_.tolerance = (high_ohm - low_ohm) / (high_ohm + low_ohm);
-    design_.series_resistor = &series_resistor_;
-  }
-  const auto& chains = question.box.discharges;
-  design_.discharge = chains.front().element;
-  design_.discharge_count = chains.front().count;
-  if (chains.size() == 1) return;
-  const double most_ohm = question.greatest_over(chains, chain_ohm);
-  chain_.resistance_ohm = most_ohm;
-  chain_.tolerance = 0;
-  design_.discharge = std::isfinite(most_ohm) ? &chain_ : nullptr;
-  design_.discharge_count = std::isfinite(most_ohm) ? 1 : 0;
 }
 
 void RichComposite::take_clamp(const BoxQuestion& question) {
@@ -176,7 +163,12 @@ void RichComposite::take_stage(const BoxQuestion& question) {
   const auto& list = question.box.output_stages;
   design_.output_stage = list.front();
   if (list.size() == 1) return;
-  stage_ = *list.front();
+  // The load of a rail that starves lets go below half of V_required.
+  const auto required_V = [&](const auto* part) {
+    return required_rail_V(*part, question.context.requirement->output, question.context.loads).value_or(0);
+  };
+  stage_ = **std::min_element(list.begin(), list.end(),
+                              [&](const auto* a, const auto* b) { return required_V(a) < required_V(b); });
   for (const auto* part : list) stage_.input_max_V = better(stage_.input_max_V, part->input_max_V);
   design_.output_stage = &stage_;
 }

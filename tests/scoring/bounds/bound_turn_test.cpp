@@ -34,7 +34,11 @@ double slack_of(const BoundRule& rule) { return rule.depth > 0 ? kSolved : kRoun
 
 /// What a rule says, so that less is looser; absent: nothing.
 std::optional<double> say(const BoundRule& rule, const BoxQuestion& question) {
-  if (rule.limit != nullptr) return rule.limit(question);
+  if (rule.limit != nullptr) {
+    const double share = rule.limit(question);
+    // Where the engine has no answer it says nothing.
+    return rule.depth > 0 && share == 0 ? std::nullopt : std::optional(share);
+  }
   const auto bound = rule.objective(question);
   return bound && rule.id == "current_margin" ? std::optional(-*bound) : bound;
 }

@@ -36,7 +36,6 @@ struct SupplyLines {
 struct BoundContext {
   explicit BoundContext(const Requirement& of);
   const Requirement* requirement;
-  Requirement without_enclosure;  ///< the same with air that nothing warms
   LoadProfile loads;
   std::vector<SupplyLines> supplies;
   std::int64_t mains_margin_um = 0;

@@ -11,8 +11,9 @@ namespace {
 double settled(const BoxQuestion& question, double share) {
   constexpr double kSettled = 1e-3;
   const auto& box = question.box;
-  const bool one = box.droppers.size() == 1 && box.series_resistors.size() == 1 && box.clamps.size() == 1 &&
-                   box.reservoirs.size() == 1 && box.discharges.size() == 1;
+  const bool one = box.output_stages.size() == 1 && box.droppers.size() == 1 &&
+                   box.series_resistors.size() == 1 && box.clamps.size() == 1 && box.reservoirs.size() == 1 &&
+                   box.discharges.size() == 1;
   return one ? share : share * (1 - kSettled);
 }
 
@@ -35,8 +36,10 @@ double rail_transient_by_engine(const BoxQuestion& question) {
   return rich == nullptr ? 0 : share_of(question, rail_transient(rich->evidence()));
 }
 
-/// The composite's clamp, empty and hot, over each part's own rating. Monotone by test.
+/// The composite's clamp, empty and hot, over each part's own rating. What the reservoir's ESR does to it has
+/// no fixed sign: reservoirs must be single. Monotone by test.
 double clamp_power_by_engine(const BoxQuestion& question) {
+  if (question.box.reservoirs.size() > 1) return 0;
   auto* rich = question.rich();
   if (rich == nullptr) return 0;
   const auto& point = rich->evidence().rich_empty_hot();
@@ -48,8 +51,10 @@ double clamp_power_by_engine(const BoxQuestion& question) {
   }));
 }
 
-/// Each part's own resistance times the composite's power above its air. Monotone by test.
+/// Each part's own resistance times the composite's power above its air; reservoirs as above. Monotone by
+/// test.
 double clamp_junction_by_engine(const BoxQuestion& question) {
+  if (question.box.reservoirs.size() > 1) return 0;
   auto* rich = question.rich();
   if (rich == nullptr) return 0;
   const auto& point = rich->evidence().rich_empty_hot();
@@ -63,11 +68,10 @@ double clamp_junction_by_engine(const BoxQuestion& question) {
   }));
 }
 
-/// The composite's clamp pulse over the best rating. A clamp's slope turns what it takes from the reservoir
-/// either way: clamps must be alike in all that the pulse depends on. Monotone by test.
+/// The composite's clamp pulse over the rating. What it takes from the reservoir turns either way with the
+/// clamp's slope and the ESR: both must be single. Monotone by test.
 double clamp_pulse_by_engine(const BoxQuestion& question) {
-  const auto& clamps = question.box.clamps;
-  if (clamps.size() > 1) return 0;
+  if (question.box.clamps.size() > 1 || question.box.reservoirs.size() > 1) return 0;
   auto* rich = question.rich();
   return rich == nullptr ? 0 : share_of(question, clamp_pulse(rich->evidence()));
 }
