@@ -17,11 +17,12 @@ Node add_line(Network& network, const ElementValues& values) {
   const Node after_resistor = network.add_node();
   network.resistors.push_back({entry, after_resistor, values.series_resistor_ohm, Owner::series_resistor});
   const Node guarded = values.varistor_before ? entry : after_resistor;
-  for (const Curve& piece : values.varistor) {
-    network.branches.push_back({guarded, 0, piece.threshold_V, piece.slope_ohm, Owner::varistor});
-  }
-  for (const Curve& piece : values.varistor) {
-    network.branches.push_back({0, guarded, piece.threshold_V, piece.slope_ohm, Owner::varistor});
+  for (const int way : {1, -1}) {
+    if (values.varistor_ways == -way) continue;
+    for (const Curve& piece : values.varistor) {
+      const Node a = way > 0 ? guarded : 0, b = way > 0 ? 0 : guarded;
+      network.branches.push_back({a, b, piece.threshold_V, piece.slope_ohm, Owner::varistor});
+    }
   }
   return after_resistor;
 }

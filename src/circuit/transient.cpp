@@ -11,17 +11,29 @@ namespace dropfront::circuit {
 
 namespace {
 
-/// Greatest |row| over all segments, for a quantity of every mode given by `row_of`.
+/// A quantity of a mode; `forced` null where its forced part is still to be worked out.
+struct Quantity {
+  const ModalRow* row = nullptr;
+  const ForcedRow* forced = nullptr;
+};
+
+/// Greatest magnitude over all segments of the quantity that `row_of` gives for each mode (no row: none
+/// there).
 template <typename RowOf>
 double greatest(const Walker& walker, const std::vector<Segment>& segments, RowOf row_of) {
   const auto& mains = walker.network().source.waveform;
   TonePhase phase(mains);
   double most = 0;
   for (const auto& segment : segments) {
-    const ModalRow* row = row_of(*segment.mode);
-    if (!row) continue;
+    const Quantity quantity = row_of(*segment.mode);
+    if (!quantity.row) continue;
     Extremes extremes;
-    include_extremes(segment, *row, forced_part(*segment.mode, mains, *row), phase, extremes);
+    if (quantity.forced) {
+      include_extremes(segment, *quantity.row, *quantity.forced, phase, extremes);
+    } else {
+      include_extremes(segment, *quantity.row, forced_part(*segment.mode, mains, *quantity.row), phase,
+                       extremes);
+    }
     most = std::max({most, std::abs(extremes.low), std::abs(extremes.high)});
   }
   return most;
@@ -134,12 +146,21 @@ Transient run_transient(const Network& network, const StateVector& start, const 
                              branches_from + static_cast<std::ptrdiff_t>(network.branches.size()));
   for (std::size_t r = 0; r < resistors; ++r) {
     const double peak_V =
-        greatest(walker, segments, [r](const ConductionMode& m) { return &m.element_V[r]; });
+        greatest(walker, segments, [r](const ConductionMode& m) { return Quantity{&m.element_V[r]}; });
     run.resistor_peak_A.push_back(peak_V / network.resistors[r].resistance_ohm);
+  }
+  for (std::size_t c = 0; c < network.capacitors.size(); ++c) {
+    Row state{};
+    state[c] = 1;
+    ModalRow row;
+    run.capacitor_peak_V.push_back(greatest(walker, segments, [&](const ConductionMode& m) {
+      row = to_modal_row(m, state);
+      return Quantity{&row};
+    }));
   }
   for (std::size_t b = 0; b < network.branches.size(); ++b) {
     const double over_V = greatest(walker, segments, [b](const ConductionMode& m) {
-      return ((m.mask >> b) & 1u) ? &m.guard[b] : nullptr;
+      return ((m.mask >> b) & 1u) ? Quantity{&m.guard[b], &m.guard_forced[b]} : Quantity{};
     });
     run.branch_peak_A.push_back(over_V / network.branches[b].slope_ohm);
   }

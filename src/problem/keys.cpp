@@ -32,11 +32,11 @@ const KeySet surroundings{
     {},
     {"ambient", "enclosure", "life", "pollution_degree", "material_group", "max_height", "ripple_life"}};
 const KeySet ambient{"ambient", {}, {"low", "nominal", "high", "mean_over_life"}};
-const KeySet connection{"connection", {}, {"kind", "plug_ins"}};
-const KeySet limits{
-    "limits",
-    {},
-    {"standby_power", "current_margin", "start_time", "discharge", "surge", "dips", "series_rated"}};
+const KeySet connection{"connection", {}, {"kind", "plug_ins", "chatter"}};
+const KeySet limits{"limits",
+                    {},
+                    {"standby_power", "current_margin", "start_time", "discharge", "surge", "fast_burst",
+                     "dips", "series_rated"}};
 const KeySet discharge_rule{"discharge rule", {"voltage", "after"}, {"not_below"}};
 const KeySet surge{"surge", {"voltage"}, {"source"}};
 const KeySet dip{"dip", {"residual", "cycles"}, {}};

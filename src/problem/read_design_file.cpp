@@ -8,6 +8,7 @@
 #include "dropfront/problem/scalars.hpp"
 #include "dropfront/problem/sections.hpp"
 #include "dropfront/problem/support.hpp"
+#include "dropfront/problem/varistor_rule.hpp"
 #include "dropfront/values/text_file.hpp"
 
 namespace dropfront::problem {
@@ -19,22 +20,38 @@ const Part* optional_part(ObjectReader& reader, const char* slot, Problem& probl
   return cursor ? read_part<Part>(*cursor, problem) : nullptr;
 }
 
-/// Equal parts that act as one: a part's name (one piece), {"part": name, "count": n} or an inline object
-/// with "count".
-template <class Part>
-const Part* read_counted(const Cursor& cursor, Problem& problem, int& count) {
-  count = 1;
+/// A part with one key of its own beside the columns: its name alone, {"part": name, key: ...} or an inline
+/// object with the key. `read_key` is called where the key stands.
+template <class Part, class ReadKey>
+const Part* read_with(const Cursor& cursor, Problem& problem, const char* key, ReadKey read_key) {
   const Node& node = cursor.node();
   if (node.kind == Node::Kind::object) {
     const Node* part = node.find("part");
     for (std::size_t i = 0; i < node.keys.size(); ++i) {
-      if (node.keys[i].name != "count") continue;
-      count = static_cast<int>(read_whole(cursor.member(i), 1, 20));
+      if (node.keys[i].name != key) continue;
+      read_key(cursor.member(i));
       if (part && part->kind == Node::Kind::text && node.keys.size() == 2)
         return require_part<Part>(cursor.member(1 - i), part->text, problem);
     }
   }
-  return read_part<Part>(cursor, problem, {"count"});
+  return read_part<Part>(cursor, problem, {key});
+}
+
+/// Equal parts that act as one: "count" of them, else one piece.
+template <class Part>
+const Part* read_counted(const Cursor& cursor, Problem& problem, int& count) {
+  count = 1;
+  return read_with<Part>(cursor, problem, "count", [&count](const Cursor& given) {
+    count = static_cast<int>(read_whole(given, 1, 20));
+  });
+}
+
+const parts::Varistor* read_varistor(const Cursor& cursor, Problem& problem, bool& before) {
+  const auto* part = read_with<parts::Varistor>(cursor, problem, "place", [&before](const Cursor& given) {
+    before = read_word(given, kVaristorPlaces) == 0;
+  });
+  if (const auto fault = low_varistor(*part, problem.requirement)) throw cursor.error(*fault);
+  return part;
 }
 
 void refuse_unused(ObjectReader& reader, const char* slot, const scoring::Design& design) {
@@ -64,7 +81,8 @@ scoring::Design read_design(const Cursor& cursor, Problem& problem) {
   design.output_stage = read_part<parts::OutputStage>(reader.require("output_stage"), problem);
   if (const auto chain = reader.take("discharge"))
     design.discharge = read_counted<Resistor>(*chain, problem, design.discharge_count);
-  design.varistor = optional_part<parts::Varistor>(reader, "varistor", problem);
+  if (const auto varistor = reader.take("varistor"))
+    design.varistor = read_varistor(*varistor, problem, design.varistor_before);
   design.fuse = optional_part<parts::Fuse>(reader, "fuse", problem);
   design.ceramic = optional_part<parts::Ceramic>(reader, "ceramic", problem);
   if (design.arrangement->thyristor_shunt) {

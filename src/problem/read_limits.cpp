@@ -74,8 +74,8 @@ std::optional<scoring::DischargeRule> read_discharge(ObjectReader& limits, Probl
 scoring::Surge read_surge(const Cursor& cursor, Problem& problem) {
   ObjectReader reader(cursor, keys::surge);
   scoring::Surge surge;
-  surge.voltage_V = read_quantity(reader.require("voltage"), Unit::volt, kPositive);
-  surge.source_ohm = quantity_or(problem, reader, "source", Unit::ohm, kNotNegative, 2,
+  surge.voltage_V = read_quantity(reader.require("voltage"), Unit::volt, {0, 1e5, true});
+  surge.source_ohm = quantity_or(problem, reader, "source", Unit::ohm, {1e-3, 1e6, false}, 2,
                                  "IEC 61000-4-5 combination wave, line to line");
   reader.finish();
   return surge;
@@ -113,6 +113,8 @@ void read_limits(const Cursor& cursor, Problem& problem) {
   } else {
     note_default(problem, cursor, "surge", "none", "absent: no check");
   }
+  limits.fast_burst_V =
+      quantity_or_none(problem, reader, "fast_burst", Unit::volt, {0, 1e5, true}, "absent: no estimate");
   if (const auto dips = reader.take("dips")) {
     for (const Cursor& dip : read_list(*dips, "dips {\"residual\", \"cycles\"}"))
       limits.dips.push_back(read_dip(dip));

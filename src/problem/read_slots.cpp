@@ -7,6 +7,7 @@
 #include "dropfront/problem/sections.hpp"
 #include "dropfront/problem/slot_parts.hpp"
 #include "dropfront/problem/support.hpp"
+#include "dropfront/problem/varistor_rule.hpp"
 #include "dropfront/values/quantity.hpp"
 
 namespace dropfront::problem {
@@ -155,6 +156,29 @@ void note_unused(const char* name, Problem& problem) {
   problem.cautions.push_back(fmt::format("slots.{} is not used by the arrangements asked for", name));
 }
 
+/// Rows for another mains stand in the same list: they are left out and said so, unless none remains.
+void keep_high_varistors(const Cursor& slot, Problem& problem) {
+  auto& offered = problem.offers.varistors;
+  std::vector<std::string> left_out;
+  std::string fault;
+  const auto low = [&](const parts::Varistor* part) {
+    const auto why = part ? low_varistor(*part, problem.requirement) : std::nullopt;
+    if (!why) return false;
+    fault = *why;
+    left_out.push_back(part->info.name);
+    return true;
+  };
+  offered.erase(std::remove_if(offered.begin(), offered.end(), low), offered.end());
+  if (left_out.empty()) return;
+  const bool any_left = std::any_of(offered.begin(), offered.end(),
+                                    [](const parts::Varistor* part) { return part != nullptr; });
+  if (!any_left) throw slot.error(fault);
+  problem.cautions.push_back(
+      fmt::format("slots.varistor: {} clamp below the crest of the highest line and are "
+                  "left out",
+                  fmt::join(left_out, ", ")));
+}
+
 /// Slots that no arrangement asked for uses: read in full, offered to nobody, said so.
 template <class Part>
 void unused_slot(ObjectReader& slots, const char* name, Problem& problem, bool (*usable)(const Part&)) {
@@ -195,10 +219,11 @@ void read_slots(const Cursor& cursor, Problem& problem) {
   offers.rectifiers = slot<parts::Rectifier>(slots, "rectifier", problem);
   offers.varistors = extra_slot<parts::Varistor>(slots, "varistor", problem, [&](ObjectReader& reader) {
     const auto place = reader.take("place");
-    if (place) offers.varistor_before_resistor = read_word(*place, {"before", "after"}) == 0;
+    if (place) offers.varistor_before_resistor = read_word(*place, kVaristorPlaces) == 0;
     if (!place)
       note_default(problem, reader.object(), "place", "before", "on the line side of the series resistor");
   });
+  if (slots.has("varistor")) keep_high_varistors(slots.require("varistor"), problem);
   const auto nothing = [](ObjectReader&) {};
   offers.fuses = extra_slot<parts::Fuse>(slots, "fuse", problem, nothing);
   offers.ceramics = extra_slot<parts::Ceramic>(slots, "ceramic", problem, nothing);

@@ -95,6 +95,12 @@ void read_connection(const Cursor& connection, Problem& problem) {
   } else {
     note_default(problem, connection, "plug_ins", "1000", "times under power over the life");
   }
+  if (const auto chatter = reader.take("chatter")) {
+    c.chatter = static_cast<int>(read_whole(*chatter, 1, 20));
+  } else {
+    note_default(problem, connection, "chatter", "1",
+                 "contacts that close once; a bouncing switch closes several times");
+  }
   reader.finish();
 }
 

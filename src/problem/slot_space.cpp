@@ -101,6 +101,7 @@ scoring::Design design_of(const Offers& offers, const std::vector<SlotId>& ids,
   scoring::Design design;
   design.dropper_count = offers.dropper_parallel;
   design.series_resistor_count = offers.series_resistor_split;
+  design.varistor_before = offers.varistor_before_resistor;
   for (std::size_t slot = 0; slot < ids.size(); ++slot) {
     const auto i = static_cast<std::size_t>(choice[slot]);
     switch (ids[slot]) {

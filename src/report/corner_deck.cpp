@@ -38,6 +38,19 @@ std::vector<std::string> notes_of(const scoring::OperatingPoint& point) {
   return notes;
 }
 
+/// What does nothing in running and is left out of the network.
+void note_protection(const scoring::Design& design, std::vector<std::string>& notes) {
+  if (design.varistor != nullptr) {
+    notes.push_back(fmt::format("Left out: a varistor of {} {} the series resistor; it does not conduct here",
+                                with_unit(design.varistor->continuous_voltage_Vrms, "V"),
+                                design.varistor_before ? "in front of" : "behind"));
+  }
+  if (design.fuse != nullptr) {
+    notes.push_back(fmt::format("Left out: a fuse of {}, first in the line",
+                                with_unit(design.fuse->rated_current_A, "A")));
+  }
+}
+
 }  // namespace
 
 const std::vector<std::string>& deck_corners() {
@@ -62,6 +75,7 @@ CornerDeck corner_deck(const std::string& title, const scoring::Design& design,
     options.initial_V.assign(point.state.start.begin(),
                              point.state.start.begin() + network.capacitors.size());
     options.notes = notes_of(point);
+    note_protection(design, options.notes);
     return {true, "", make_deck(network, title, options)};
   }
   return {false, fmt::format("no corner '{}'", corner), ""};

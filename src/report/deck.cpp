@@ -65,9 +65,10 @@ void write_source(Deck& deck, const circuit::SourceElement& source, double start
   deck.line(
       "* Mains: one source a tone, in series from the neutral up; phase in degrees at the start of the run");
   const auto& tones = source.waveform.tones();
+  const auto& pulse = source.waveform.exponentials();
   std::string below = "0";
   for (std::size_t i = 0; i < tones.size(); ++i) {
-    const bool last = i + 1 == tones.size();
+    const bool last = i + 1 == tones.size() && pulse.empty();
     const std::string top = last ? node(source.a) : fmt::format("mains{}", i + 1);
     const double turns = tones[i].order * source.waveform.frequency_Hz() * start_time_s;
     const double phase_deg = tones[i].phase_rad * 180 / std::numbers::pi + 360 * (turns - std::floor(turns));
@@ -75,6 +76,14 @@ void write_source(Deck& deck, const circuit::SourceElement& source, double start
               tones[i].order * source.waveform.frequency_Hz(), phase_deg);
     below = top;
   }
+  if (pulse.empty()) return;
+  deck.line("* A pulse on top of it: exponentials that add up to nothing until it begins");
+  std::string sum;
+  for (const auto& part : pulse) {
+    sum += fmt::format("{}{}*exp(-{}*uramp(time-({})))", sum.empty() ? "" : "+", part.amplitude_V,
+                       part.rate_per_s, source.waveform.pulse_start_s() - start_time_s);
+  }
+  deck.line("BS {} {} V={}", node(source.a), below, sum);
 }
 
 /// One diode of a branch; a paired branch is two alike, each with half the threshold and slope.

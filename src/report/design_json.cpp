@@ -24,6 +24,7 @@ void write_design(JsonWriter& json, const scoring::Design& design) {
     json.begin_object(JsonWriter::Layout::flat);
     if (!part.info->name.empty()) json.member("part", part.info->name);
     if (part.slot == "discharge" || part.counted > 1) json.member("count", part.counted);
+    if (part.slot == "varistor") json.member("place", design.varistor_before ? "before" : "after");
     write_columns(json, part.electrical);
     write_columns(json, common_columns(*part.info));
     json.end_object();

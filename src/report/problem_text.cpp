@@ -46,6 +46,9 @@ void limit_rows(TextTable& table, const scoring::Limits& limits) {
   if (const auto& surge = limits.surge)
     limit(fmt::format("surge {} behind {}", with_unit(surge->voltage_V, "V"),
                       with_unit(surge->source_ohm, "ohm")));
+  if (limits.fast_burst_V)
+    limit(fmt::format("fast bursts of {}: energy estimated, not checked",
+                      with_unit(*limits.fast_burst_V, "V")));
   for (const auto& dip : limits.dips)
     limit(fmt::format("dip to {} for {}", percent(dip.residual), with_unit(dip.cycles, "cycles")));
   if (limits.series_rated) limit("series-rated droppers only");

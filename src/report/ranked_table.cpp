@@ -29,6 +29,7 @@ std::string rest_of_design(const Entry& entry) {
     if (part.slot == "output_stage" || part.slot == "discharge") text += ", " + part.value;
     if (part.slot == "varistor" || part.slot == "fuse" || part.slot == "thyristor")
       text += fmt::format(", {}", part.slot);
+    if (part.slot == "varistor" && !entry.design.varistor_before) text += " after";
   }
   return text + tightest_words(entry);
 }

@@ -81,9 +81,17 @@ std::optional<double> Evidence::lean_current_at_A(double rail_V) {
 const PlugInAnswer& Evidence::plug_in() {
   auto& answer = impl_->plug_in;
   if (!answer) {
-    std::vector<const OperatingPoint*> rest{&impl_->rest(true)};
-    if (!impl_->one_ambient()) rest.push_back(&impl_->rest(false));
-    answer = run_plug_ins(impl_->points, rich_recipe(*impl_->shapes), rest, impl_->transients);
+    answer =
+        run_plug_ins(impl_->points, rich_recipe(*impl_->shapes), impl_->all_at_rest(), impl_->transients);
+  }
+  return *answer;
+}
+
+const SurgeAnswer& Evidence::surge() {
+  auto& answer = impl_->surge;
+  if (!answer) {
+    answer = run_surges(impl_->points, rich_recipe(*impl_->shapes), impl_->all_at_rest(),
+                        impl_->requirement->limits.surge.value_or(Surge{}), impl_->transients);
   }
   return *answer;
 }

@@ -84,6 +84,13 @@ struct Evidence::Impl {
     return *point;
   }
 
+  /// The unloaded high line at both ambients, hot first; one where they are the same.
+  std::vector<const OperatingPoint*> all_at_rest() {
+    std::vector<const OperatingPoint*> all{&rest(true)};
+    if (!one_ambient()) all.push_back(&rest(false));
+    return all;
+  }
+
   std::unique_ptr<MainsShapes> own_shapes;
   Design design;
   const Requirement* requirement;
@@ -98,6 +105,7 @@ struct Evidence::Impl {
   std::optional<OperatingPoint> nominal, standby, standby_worst;
   std::vector<OperatingPoint> rich_loads;
   std::optional<PlugInAnswer> plug_in;
+  std::optional<SurgeAnswer> surge;
   std::optional<std::optional<double>> margin_new;
   int transients = 0;
 };

@@ -4,6 +4,7 @@
 #include <limits>
 
 #include "dropfront/scoring/clamp_trace.hpp"
+#include "dropfront/scoring/run_figures.hpp"
 
 namespace dropfront::scoring {
 
@@ -11,39 +12,13 @@ namespace {
 
 using circuit::Owner;
 
-double greatest_of(const std::vector<circuit::BranchElement>& elements, const std::vector<double>& values,
-                   Owner owner) {
-  double greatest = 0;
-  for (std::size_t i = 0; i < elements.size() && i < values.size(); ++i) {
-    if (elements[i].owner == owner) greatest = std::max(greatest, values[i]);
-  }
-  return greatest;
-}
-
-struct SeriesResistor {
-  double energy_J = 0;
-  double peak_A = 0;
-};
-
-SeriesResistor series_resistor(const circuit::Network& network, const circuit::Transient& run) {
-  SeriesResistor sum;
-  for (std::size_t i = 0; i < network.resistors.size(); ++i) {
-    if (network.resistors[i].owner != Owner::series_resistor) continue;
-    if (i < run.resistor_energy_J.size()) sum.energy_J += run.resistor_energy_J[i];
-    if (i < run.resistor_peak_A.size()) sum.peak_A = std::max(sum.peak_A, run.resistor_peak_A[i]);
-  }
-  return sum;
-}
-
 /// Dropper at the opposite crest (its plates run from line to clamp), reservoir at `full_V`.
 circuit::StateVector left_charged(const circuit::Network& network, double crest_V, double full_V) {
   circuit::StateVector state{};
   for (std::size_t i = 0; i < network.capacitors.size() && i < state.size(); ++i) {
-    const auto owner = network.capacitors[i].owner;
-    if (owner == Owner::dropper) state[i] = -crest_V;
-    if (owner == Owner::reservoir || owner == Owner::ceramic) state[i] = full_V;
+    if (network.capacitors[i].owner == Owner::dropper) state[i] = -crest_V;
   }
-  return state;
+  return with_rail_at(network, state, full_V);
 }
 
 /// The pulse is over after ten time constants; beyond half a period it would be the mains again. Without a
@@ -58,7 +33,7 @@ double pulse_duration_s(const circuit::ElementValues& values) {
 /// One run and what is read from it.
 struct Tried {
   PlugIn plug;
-  SeriesResistor resistor;
+  SeriesResistorFigures resistor;
   double rectifier_peak_A = 0;
   std::vector<circuit::PowerStep> trace;  ///< low-slope curve only
 };
@@ -103,8 +78,8 @@ Tried try_plug_in(const PointSolver& points, const Recipe& recipe, const Operati
   tried.plug.local_degC = rest.local_degC;
   tried.plug.clamp_junction_degC = rest.clamp_junction_degC;
   tried.plug.ends = recipe.series_resistor == End::low ? "series_resistor low" : "series_resistor high";
-  tried.resistor = series_resistor(network, tried.plug.run);
-  tried.rectifier_peak_A = greatest_of(network.branches, tried.plug.run.branch_peak_A, Owner::rectifier);
+  tried.resistor = series_resistor_figures(network, tried.plug.run);
+  tried.rectifier_peak_A = greatest_branch_A(network, tried.plug.run, Owner::rectifier);
   // Until it fires the series diode takes the whole pulse, on the other crest the reset diode does.
   if (shunted) tried.rectifier_peak_A = std::max(tried.rectifier_peak_A, tried.resistor.peak_A);
   tried.trace = trace.take();

@@ -5,6 +5,7 @@
 #include <algorithm>
 #include <cmath>
 
+#include "dropfront/scoring/fast_burst.hpp"
 #include "dropfront/scoring/load_profile.hpp"
 
 namespace dropfront::scoring {
@@ -97,6 +98,9 @@ std::vector<std::string> cautions_of(const Design& design, const Score& score,
         "design's weak point (such parts were found to have lost 60 to 70 % over 15 to 20 years; as "
         "restated, "
         "copy not kept)");
+  }
+  if (requirement.limits.fast_burst_V && design.series_resistor != nullptr) {
+    cautions.push_back(fast_burst_caution(*requirement.limits.fast_burst_V, design));
   }
   if (design.discharge != nullptr) add_open_chain(score, cautions);
   for (const auto& check : score.checks) {

@@ -120,3 +120,55 @@ TEST_CASE("The varistor's pieces touch its law and stay close below it") {
     REQUIRE(current_A(0.96 * law.voltage_V(amperes)) <= amperes);
   }
 }
+
+TEST_CASE("Pieces made for one run touch the law where it matters and stay 2 % below it") {
+  const VaristorLaw law{430, 710, 50};
+  for (const double greatest_A : {0.1, 3.0, 370.0}) {
+    const auto branches = varistor_branches(law, greatest_A);
+    INFO(greatest_A);
+    REQUIRE(branches.size() <= 4);
+    const auto current_A = [&](double voltage_V) {
+      double sum = 0;
+      for (const auto& piece : branches)
+        sum += std::max(0.0, voltage_V - piece.threshold_V) / piece.slope_ohm;
+      return sum;
+    };
+    REQUIRE_THAT(current_A(law.voltage_V(greatest_A)), WithinRel(greatest_A, 1e-9));
+    for (double amperes = greatest_A / 30; amperes < greatest_A; amperes *= 1.05) {
+      REQUIRE(current_A(law.voltage_V(amperes)) >= amperes * (1 - 1e-9));
+      REQUIRE(current_A(0.98 * law.voltage_V(amperes)) <= amperes);
+    }
+  }
+  REQUIRE(varistor_branches(law, 0.5e-3).empty());
+}
+
+TEST_CASE("The current behind a source lies on both lines, and is none below the 1 mA point") {
+  const VaristorLaw law{430, 710, 50};
+  for (const double open_V : {600.0, 1000.0, 1358.0, 4000.0}) {
+    const double amperes = current_behind_A(law, open_V, 2);
+    REQUIRE_THAT(law.voltage_V(amperes) + 2 * amperes, WithinRel(open_V, 1e-9));
+  }
+  REQUIRE(current_behind_A(law, 429, 2) == 0);
+}
+
+TEST_CASE("A varistor built for one direction conducts nothing in the other") {
+  ElementValues v = ordinary_values();
+  v.varistor = varistor_branches({430, 710, 50});
+  const auto both = find_arrangement("half-wave-clamp-ahead")->build(v);
+  v.varistor_ways = 1;
+  const auto there = find_arrangement("half-wave-clamp-ahead")->build(v);
+  v.varistor_ways = -1;
+  const auto back = find_arrangement("half-wave-clamp-ahead")->build(v);
+  const auto pieces = [](const Network& network, bool into_neutral) {
+    int count = 0;
+    for (const auto& branch : network.branches)
+      count += branch.owner == Owner::varistor && (branch.b == 0) == into_neutral ? 1 : 0;
+    return count;
+  };
+  REQUIRE(pieces(both, true) == 8);
+  REQUIRE(pieces(both, false) == 8);
+  REQUIRE(pieces(there, true) == 8);
+  REQUIRE(pieces(there, false) == 0);
+  REQUIRE(pieces(back, true) == 0);
+  REQUIRE(pieces(back, false) == 8);
+}

@@ -164,6 +164,33 @@ TEST_CASE("relaxed designs are finite all over the cube, corners and outside inc
   }
 }
 
+TEST_CASE("an optional varistor and fuse may stay away, and cost what they cost where they do not") {
+  const Bench bench;
+  bench.write("lists/varistors.csv",
+              "part,continuous_voltage,clamp_voltage,clamp_current,price_1,length_mm,width_mm\n"
+              "mov-275,275 V,710 V,50 A,0.07,15.5,5.2\n");
+  bench.write("lists/fuses.csv",
+              "part,rated_current,melting_i2t,price_1,length_mm,width_mm\nfuse-1A,1 A,12,0.08,8.4,4\n");
+  const auto p =
+      bench.problem({R"(slots={"arrangement": "half-wave-clamp-ahead", "output_stage": {"only": "lin-5"},
+      "varistor": {"optional": true}, "fuse": {"optional": true}})"});
+  const auto bound = problem::bind(p);
+  const int varistor = slot_named(bound->space(), "varistor"), fuse = slot_named(bound->space(), "fuse");
+  REQUIRE(varistor >= 0);
+  REQUIRE(fuse >= 0);
+  CHECK(bound->space().slots[varistor].size == 2);
+  CHECK(bound->space().slots[fuse].size == 2);
+  const auto cost = [&](int with_varistor, int with_fuse) {
+    search::Choice choice = first(bound->space());
+    choice[varistor] = with_varistor;
+    choice[fuse] = with_fuse;
+    return bound->look(choice).objectives[0];
+  };
+  // Sums of millionths: exact but for the last division.
+  CHECK_THAT(cost(1, 0) - cost(0, 0), Catch::Matchers::WithinAbs(0.07, 1e-9));
+  CHECK_THAT(cost(1, 1) - cost(0, 0), Catch::Matchers::WithinAbs(0.15, 1e-9));
+}
+
 TEST_CASE("the check names are the check table's") {
   const Bench bench;
   const auto p = small(bench);

@@ -63,6 +63,9 @@ const std::vector<Broken> kProblemRules{
     {"folders", kLists, "[\"lists\", \"lists/../lists\"]", "twice"},
     {"folders", kLists, "\"absent\"", "no such folder"},
     {"part names", ADD("\"slots\": {\"clamp\": {\"only\": \"z11\"}}"), "did you mean 'z12'?"},
+    {"varistor",
+     ADD("\"slots\": {\"varistor\": {\"only\": {\"continuous_voltage\": 130, \"clamp_voltage\": 340}}}"),
+     "clamps at 340 V; allowed: above the crest of the highest line"},
     {"slots column", ADD("\"slots\": {\"discharge\": {\"only\": [\"fuse-47R\"]}}"), "column `slots`"},
     {"family range",
      ADD("\"slots\": {\"clamp\": {\"series\": \"E24\", \"from\": 9, \"to\": 5, \"like\": \"z12\"}}"),
@@ -92,6 +95,8 @@ const std::vector<Broken> kDesignRules{
      "input_min"},
     {"dropper", "\"dropper\": \"film-470n\",", "", "dropper"},
     {"unused slot", "half-wave-clamp-ahead", "resistive", "has no dropper"},
+    {"varistor", "\"z12\"", "\"z12\", \"varistor\": {\"continuous_voltage\": 130, \"clamp_voltage\": 340}",
+     "clamps at 340 V; allowed: above the crest of the highest line"},
     {"unused slot", "\"z12\"", "\"z12\", \"gate_resistor\": \"any-1k\"", "has no gate_resistor"},
 };
 

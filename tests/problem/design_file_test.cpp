@@ -104,6 +104,27 @@ TEST_CASE("mistakes of a design file name file, place and what is meant") {
   }
 }
 
+TEST_CASE("a varistor says on which side of the series resistor it stands, before when not said") {
+  const Bench bench;
+  bench.write("lists/varistors.csv", "part,continuous_voltage,clamp_voltage\nmov-275,275 V,710 V\n");
+  auto p = bench.problem();
+  const auto with_varistor = [&](const char* varistor) {
+    return design(bench, p,
+                  with(kNames, "\"clamp\"", std::string("\"varistor\": ") + varistor + ", \"clamp\""));
+  };
+  CHECK(with_varistor("\"mov-275\"").varistor_before);
+  const auto named = with_varistor(R"({"part": "mov-275", "place": "after"})");
+  CHECK(named.varistor->info.name == "mov-275");
+  CHECK_FALSE(named.varistor_before);
+  const auto inlined = with_varistor(R"({"continuous_voltage": 275, "place": "after"})");
+  CHECK(inlined.varistor->continuous_voltage_Vrms == 275);
+  CHECK_FALSE(inlined.varistor_before);
+  CHECK(refusal(bench, with(kNames, "\"clamp\"",
+                            "\"varistor\": {\"part\": \"mov-275\", \"place\": "
+                            "\"befor\"}, \"clamp\""))
+            .find("did you mean 'before'?") != std::string::npos);
+}
+
 TEST_CASE(
     "two droppers in parallel and a split series resistor are counted as a chain is, one when not said") {
   const Bench bench;

@@ -145,6 +145,21 @@ TEST_CASE("protective parts come in only where asked for, with a caution while n
   CHECK(cautioned == !problem::checks("varistor."));
 }
 
+TEST_CASE("varistors for another mains are left out and said so, the others carry their place into designs") {
+  const Bench bench;
+  bench.write("lists/varistors.csv",
+              "part,continuous_voltage,clamp_voltage,clamp_current\n"
+              "mov-130,130 V,340 V,50 A\n"
+              "mov-275,275 V,710 V,50 A\n");
+  const auto p = slots(bench, R"({"varistor": {"place": "after"}})");
+  CHECK(names_of(p.offers.varistors) == Names{"mov-275"});
+  CHECK(std::any_of(p.cautions.begin(), p.cautions.end(), [](const std::string& text) {
+    return text.find("mov-130 clamp below the crest of the highest line") != std::string::npos;
+  }));
+  const auto space = problem::make_space(p.offers);
+  CHECK_FALSE(problem::design_of(p.offers, space.ids, search::Choice(space.ids.size(), 0)).varistor_before);
+}
+
 TEST_CASE("arrangements are offered in their own order, one name or several") {
   const Bench bench;
   const auto p = slots(bench, R"({"arrangement": ["bridge-clamp-across", "half-wave-clamp-ahead"]})");

@@ -56,6 +56,25 @@ TEST_CASE("a design written with its numbers inline reads back the same to the b
   }
 }
 
+TEST_CASE("a varistor with its side, and a fuse, read back the same") {
+  for (const bool before : {true, false}) {
+    auto s = sample("towel-rail-timer", "towel-rail-timer");
+    const auto& lists = *s.problem().catalogue;
+    for (const auto& part : lists.varistors)
+      if (part.continuous_voltage_Vrms == 275) s.design.varistor = &part;
+    s.design.fuse = &lists.fuses.front();
+    s.design.varistor_before = before;
+    REQUIRE(s.design.varistor != nullptr);
+    const std::string text = design_text(s.design);
+    const auto again = read_back(text, s.file.problems.front());
+    CHECK(again.varistor_before == before);
+    REQUIRE(again.varistor != nullptr);
+    REQUIRE(again.fuse != nullptr);
+    CHECK(again.fuse->melting_i2t_A2s == s.design.fuse->melting_i2t_A2s);
+    CHECK(design_text(again) == text);
+  }
+}
+
 TEST_CASE("a design read back scores the same, figure for figure") {
   for (const auto& [problem, design] : kSamples) {
     INFO(design);

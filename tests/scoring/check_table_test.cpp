@@ -22,7 +22,13 @@ void each_example(const std::function<void(Example&)>& look) {
       example.requirement.limits.series_rated = true;
       example.requirement.limits.discharge = DischargeRule{};
       example.requirement.surroundings.max_height_mm = 25;
-      if (stage == 1) example.linear(5, 0.04, 1.7, 3e-3);
+      if (stage == 1) {
+        example.linear(5, 0.04, 1.7, 3e-3);
+        example.surge(1000);
+        example.guarded = example.fused = true;
+        example.series_resistor.fusible = false;
+        example.series_resistor.opens_at.reset();
+      }
       if (stage == 2) test::step_down(example);
       INFO(arrangement.name << ", stage " << stage);
       look(example);
@@ -40,20 +46,27 @@ TEST_CASE("the checks stand in their documented order, each id once") {
                                                  "dropper.class",
                                                  "dropper.series_rated",
                                                  "dropper.slew",
+                                                 "dropper.impulse",
                                                  "resistor.power",
                                                  "resistor.voltage",
                                                  "resistor.pulse",
                                                  "resistor.pulse_voltage",
+                                                 "resistor.surge",
                                                  "resistor.opens",
                                                  "resistor.body",
                                                  "clamp.power",
                                                  "clamp.junction",
                                                  "clamp.pulse",
+                                                 "clamp.surge",
                                                  "rectifier.reverse",
                                                  "rectifier.surge",
                                                  "thyristor.latch",
                                                  "thyristor.current",
                                                  "thyristor.turn_off",
+                                                 "varistor.continuous",
+                                                 "varistor.energy",
+                                                 "varistor.current",
+                                                 "varistor.protected",
                                                  "reservoir.voltage",
                                                  "reservoir.ripple",
                                                  "reservoir.life",
@@ -61,8 +74,12 @@ TEST_CASE("the checks stand in their documented order, each id once") {
                                                  "discharge.voltage",
                                                  "discharge.power",
                                                  "discharge.working_voltage",
+                                                 "discharge.surge",
                                                  "output_stage.junction",
                                                  "output_stage.input",
+                                                 "fuse.hold",
+                                                 "fuse.opens",
+                                                 "fuse.voltage",
                                                  "board.height"};
   std::vector<std::string_view> found;
   for (const CheckRule& rule : check_table()) found.push_back(rule.id);
@@ -166,6 +183,22 @@ TEST_CASE("a rating that is not given is never a pass") {
       {"output_stage.junction", [](Example& e) { e.stage.thermal_resistance_K_per_W.reset(); }},
       {"output_stage.junction", [](Example& e) { e.stage.max_junction_degC.reset(); }},
       {"output_stage.input", [](Example& e) { e.stage.input_max_V.reset(); }},
+      {"dropper.impulse",
+       [](Example& e) {
+         e.dropper.impulse_V.reset();
+         e.dropper.class_name = "X3";
+       }},
+      {"resistor.surge", [](Example& e) { e.series_resistor.pulse_energy_J.reset(); }},
+      {"clamp.surge", [](Example& e) { e.clamp.pulse_power_W.reset(); }},
+      {"clamp.surge", [](Example& e) { e.clamp.pulse_time_s.reset(); }},
+      {"varistor.energy", [](Example& e) { e.varistor.energy_J.reset(); }},
+      {"varistor.energy", [](Example& e) { e.varistor.clamp_voltage_V.reset(); }},
+      {"varistor.energy", [](Example& e) { e.varistor.clamp_current_A.reset(); }},
+      {"varistor.current", [](Example& e) { e.varistor.surge_current_A.reset(); }},
+      {"varistor.current", [](Example& e) { e.varistor.clamp_voltage_V.reset(); }},
+      {"discharge.surge", [](Example& e) { e.discharge.overload_voltage_V.reset(); }},
+      {"fuse.hold", [](Example& e) { e.fuse.melting_i2t_A2s.reset(); }},
+      {"fuse.voltage", [](Example& e) { e.fuse.rated_voltage_Vrms.reset(); }},
       {"board.height", [](Example& e) { e.dropper.info.height_um.reset(); }},
   };
   for (const auto& [id, remove] : removals) {
@@ -173,6 +206,9 @@ TEST_CASE("a rating that is not given is never a pass") {
     test::step_down(example);
     example.stage.input_max_V = 60;  // what is still given is not broken
     example.requirement.surroundings.max_height_mm = 25;
+    example.surge(500);
+    example.guarded = example.fused = true;
+    example.reservoir.surge_voltage_V = 60;
     remove(example);
     for (const CheckRule& rule : check_table()) {
       if (rule.id != id) continue;

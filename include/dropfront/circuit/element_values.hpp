@@ -24,6 +24,7 @@ struct ElementValues {
   Waveform mains;
   double source_ohm = 0;        ///< behind the mains, 0: none (a surge generator's 2 ohm)
   std::vector<Curve> varistor;  ///< parallel branches, alike in both directions; empty: none
+  int varistor_ways = 0;        ///< 0 both directions; 1, -1: only the way a voltage of that sign drives
   bool varistor_before = true;  ///< on the line side of the series resistor, else behind it
   double series_resistor_ohm = 0;
   double dropper_F = 0;

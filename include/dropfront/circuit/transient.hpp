@@ -42,7 +42,8 @@ struct Transient {
   std::vector<double> branch_energy_J;
   std::vector<double> branch_peak_A;
   std::vector<double> thyristor_peak_A;
-  std::vector<double> resistor_peak_A;  ///< greatest magnitude
+  std::vector<double> resistor_peak_A;   ///< greatest magnitude
+  std::vector<double> capacitor_peak_V;  ///< likewise
   double stored_change_J = 0;
   double energy_residual = 0;  ///< |in - dissipated - stored change| / (|in| + stored at start)
 };

@@ -22,6 +22,15 @@ struct VaristorLaw {
 /// than 4 % of the voltage below it.
 std::vector<Curve> varistor_branches(const VaristorLaw& law);
 
+/// The same for a run in which no more than about `greatest_A` flows: few pieces, which touch the law at 1 mA
+/// and at 1/300, 1/30, 1/5 and all of that current; from a thirtieth of it up no more than 2 % of the voltage
+/// below the law (0.1 A and more). Empty where `greatest_A` is below 1 mA.
+std::vector<Curve> varistor_branches(const VaristorLaw& law, double greatest_A);
+
+/// Current where the law meets a source of `open_V` behind `source_ohm`; 0 where that stays below the 1 mA
+/// point. All > 0.
+double current_behind_A(const VaristorLaw& law, double open_V, double source_ohm);
+
 /// A disc's voltage at 1 mA follows its continuous a.c. rating: 430 V +/- 10 % for 275 V (size 431K).
 double varistor_one_mA_V(double continuous_Vrms);
 

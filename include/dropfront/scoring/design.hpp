@@ -19,6 +19,7 @@ struct Design {
   const parts::Resistor* discharge = nullptr;  ///< one element of the chain
   int discharge_count = 0;                     ///< elements in series
   const parts::Varistor* varistor = nullptr;
+  bool varistor_before = true;  ///< on the line side of the series resistor, else behind it
   const parts::Fuse* fuse = nullptr;
   const parts::Ceramic* ceramic = nullptr;
   const parts::Thyristor* thyristor = nullptr;

@@ -11,6 +11,7 @@
 #include "dropfront/scoring/operating_point.hpp"
 #include "dropfront/scoring/plug_in.hpp"
 #include "dropfront/scoring/requirement.hpp"
+#include "dropfront/scoring/surge.hpp"
 
 namespace dropfront::scoring {
 
@@ -63,6 +64,7 @@ class Evidence {
   const OperatingPoint& standby();
   const OperatingPoint& standby_worst();  ///< production worst: the standby objective
   const PlugInAnswer& plug_in();
+  const SurgeAnswer& surge();  ///< only where limits.surge is given
 
   /// Available rail current with the values of `point` (its own V_required at nominal). Absent: no answer.
   std::optional<double> available_A(const OperatingPoint& point);

@@ -57,6 +57,7 @@ enum class ConnectionKind { plug, switched, fixed };
 struct Connection {
   ConnectionKind kind = ConnectionKind::plug;
   int plug_ins = 1000;
+  int chatter = 1;  ///< closings in a row each time, half a period apart: a contact bounces
 };
 
 /// What may be left on the dropper after unplugging. `allowed_voltage_V` (discharge_rules.hpp) gives the
@@ -88,6 +89,7 @@ struct Limits {
   std::optional<double> start_time_s;
   std::optional<DischargeRule> discharge;
   std::optional<Surge> surge;
+  std::optional<double> fast_burst_V;  ///< IEC 61000-4-4 level; an energy estimate only
   std::vector<Dip> dips;
   bool series_rated = false;  ///< true: only series-rated droppers comply
 };

@@ -1,13 +1,25 @@
+#include <algorithm>
+
 #include "dropfront/circuit/pulse.hpp"
 #include "dropfront/scoring/checks/checks.hpp"
 #include "dropfront/scoring/checks/make_check.hpp"
+#include "dropfront/scoring/clamp_trace.hpp"
 
 namespace dropfront::scoring {
 namespace {
 
-/// Published surge curves of zeners follow t^(-1/2) down to about 10 us and stop there (from memory): a
-/// shorter spike counts as that long.
-constexpr double kShortestPulse_s = 10e-6;
+/// The same pulse so many times, `every_s` apart.
+std::vector<circuit::PowerStep> closings_in_a_row(const std::vector<circuit::PowerStep>& trace, int closings,
+                                                  double every_s) {
+  double length_s = 0;
+  for (const auto& step : trace) length_s += step.duration_s;
+  std::vector<circuit::PowerStep> all = trace;
+  for (int k = 1; k < closings; ++k) {
+    all.push_back({std::max(0.0, every_s - length_s), 0});
+    all.insert(all.end(), trace.begin(), trace.end());
+  }
+  return all;
+}
 
 }  // namespace
 
@@ -22,8 +34,10 @@ std::optional<Check> clamp_pulse(Evidence& evidence) {
   }
   const PlugInAnswer& plug_in = evidence.plug_in();
   const circuit::PulseRating rating{*clamp.pulse_power_W, *clamp.pulse_time_s, clamp.max_junction_degC};
-  const double stress = circuit::pulse_stress_W_sqrt_s(plug_in.clamp_trace, kShortestPulse_s);
-  const double within_data = circuit::pulse_stress_W_sqrt_s(plug_in.clamp_trace, rating.time_s);
+  const int closings = evidence.requirement().connection.chatter;
+  const auto trace = closings_in_a_row(plug_in.clamp_trace, closings, evidence.shapes().rich.period_s() / 2);
+  const double stress = circuit::pulse_stress_W_sqrt_s(trace, kShortestClampPulse_s);
+  const double within_data = circuit::pulse_stress_W_sqrt_s(trace, rating.time_s);
   const double warm_degC = plug_in.clamp_junction_degC;
   Check check = at_most("clamp.pulse", circuit::pulse_use(stress, rating, warm_degC), 1.0, "",
                         at_plug_in(plug_in.clamp),
@@ -35,7 +49,8 @@ std::optional<Check> clamp_pulse(Evidence& evidence) {
                    {"rated_pulse_power_W", rating.power_W},
                    {"rated_pulse_s", rating.time_s},
                    {"max_junction_degC", rating.max_junction_degC},
-                   {"shortest_pulse_s", kShortestPulse_s}};
+                   {"closings_in_a_row", static_cast<double>(closings)},
+                   {"shortest_pulse_s", kShortestClampPulse_s}};
   return plug_in.usable ? check : unsolved(check, plug_in.reason);
 }
 

@@ -111,6 +111,16 @@ At at_plug_in(const PlugIn& run) {
   return at;
 }
 
+At at_surge(const SurgeRun& run) {
+  At at = at_corner("surge", run.ambient_degC, run.ends);
+  at.load = "none";
+  at.phase_deg = run.phase_deg;
+  at.values = corner_figures(run.values, run.local_degC, run.clamp_junction_degC);
+  at.values.push_back({"surge_V", run.surge_V});
+  at.values.push_back({"surge_source_ohm", run.values.source_ohm});
+  return at;
+}
+
 At at_corner(std::string corner, std::optional<double> ambient_degC, std::string ends) {
   At at;
   at.corner = std::move(corner);

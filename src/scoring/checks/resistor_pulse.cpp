@@ -16,13 +16,15 @@ std::optional<Check> resistor_pulse(Evidence& evidence) {
     const Design& design = evidence.design();
     const double capacitance_F = all_droppers_F(design, End::high, 0, run.ambient_degC);
     const double resistance_ohm = series_resistor_ohm(design, end), share = series_resistor_share(design);
-    Check check = at_most("resistor.pulse", energy_J * share,
+    const double closings = evidence.requirement().connection.chatter;
+    Check check = at_most("resistor.pulse", energy_J * share * closings,
                           pulse_energy_limit_J(part, resistance_ohm, capacitance_F), "J", at_plug_in(run),
                           part.construction == parts::Construction::film
                               ? "plug-in energy; rating at 1 ms carried along P·sqrt(t) to R·C/2"
                               : "plug-in energy against the joule rating");
     check.figures = {{"energy_J", energy_J},
                      {"share_of_one_part", share},
+                     {"closings_in_a_row", closings},
                      {"pulse_s", circuit::exponential_pulse_s(resistance_ohm, capacitance_F)}};
     add_figure(check, "rated_energy_J", part.pulse_energy_J);
     return plug_in.usable ? check : unsolved(check, plug_in.reason);

@@ -32,12 +32,15 @@ double stage_loss_W(const parts::OutputStage& stage, double rail_mean_V, double 
   return 0;
 }
 
-std::optional<double> pulse_energy_limit_J(const parts::Resistor& part, double resistance_ohm,
-                                           double capacitance_F) {
+std::optional<double> pulse_limit_J(const parts::Resistor& part, double pulse_s) {
   constexpr double kFilmRating_s = 1e-3;
   if (!part.pulse_energy_J || part.construction == parts::Construction::wirewound) return part.pulse_energy_J;
-  return circuit::film_pulse_energy_J(*part.pulse_energy_J, kFilmRating_s,
-                                      circuit::exponential_pulse_s(resistance_ohm, capacitance_F));
+  return circuit::film_pulse_energy_J(*part.pulse_energy_J, kFilmRating_s, pulse_s);
+}
+
+std::optional<double> pulse_energy_limit_J(const parts::Resistor& part, double resistance_ohm,
+                                           double capacitance_F) {
+  return pulse_limit_J(part, circuit::exponential_pulse_s(resistance_ohm, capacitance_F));
 }
 
 double reservoir_current_Arms(const Evidence& evidence, const OperatingPoint& point) {

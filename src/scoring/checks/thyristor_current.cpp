@@ -32,7 +32,16 @@ std::optional<Check> thyristor_current(Evidence& evidence) {
                                    design.thyristor->surge_current_A, "A", place,
                                    "greatest of plug-in pulse and firing spike against the surge rating"),
                            {{"plug_in_peak_A", plug_in.thyristor_peak_A}, {"firing_peak_A", firing_A}});
-  return usable ? check : unsolved(check, reason);
+  if (!usable) return unsolved(check, reason);
+  if (!evidence.requirement().limits.surge) return check;
+  const SurgeAnswer& surge = evidence.surge();
+  const double surge_A = surge.thyristor.thyristor_peak_A;
+  Check surged =
+      with(at_most("thyristor.current", surge_A, design.thyristor->surge_current_A, "A",
+                   at_surge(surge.thyristor), "greatest current in the surge against the surge rating"),
+           {{"surge_peak_A", surge_A}});
+  if (!surge.usable) surged = unsolved(surged, surge.reason);
+  return worse(check, surged);
 }
 
 }  // namespace dropfront::scoring

@@ -54,6 +54,9 @@ struct Example {
   parts::Resistor discharge;
   parts::Thyristor thyristor;  // used by the shunt arrangements only
   parts::Resistor gate_resistor;
+  parts::Varistor varistor;  // in front of the series resistor, only where `guarded`
+  parts::Fuse fuse;          // only where `fused`
+  bool guarded = false, fused = false, varistor_before = true;
   Requirement requirement;
   const circuit::Arrangement* arrangement = nullptr;
   int discharge_count = 2;
@@ -107,6 +110,19 @@ struct Example {
     thyristor.surge_current_A = 10;
     gate_resistor.resistance_ohm = 1000;
     gate_resistor.tolerance = 0.05;
+    // A 14 mm disc of the 431K kind: 430 V at 1 mA, 710 V at 50 A, 71 J, 4500 A (table of a standard series,
+    // from memory).
+    varistor.continuous_voltage_Vrms = 275;
+    varistor.clamp_voltage_V = 710;
+    varistor.clamp_current_A = 50;
+    varistor.energy_J = 71;
+    varistor.surge_current_A = 4500;
+    fuse.rated_current_A = 1;
+    fuse.melting_i2t_A2s = 12;
+    fuse.rated_voltage_Vrms = 253;
+    set_body(varistor.info, "varistor", 15'500, 5'200, 60'000);
+    set_body(fuse.info, "fuse", 8'400, 4'000, 70'000);
+    discharge.overload_voltage_V = 500;
     set_body(thyristor.info, "thyristor", 4'900, 3'800, 70'000);
     set_body(gate_resistor.info, "gate resistor", 2'000, 1'250, 2'000);
     set_body(dropper.info, "film", 26'500, 8'500, 300'000);
@@ -135,12 +151,17 @@ struct Example {
     d.output_stage = &stage;
     d.discharge = discharge_count > 0 ? &discharge : nullptr;
     d.discharge_count = discharge_count;
+    if (guarded) d.varistor = &varistor;
+    d.varistor_before = varistor_before;
+    if (fused) d.fuse = &fuse;
     if (arrangement != nullptr && arrangement->thyristor_shunt) {
       d.thyristor = &thyristor;
       d.gate_resistor = &gate_resistor;
     }
     return d;
   }
+  /// Surges of that many volts behind the 2 ohm of the combination wave are asked for.
+  void surge(double voltage_V) { requirement.limits.surge = Surge{voltage_V, 2}; }
   Supply& supply() { return requirement.supplies.front(); }
 
   /// A linear regulator in the output stage's place.

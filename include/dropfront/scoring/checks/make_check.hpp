@@ -8,6 +8,7 @@
 #include "dropfront/scoring/lean.hpp"
 #include "dropfront/scoring/operating_point.hpp"
 #include "dropfront/scoring/plug_in.hpp"
+#include "dropfront/scoring/surge.hpp"
 
 namespace dropfront::scoring {
 
@@ -41,6 +42,8 @@ At at_point(const OperatingPoint& point);
 At at_lean(const LeanAnswer& lean, const std::string& load);
 /// Where a plug-in was run: closing on the crest.
 At at_plug_in(const PlugIn& run);
+/// Where a surge was run; its voltage (signed) and source among the values.
+At at_surge(const SurgeRun& run);
 /// A place without an operating point; empty where no corner decides. `ends` and `ambient_degC` as far as
 /// they matter.
 At at_corner(std::string corner, std::optional<double> ambient_degC = {}, std::string ends = {});

@@ -19,6 +19,10 @@ inline constexpr double kUnstatedHarmonicsHeating = 1.15;
 /// negative; 0 for a direct output.
 double stage_loss_W(const parts::OutputStage& stage, double rail_mean_V, double output_current_A);
 
+/// Energy a resistor may take in a pulse as long as a rectangle of `pulse_s`: the joule rating (wirewound), or
+/// the rating at 1 ms carried along P·√t (film). Absent: not given.
+std::optional<double> pulse_limit_J(const parts::Resistor& part, double pulse_s);
+
 /// Energy the series resistor may take at plug-in through `resistance_ohm` from `capacitance_F`: the joule
 /// rating (wirewound), or the rating at 1 ms carried along P·√t to the pulse's own length R·C/2 (film).
 std::optional<double> pulse_energy_limit_J(const parts::Resistor& part, double resistance_ohm,
