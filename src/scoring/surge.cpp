@@ -26,7 +26,7 @@ class Surges {
     if (!failed_) find_rail();
     if (!failed_) find_clamp();
     if (!failed_) find_resistor();
-    if (!failed_ && points_.design().dropper != nullptr) find_dropper();
+    if (!failed_ && points_.design().arrangement->dropper) find_dropper();
     if (!failed_ && points_.design().varistor != nullptr) find_varistor();
     answer_.usable = !failed_;
     return std::move(answer_);
