@@ -17,6 +17,8 @@ TEST_CASE("more line voltage never lowers a stress") {
   for (const auto& arrangement : circuit::arrangements()) {
     // A shunt holds its rail at the firing threshold: more current only makes it fire earlier.
     if (arrangement.thyristor_shunt) continue;
+    // Nor has 47 ohm without a dropper figures to compare: its clamp is far beyond any rating.
+    if (!arrangement.dropper) continue;
     for (CheckFunction* check :
          {resistor_power, resistor_voltage, resistor_pulse, resistor_pulse_voltage, clamp_power,
           clamp_junction, clamp_pulse, rectifier_reverse, rectifier_surge, rail_max, rail_transient,
