@@ -18,7 +18,8 @@ std::optional<Check> clamp_surge(Evidence& evidence) {
   const double stress = surge.clamp.clamp_stress_W_sqrt_s;
   Check check = at_most("clamp.surge", circuit::pulse_use(stress, rating, surge.clamp.clamp_junction_degC),
                         1.0, "", at_surge(surge.clamp),
-                        "share of the single-pulse rating by heat diffusion, from the warm junction");
+                        "share of the single-pulse rating by heat diffusion, from the warm junction; "
+                        "extrapolated below the data's shortest pulse (from memory)");
   check.figures = {{"stress_W_sqrt_s", stress},
                    {"rated_pulse_power_W", rating.power_W},
                    {"rated_pulse_s", rating.time_s},
