@@ -95,6 +95,16 @@ Waveform Waveform::with_pulse(double start_s, double amplitude_V, double front_s
   return sum;
 }
 
+Waveform Waveform::scaled(double share) const {
+  Waveform less = *this;
+  less.exponentials_.clear();
+  less.voltage_Vrms_ *= share;
+  less.crest_V_ *= share;
+  less.sum_of_rises_V_ *= share;
+  for (auto& tone : less.tones_) tone.amplitude_V *= share;
+  return less;
+}
+
 bool Waveform::odd_only() const {
   return std::all_of(tones_.begin(), tones_.end(), [](const Tone& t) { return t.order % 2 == 1; });
 }

@@ -37,6 +37,8 @@ class Waveform {
   /// The same mains with a double-exponential pulse on top from `start_s` on:
   /// amplitude_V·(1 - e^(-t/front_s))·e^(-t/tail_s). Runs only, never a steady state.
   Waveform with_pulse(double start_s, double amplitude_V, double front_s, double tail_s) const;
+  /// The same shape at `share` (>= 0) of its voltage; 0 is a shorted source. Without the pulse.
+  Waveform scaled(double share) const;
   /// The pulse as a sum of decaying exponentials amplitude·e^(-rate·(t - pulse_start_s())).
   struct Exponential {
     double amplitude_V;

@@ -1,0 +1,158 @@
+#include "dropfront/scoring/lean_runs.hpp"
+
+#include <cmath>
+#include <utility>
+
+#include "dropfront/circuit/disturbance.hpp"
+
+namespace dropfront::scoring {
+
+namespace {
+
+constexpr circuit::SteadyOptions kRailOnly{.powers = false, .multipliers = false};
+constexpr double kLower_V = 1e-6;
+
+End flipped(End end) { return end == End::low ? End::high : End::low; }
+
+/// One ambient and one choice of ends, ready to be disturbed.
+struct Trial {
+  const OperatingPoint* settled = nullptr;
+  LeanEnds ends;
+  circuit::ElementValues values;
+  circuit::SteadyState start;
+};
+
+Trial set_up(const LeanRuns& runs, const LeanEvent& event, const OperatingPoint& settled,
+             const LeanEnds& ends) {
+  Trial trial{&settled, ends, runs.values(settled, ends, event.before), {}};
+  trial.start = runs.steady(trial.values, settled);
+  return trial;
+}
+
+circuit::Disturbance disturbance(const LeanRuns& runs, const LeanEvent& event, const Trial& trial) {
+  auto during = trial.values;
+  event.disturb(during);
+  return {runs.network(trial.values), runs.network(during), event.duration_s, trial.start, runs.required_V()};
+}
+
+EventAnswer answer_of(const LeanRuns& runs, const Trial& trial, const circuit::Disturbance::Least& least) {
+  EventAnswer answer;
+  answer.usable = trial.start.usable() && least.usable;
+  answer.reason = trial.start.usable() ? least.reason : trial.start.reason;
+  answer.rail_min_V = least.rail_V;
+  answer.steady_min_V = trial.start.rail_min_V;
+  answer.phase_deg = least.phase_deg;
+  answer.recovers = least.recovers;
+  answer.ambient_degC = trial.settled->ambient_degC;
+  const auto& design = runs.points->design();
+  answer.ends = ends_text(trial.ends, design.discharge != nullptr && design.discharge_count > 0);
+  answer.values = trial.values;
+  answer.local_degC = trial.settled->local_degC;
+  answer.clamp_junction_degC = trial.settled->clamp_junction_degC;
+  return answer;
+}
+
+/// One trial at one phase.
+EventAnswer at_phase(const LeanRuns& runs, const LeanEvent& event, const Trial& trial, double phase_deg) {
+  if (!trial.start.usable()) return answer_of(runs, trial, {});
+  auto disturbed = disturbance(runs, event, trial);
+  const auto least = disturbed.at(phase_deg);
+  *runs.transients += disturbed.runs();
+  return answer_of(runs, trial, least);
+}
+
+/// One trial at its worst phase (near one if given), repeated if the event is.
+EventAnswer at_worst(const LeanRuns& runs, const LeanEvent& event, const Trial& trial,
+                     std::optional<double> near_deg) {
+  if (!trial.start.usable()) return answer_of(runs, trial, {});
+  auto disturbed = disturbance(runs, event, trial);
+  auto least = disturbed.worst(near_deg);
+  if (least.usable && event.every_s) {
+    const auto repeated = disturbed.repeated(least.phase_deg, *event.every_s);
+    if (!repeated.usable || repeated.rail_V < least.rail_V || !repeated.recovers) least = repeated;
+  }
+  *runs.transients += disturbed.runs();
+  return answer_of(runs, trial, least);
+}
+
+/// The ends of a trial with each one turned that lowers the rail at this phase.
+LeanEnds worse_ends(const LeanRuns& runs, const LeanEvent& event, const Trial& trial, double rail_V,
+                    double phase_deg) {
+  const auto& design = runs.points->design();
+  LeanEnds worse = trial.ends;
+  for (const auto member : {&LeanEnds::series_resistor, &LeanEnds::esr, &LeanEnds::discharge}) {
+    if (member == &LeanEnds::discharge && (design.discharge == nullptr || design.discharge_count <= 0)) {
+      continue;
+    }
+    LeanEnds turned = trial.ends;
+    turned.*member = flipped(turned.*member);
+    const auto answer = at_phase(runs, event, set_up(runs, event, *trial.settled, turned), phase_deg);
+    if (answer.usable && answer.rail_min_V < rail_V - kLower_V) worse.*member = turned.*member;
+  }
+  return worse;
+}
+
+EventAnswer lower(EventAnswer first, EventAnswer second) {
+  if (!first.usable) return first;
+  if (!second.usable) return second;
+  return second.rail_min_V < first.rail_min_V ? std::move(second) : std::move(first);
+}
+
+}  // namespace
+
+std::string LeanRuns::fault() const {
+  for (const auto* point : heaviest) {
+    if (!point->state.usable()) return point->state.reason;
+  }
+  return heaviest.empty() ? "the lean corner has no answer" : "";
+}
+
+circuit::ElementValues LeanRuns::values(const OperatingPoint& settled, const LeanEnds& at,
+                                        const RailLoad& load) const {
+  const Rises rises{settled.local_degC - settled.ambient_degC,
+                    settled.clamp_junction_degC - settled.local_degC};
+  auto values = points->values(solver->recipe(at), rises, settled.ambient_degC);
+  hang(load, stage(), required_V(), values);
+  return values;
+}
+
+circuit::Network LeanRuns::network(const circuit::ElementValues& values) const {
+  return points->design().arrangement->build(values);
+}
+
+circuit::SteadyState LeanRuns::steady(const circuit::ElementValues& values,
+                                      const OperatingPoint& settled) const {
+  auto state = points->steady(values, kRailOnly, &settled.state.start);
+  if (state.usable() || !(values.rail_power_W > 0)) return state;
+  auto flat = values;
+  flat.rail_power_W = 0;
+  flat.rail_current_A = settled.rail_current_A;
+  return points->steady(flat, kRailOnly, &settled.state.start);
+}
+
+EventAnswer worst_event(const LeanRuns& runs, const LeanEvent& event) {
+  EventAnswer worst;
+  worst.reason = runs.fault();
+  if (!worst.reason.empty()) return worst;
+  LeanEnds ends = runs.ends;
+  ends.esr = End::high;
+  const auto first = set_up(runs, event, *runs.heaviest.front(), ends);
+  worst = at_worst(runs, event, first, std::nullopt);
+  if (!worst.usable) return worst;
+  const LeanEnds turned = worse_ends(runs, event, first, worst.rail_min_V, worst.phase_deg);
+  if (turned != ends) {
+    ends = turned;
+    const auto joined = set_up(runs, event, *runs.heaviest.front(), ends);
+    worst = lower(worst, at_worst(runs, event, joined, worst.phase_deg));
+  }
+  for (std::size_t i = 1; i < runs.heaviest.size() && worst.usable; ++i) {
+    const auto other = set_up(runs, event, *runs.heaviest[i], ends);
+    const auto there = at_phase(runs, event, other, worst.phase_deg);
+    if (there.usable && !(there.rail_min_V < worst.rail_min_V)) continue;
+    worst = lower(worst, there.usable ? at_worst(runs, event, other, worst.phase_deg) : there);
+  }
+  worst.phase_deg = std::fmod(worst.phase_deg, 360);
+  return worst;
+}
+
+}  // namespace dropfront::scoring
