@@ -76,14 +76,14 @@ namespace {
 /// P/v by chords between voltages in geometric steps: the first chord is the load's own slope, every further
 /// one a branch that opens where the chord before ends. Chords lie above the curve, by (r - 1)^2/(4·r).
 void add_power_load(Network& network, Node positive, Node negative, const ElementValues& values) {
-  constexpr int kChords = 12;
+  const int chords = std::max(1, values.power_chords);
   const double from_V = values.power_from_V;
-  const double ratio = std::pow(std::max(values.power_to_V, 1.01 * from_V) / from_V, 1.0 / kChords);
+  const double ratio = std::pow(std::max(values.power_to_V, 1.01 * from_V) / from_V, 1.0 / chords);
   double low_V = from_V;
   double slope_S = 0;
-  for (int k = 0; k <= kChords; ++k) {
+  for (int k = 0; k <= chords; ++k) {
     const double high_V = low_V * ratio;
-    const double next_S = k == kChords ? 0 : -values.rail_power_W / (low_V * high_V);
+    const double next_S = k == chords ? 0 : -values.rail_power_W / (low_V * high_V);
     if (k == 0) {
       network.loads.push_back({positive, negative, values.rail_power_W / from_V, from_V, next_S});
     } else {

@@ -9,7 +9,7 @@ namespace dropfront::circuit {
 namespace {
 
 constexpr double kGrid_deg = 10;
-constexpr double kNear_deg = 30 + 1e-6;
+constexpr int kCoarse = 2;          // every second place of the grid first
 constexpr double kTurned_V = 1e-6;  // a minimum no further below the one before has turned
 constexpr int kMostRecovery = 64;   // periods
 constexpr int kFallingEnough = 4;   // periods below the floor, each lower than the one before
@@ -18,7 +18,22 @@ constexpr int kFinalists = 3;
 constexpr int kSections = 6;  // leave 20 degrees / 18
 constexpr double kRecovered_V = 1e-3;
 constexpr double kPeriodic_V = 1e-7;  // a disturbed period that moves the capacitors by less repeats itself
+constexpr int kSettled = 256;         // periods in which even a supply that alternates is where it stays
 constexpr int kMostRepeated = 400;    // periods
+
+/// Places of the lowest rails among those tried, lowest first.
+std::vector<int> lowest(const std::vector<Disturbance::Least>& tried) {
+  std::vector<int> places;
+  for (std::size_t k = 0; k < tried.size(); ++k) {
+    if (tried[k].usable) places.push_back(static_cast<int>(k));
+  }
+  const auto lower = [&tried](int a, int b) {
+    return tried[static_cast<std::size_t>(a)].rail_V < tried[static_cast<std::size_t>(b)].rail_V;
+  };
+  std::stable_sort(places.begin(), places.end(), lower);
+  if (places.size() > kFinalists) places.resize(kFinalists);
+  return places;
+}
 
 }  // namespace
 
@@ -83,9 +98,11 @@ bool Disturbance::on_orbit(double phase_deg, RunPoint& at) {
 bool Disturbance::recover(RunPoint& at, bool to_the_end, Extremes& rail, Least& least) {
   double before_V = INFINITY;
   int turned = 0, falling = 0;
+  // With half-wave symmetry the rail does in half a period what else it does in a whole one.
+  const double step_s = std::min(span_s(), normal_.period_s());
   for (int k = 0; k < kMostRecovery; ++k) {
     Extremes period;
-    if (!normal_.advance(normal_.period_s(), at, &period)) return false;
+    if (!normal_.advance(step_s, at, &period)) return false;
     rail.include(period.low, period.low_at_s);
     if (!to_the_end || period.low >= steady_min_V_ - kTurned_V) return true;
     const bool lower = period.low < before_V - kTurned_V;
@@ -104,14 +121,14 @@ bool Disturbance::disturb(double duration_s, RunPoint& at, Extremes& rail) {
   const double period_s = normal_.period_s();
   double left_s = duration_s;
   if (!still()) {
-    for (; left_s > kLong * period_s; left_s -= period_s) {
+    for (int k = 0; left_s > kLong * period_s; left_s -= period_s, ++k) {
       const StateVector before = at.x;
       if (!disturbed_.advance(period_s, at, &rail)) return false;
       double moved_V = 0;
       for (std::size_t i = 0; i < before.size(); ++i) {
         moved_V = std::max(moved_V, std::abs(at.x[i] - before[i]));
       }
-      if (!(moved_V < kPeriodic_V)) continue;
+      if (!(moved_V < kPeriodic_V) && k < kSettled) continue;
       const double alike_s = period_s * std::floor(left_s / period_s - 1);
       at.time_s += alike_s;
       left_s -= alike_s + period_s;
@@ -137,50 +154,66 @@ Disturbance::Least Disturbance::begun(double phase_deg, double duration_s, bool 
 
 Disturbance::Least Disturbance::at(double phase_deg) { return begun(phase_deg, duration_s_, true); }
 
-Disturbance::Least Disturbance::worst(std::optional<double> near_deg) {
-  if (!sample_grid()) return failed(0);
+/// What ranks the phases: the run until soon after the end, of a disturbance that may be shortened.
+Disturbance::Least Disturbance::ranked(double phase_deg) {
   const double period_s = normal_.period_s();
-  double ranked_s = duration_s_;
-  if (!still() && duration_s_ > kLong * period_s) {
-    ranked_s = period_s + std::fmod(duration_s_, period_s);
+  return begun(phase_deg, whole() ? duration_s_ : period_s + std::fmod(duration_s_, period_s), false);
+}
+
+bool Disturbance::whole() const { return still() || duration_s_ <= kLong * normal_.period_s(); }
+
+Disturbance::Least Disturbance::worst_of_grid() {
+  if (!sample_grid()) return failed(0);
+  const int count = static_cast<int>(grid_.size());
+  std::vector<Least> tried(grid_.size());
+  const auto try_place = [&](int place) {
+    Least& here = tried[static_cast<std::size_t>(place)];
+    const RunPoint& sample = grid_[static_cast<std::size_t>(place)];
+    if (!here.usable) here = ranked(sample.time_s / normal_.period_s() * 360);
+    return here.usable;
+  };
+  for (int k = 0; k < count; k += kCoarse) {
+    if (!try_place(k)) return failed(0);
   }
-  const auto quick = [&](double phase_deg) { return begun(phase_deg, ranked_s, false); };
-  std::vector<Least> tried;
-  for (const RunPoint& sample : grid_) {
-    const double phase_deg = sample.time_s / period_s * 360;
-    if (near_deg && std::abs(std::remainder(phase_deg - *near_deg, span_deg())) > kNear_deg) continue;
-    tried.push_back(quick(phase_deg));
-    if (!tried.back().usable) return tried.back();
+  for (const int k : lowest(tried)) {
+    for (const int beside : {(k + 1) % count, (k + count - 1) % count}) {
+      if (!try_place(beside)) return failed(0);
+    }
   }
-  const auto finalists = std::min<std::ptrdiff_t>(kFinalists, static_cast<std::ptrdiff_t>(tried.size()));
-  std::stable_sort(tried.begin(), tried.end(),
-                   [](const Least& a, const Least& b) { return a.rail_V < b.rail_V; });
   Least worst;
-  for (auto candidate = tried.begin(); candidate != tried.begin() + finalists; ++candidate) {
-    const Least full = at(candidate->phase_deg);
+  for (const int k : lowest(tried)) {
+    const Least& candidate = tried[static_cast<std::size_t>(k)];
+    const Least full = at(candidate.phase_deg);
     if (!full.usable) return full;
     if (!worst.usable || full.rail_V < worst.rail_V) worst = full;
+    // Where the rest of the run took the rail no lower, the ranking is the answer.
+    if (whole() && full.rail_V >= candidate.rail_V - kTurned_V) break;
   }
+  return worst;
+}
+
+Disturbance::Least Disturbance::worst_around(double phase_deg) {
   constexpr double kGolden = 0.6180339887498949;
-  double low_deg = worst.phase_deg - kGrid_deg, high_deg = worst.phase_deg + kGrid_deg;
-  Least left = quick(high_deg - kGolden * (high_deg - low_deg));
-  Least right = quick(low_deg + kGolden * (high_deg - low_deg));
+  double low_deg = phase_deg - kGrid_deg, high_deg = phase_deg + kGrid_deg;
+  Least left = ranked(high_deg - kGolden * (high_deg - low_deg));
+  Least right = ranked(low_deg + kGolden * (high_deg - low_deg));
   for (int k = 0; k < kSections && left.usable && right.usable; ++k) {
     if (left.rail_V < right.rail_V) {
       high_deg = right.phase_deg;
       right = left;
-      left = quick(high_deg - kGolden * (high_deg - low_deg));
+      left = ranked(high_deg - kGolden * (high_deg - low_deg));
     } else {
       low_deg = left.phase_deg;
       left = right;
-      right = quick(low_deg + kGolden * (high_deg - low_deg));
+      right = ranked(low_deg + kGolden * (high_deg - low_deg));
     }
   }
-  const Least refined = at(left.rail_V < right.rail_V ? left.phase_deg : right.phase_deg);
-  if (!refined.usable) return refined;
-  if (refined.rail_V < worst.rail_V) worst = refined;
-  worst.phase_deg -= span_deg() * std::floor(worst.phase_deg / span_deg());
-  return worst;
+  Least lowest = at(left.rail_V < right.rail_V ? left.phase_deg : right.phase_deg);
+  if (!lowest.usable) return lowest;
+  const Least middle = at(phase_deg);
+  if (!middle.usable || middle.rail_V < lowest.rail_V) lowest = middle;
+  lowest.phase_deg -= span_deg() * std::floor(lowest.phase_deg / span_deg());
+  return lowest;
 }
 
 /// Whether the reservoir is charged as it was, to a millivolt: the map never expands what is left.
@@ -214,7 +247,8 @@ Disturbance::Least Disturbance::repeated(double phase_deg, double every_s) {
     const double rest_s = std::fmod(left_s, period_s);
     if (!normal_.advance(rest_s, at, &round)) return failed(phase_deg);
     bool recovered = whole && back(at, orbit);
-    for (double more_s = left_s - rest_s; more_s > 0.5 * period_s && !recovered; more_s -= period_s) {
+    const double most_s = std::min(left_s - rest_s, kSettled * period_s);
+    for (double run_on_s = 0; run_on_s < most_s - 0.5 * period_s && !recovered; run_on_s += period_s) {
       if (!normal_.advance(period_s, at, &round)) return failed(phase_deg);
       recovered = whole && back(at, orbit);
     }

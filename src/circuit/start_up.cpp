@@ -9,11 +9,12 @@ namespace dropfront::circuit {
 
 namespace {
 
-constexpr double kStep_deg = 10;
+constexpr double kStep_deg = 20;
 constexpr double kPeriodic_V = 1e-7;  // a period that moves no capacitor by more repeats itself
 constexpr double kNoLower_V = 1e-4;
 constexpr int kCalm = 3;
-constexpr int kFinalists = 3;
+constexpr double kLongEnough = 16;  // periods above the level, whatever the minima do
+constexpr int kFinalists = 2;
 
 double moved_V(const StateVector& a, const StateVector& b) {
   double most = 0;
@@ -74,20 +75,21 @@ StartUp::Start StartUp::at(double phase_deg, double give_up_s) {
     start.usable = true;
     start.time_s = at.time_s - began_s;
     if (running_ && on && rail.low < cut_out_V_) {
-      start.end = End::cuts_out;
+      start.outcome = Outcome::cuts_out;
       return start;
     }
     const bool high = on && rail.low >= required_V_;
     calm = high && rail.low >= before_V - kNoLower_V ? calm + 1 : 0;
     before_V = rail.low;
     const bool periodic = moved_V(at.x, before.x) < kPeriodic_V;
-    if (calm == kCalm || (periodic && high)) {
-      start.end = End::reached;
+    const bool stays = at.time_s - last_below_s > kLongEnough * period_s;
+    if (high && (calm >= kCalm || periodic || stays)) {
+      start.outcome = Outcome::reached;
       start.time_s = last_below_s - began_s;
       return start;
     }
     if (periodic) {
-      start.end = End::stays_low;
+      start.outcome = Outcome::stays_low;
       return start;
     }
   }
@@ -95,53 +97,61 @@ StartUp::Start StartUp::at(double phase_deg, double give_up_s) {
   return start;
 }
 
-StartUp::Start StartUp::worst(double give_up_s) {
-  struct Phase {
-    double deg, reservoir_V, behind_s;
-  };
-  const double period_s = rising_.period_s();
+/// Reservoir voltage two periods after mains time zero.
+double StartUp::charged_V(double phase_deg) {
+  ++runs_;
+  RunPoint at;
+  at.time_s = phase_deg / 360 * rising_.period_s();
+  return rising_.advance(2 * rising_.period_s() - at.time_s, at) ? reservoir_V(at) : 0;
+}
+
+/// What a period adds after that; 0 where the start is over by then.
+double StartUp::gain_V() {
+  RunPoint at;
+  Extremes rail;
+  if (!rising_.advance(2 * rising_.period_s(), at, &rail)) return 0;
+  if (rail.high >= std::max(required_V_, turn_on_V_)) return 0;
+  const double before_V = reservoir_V(at);
+  return rising_.advance(rising_.period_s(), at) ? reservoir_V(at) - before_V : 0;
+}
+
+/// Phases worth a full run.
+std::vector<double> StartUp::candidates_deg() {
   const double span_deg = rising_.network().half_period_signs.empty() ? 360 : 180;
-  std::vector<Phase> phases;
-  double gain_V = 0;  // a period
-  for (double deg = 0; deg < span_deg - 1e-9; deg += kStep_deg) {
-    RunPoint at;
-    at.time_s = deg / 360 * period_s;
-    Extremes rail;
-    if (!rising_.advance(2 * period_s - at.time_s, at, &rail)) {
-      Start failed;
-      failed.reason = rising_.fault();
-      return failed;
-    }
-    phases.push_back({deg, reservoir_V(at), 0});
-    if (deg > 0) continue;
-    if (rail.high < std::max(required_V_, turn_on_V_) && rising_.advance(period_s, at)) {
-      gain_V = reservoir_V(at) - phases.front().reservoir_V;
-    }
+  const double gain = gain_V();
+  std::vector<double> phases_deg;
+  for (double deg = 0; deg < span_deg - 1e-9; deg += kStep_deg) phases_deg.push_back(deg);
+  if (!(gain > 0)) return phases_deg;
+  std::vector<std::pair<double, double>> ranked;  // what is behind (in turns, negated), phase
+  const auto rank = [&](double deg) { ranked.push_back({deg / 360 + charged_V(deg) / gain, deg}); };
+  for (const double deg : phases_deg) rank(deg);
+  std::sort(ranked.begin(), ranked.end());
+  const double last_deg = ranked.front().second;
+  for (const double beside_deg : {last_deg + 0.5 * kStep_deg, last_deg - 0.5 * kStep_deg}) {
+    rank(beside_deg < 0 ? beside_deg + 360 : beside_deg);
   }
-  runs_ += static_cast<int>(phases.size());
-  if (gain_V > 0) {
-    for (Phase& p : phases) p.behind_s = -(p.deg / 360 + p.reservoir_V / gain_V) * period_s;
-    std::stable_sort(phases.begin(), phases.end(),
-                     [](const Phase& a, const Phase& b) { return a.behind_s > b.behind_s; });
-    phases.resize(std::min<std::size_t>(phases.size(), kFinalists));
-  }
+  std::sort(ranked.begin(), ranked.end());
+  phases_deg.clear();
+  for (int k = 0; k < kFinalists; ++k) phases_deg.push_back(ranked[static_cast<std::size_t>(k)].second);
+  return phases_deg;
+}
+
+StartUp::Start StartUp::worst(double give_up_s) {
   Start worst;
-  const auto longer = [&](const Start& other) {
-    if (!other.usable) return true;
-    if ((other.end == End::reached) != (worst.end == End::reached)) return other.end != End::reached;
-    return other.time_s > worst.time_s;
-  };
-  for (const Phase& p : phases) {
-    const Start tried = at(p.deg, give_up_s);
-    if (&p == &phases.front() || longer(tried)) worst = tried;
-    if (!worst.usable || worst.end != End::reached) return worst;
-  }
-  const double centre_deg = worst.phase_deg;
-  for (const double deg : {centre_deg - 5, centre_deg + 5}) {
-    const Start tried = at(deg < 0 ? deg + 360 : deg, give_up_s);
-    if (longer(tried)) worst = tried;
+  bool first = true;
+  for (const double deg : candidates_deg()) {
+    const Start tried = at(deg, give_up_s);
+    if (first || tried.longer_than(worst)) worst = tried;
+    if (!worst.usable || worst.outcome != Outcome::reached) return worst;
+    first = false;
   }
   return worst;
+}
+
+bool StartUp::Start::longer_than(const Start& other) const {
+  if (!usable || !other.usable) return !usable;
+  const bool never = outcome != Outcome::reached, other_never = other.outcome != Outcome::reached;
+  return never != other_never ? never : time_s > other.time_s;
 }
 
 }  // namespace dropfront::circuit

@@ -104,7 +104,7 @@ void read_limits(const Cursor& cursor, Problem& problem) {
   limits.current_margin = quantity_or(problem, reader, "current_margin", Unit::share, {0, 10, false}, 0,
                                       "the worst case already holds ageing and tolerances");
   limits.start_time_s =
-      quantity_or_none(problem, reader, "start_time", Unit::second, kPositive, "absent: no check");
+      quantity_or_none(problem, reader, "start_time", Unit::second, {0, 600, true}, "absent: no check");
   if (limits.start_time_s) caution_unless(checks("supply.start_time"), "limits.start_time", problem);
   limits.discharge = read_discharge(reader, problem);
   if (const auto surge = reader.take("surge")) {

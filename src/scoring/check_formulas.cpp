@@ -13,9 +13,22 @@ std::string_view check_formula(std::string_view id) {
        "available_rail_current_A - overhead_current_A (step-down: greatest of efficiency x (I - "
        "overhead_current_A) x rail minimum / output voltage over rail currents I), available_rail_current_A "
        "the largest steady rail current whose rail minimum reaches required_rail_V"},
+      {"supply.burst",
+       "least rail while the load is greater by burst_A for burst_s, and after, never above "
+       "steady_rail_min_V >= "
+       "greater of required_rail_V and the burst's min_voltage"},
       {"supply.start",
        "largest steady rail current whose rail minimum reaches starting_rail_V >= start_load_A (step-down: "
        "output voltage x start_load_A / (efficiency x starting_rail_V)) + overhead_current_A"},
+      {"supply.start_time",
+       "last moment at which the rail is below required_rail_V, from switching on with empty capacitors <= "
+       "limit; load start_load_A (step-down: its power, from turn_on_V on) and overhead_current_A"},
+      {"supply.stable",
+       "least rail of the last 32 of 64 periods from 0.99 x the steady state's capacitor voltages >= "
+       "required_rail_V; steady_rail_min_V where nothing can keep a kick alive"},
+      {"supply.dip",
+       "least rail while the line is residual_share of itself, or open, for cycles periods, and after, never "
+       "above steady_rail_min_V >= required_rail_V"},
       {"rail.max",
        "greatest steady rail without series diode drop <= least of reservoir_rated_voltage_V x derating and "
        "input_max_V"},

@@ -7,10 +7,14 @@
 #include <utility>
 #include <vector>
 
+#include "dropfront/scoring/dips.hpp"
 #include "dropfront/scoring/evidence.hpp"
 #include "dropfront/scoring/lean_search.hpp"
+#include "dropfront/scoring/load_bursts.hpp"
 #include "dropfront/scoring/point_solver.hpp"
 #include "dropfront/scoring/recipes.hpp"
+#include "dropfront/scoring/stability.hpp"
+#include "dropfront/scoring/start_up.hpp"
 
 namespace dropfront::scoring {
 
@@ -106,6 +110,16 @@ struct Evidence::Impl {
   std::vector<OperatingPoint> rich_loads;
   std::optional<PlugInAnswer> plug_in;
   std::optional<SurgeAnswer> surge;
+  /// Runs from the lean corner; see evidence_events.cpp.
+  struct Events {
+    std::vector<OperatingPoint> heaviest;
+    std::optional<LeanRuns> runs;
+    std::optional<std::vector<BurstAnswer>> bursts;
+    std::optional<DipAnswer> dip;
+    std::optional<StartUpAnswer> start_up;
+    std::optional<StabilityAnswer> stability;
+  } events;
+  const LeanRuns& lean_runs();
   std::optional<std::optional<double>> margin_new;
   int transients = 0;
 };

@@ -29,12 +29,6 @@ Trial set_up(const LeanRuns& runs, const LeanEvent& event, const OperatingPoint&
   return trial;
 }
 
-circuit::Disturbance disturbance(const LeanRuns& runs, const LeanEvent& event, const Trial& trial) {
-  auto during = trial.values;
-  event.disturb(during);
-  return {runs.network(trial.values), runs.network(during), event.duration_s, trial.start, runs.required_V()};
-}
-
 EventAnswer answer_of(const LeanRuns& runs, const Trial& trial, const circuit::Disturbance::Least& least) {
   EventAnswer answer;
   answer.usable = trial.start.usable() && least.usable;
@@ -52,22 +46,20 @@ EventAnswer answer_of(const LeanRuns& runs, const Trial& trial, const circuit::D
   return answer;
 }
 
-/// One trial at one phase.
-EventAnswer at_phase(const LeanRuns& runs, const LeanEvent& event, const Trial& trial, double phase_deg) {
-  if (!trial.start.usable()) return answer_of(runs, trial, {});
-  auto disturbed = disturbance(runs, event, trial);
-  const auto least = disturbed.at(phase_deg);
-  *runs.transients += disturbed.runs();
-  return answer_of(runs, trial, least);
-}
+enum class Search { at_phase, whole_grid, around_phase };
 
-/// One trial at its worst phase (near one if given), repeated if the event is.
-EventAnswer at_worst(const LeanRuns& runs, const LeanEvent& event, const Trial& trial,
-                     std::optional<double> near_deg) {
+/// One trial: at one phase, over all, or refined around one and then repeated if the event is.
+EventAnswer run(const LeanRuns& runs, const LeanEvent& event, const Trial& trial, Search search,
+                double phase_deg) {
   if (!trial.start.usable()) return answer_of(runs, trial, {});
-  auto disturbed = disturbance(runs, event, trial);
-  auto least = disturbed.worst(near_deg);
-  if (least.usable && event.every_s) {
+  auto during = trial.values;
+  event.disturb(during);
+  circuit::Disturbance disturbed(runs.network(trial.values), runs.network(during), event.duration_s,
+                                 trial.start, runs.required_V());
+  auto least = search == Search::at_phase     ? disturbed.at(phase_deg)
+               : search == Search::whole_grid ? disturbed.worst_of_grid()
+                                              : disturbed.worst_around(phase_deg);
+  if (search == Search::around_phase && least.usable && event.every_s) {
     const auto repeated = disturbed.repeated(least.phase_deg, *event.every_s);
     if (!repeated.usable || repeated.rail_V < least.rail_V || !repeated.recovers) least = repeated;
   }
@@ -75,27 +67,22 @@ EventAnswer at_worst(const LeanRuns& runs, const LeanEvent& event, const Trial& 
   return answer_of(runs, trial, least);
 }
 
-/// The ends of a trial with each one turned that lowers the rail at this phase.
-LeanEnds worse_ends(const LeanRuns& runs, const LeanEvent& event, const Trial& trial, double rail_V,
+/// The ends with each one turned that lowers the rail at this phase.
+LeanEnds worse_ends(const LeanRuns& runs, const LeanEvent& event, const LeanEnds& ends, double rail_V,
                     double phase_deg) {
   const auto& design = runs.points->design();
-  LeanEnds worse = trial.ends;
+  LeanEnds worse = ends;
   for (const auto member : {&LeanEnds::series_resistor, &LeanEnds::esr, &LeanEnds::discharge}) {
     if (member == &LeanEnds::discharge && (design.discharge == nullptr || design.discharge_count <= 0)) {
       continue;
     }
-    LeanEnds turned = trial.ends;
+    LeanEnds turned = ends;
     turned.*member = flipped(turned.*member);
-    const auto answer = at_phase(runs, event, set_up(runs, event, *trial.settled, turned), phase_deg);
+    const auto trial = set_up(runs, event, *runs.heaviest.front(), turned);
+    const auto answer = run(runs, event, trial, Search::at_phase, phase_deg);
     if (answer.usable && answer.rail_min_V < rail_V - kLower_V) worse.*member = turned.*member;
   }
   return worse;
-}
-
-EventAnswer lower(EventAnswer first, EventAnswer second) {
-  if (!first.usable) return first;
-  if (!second.usable) return second;
-  return second.rail_min_V < first.rail_min_V ? std::move(second) : std::move(first);
 }
 
 }  // namespace
@@ -104,7 +91,7 @@ std::string LeanRuns::fault() const {
   for (const auto* point : heaviest) {
     if (!point->state.usable()) return point->state.reason;
   }
-  return heaviest.empty() ? "the lean corner has no answer" : "";
+  return heaviest.empty() && reason.empty() ? "the lean corner has no answer" : reason;
 }
 
 circuit::ElementValues LeanRuns::values(const OperatingPoint& settled, const LeanEnds& at,
@@ -130,27 +117,37 @@ circuit::SteadyState LeanRuns::steady(const circuit::ElementValues& values,
   return points->steady(flat, kRailOnly, &settled.state.start);
 }
 
-EventAnswer worst_event(const LeanRuns& runs, const LeanEvent& event) {
+EventAnswer worst_event(const LeanRuns& runs, const std::vector<LeanEvent>& events) {
   EventAnswer worst;
   worst.reason = runs.fault();
   if (!worst.reason.empty()) return worst;
   LeanEnds ends = runs.ends;
   ends.esr = End::high;
-  const auto first = set_up(runs, event, *runs.heaviest.front(), ends);
-  worst = at_worst(runs, event, first, std::nullopt);
-  if (!worst.usable) return worst;
-  const LeanEnds turned = worse_ends(runs, event, first, worst.rail_min_V, worst.phase_deg);
-  if (turned != ends) {
-    ends = turned;
-    const auto joined = set_up(runs, event, *runs.heaviest.front(), ends);
-    worst = lower(worst, at_worst(runs, event, joined, worst.phase_deg));
+  std::size_t which = 0;
+  for (std::size_t i = 0; i < events.size(); ++i) {
+    const auto trial = set_up(runs, events[i], *runs.heaviest.front(), ends);
+    auto answer = run(runs, events[i], trial, Search::whole_grid, 0);
+    if (!answer.usable) return answer;
+    if (i > 0 && !(answer.rail_min_V < worst.rail_min_V)) continue;
+    worst = std::move(answer);
+    which = i;
   }
+  const LeanEvent& event = events[which];
+  const OperatingPoint* where = runs.heaviest.front();
+  const auto lower = [&](const OperatingPoint& settled, const LeanEnds& at) {
+    auto answer = run(runs, event, set_up(runs, event, settled, at), Search::at_phase, worst.phase_deg);
+    if (answer.usable && !(answer.rail_min_V < worst.rail_min_V)) return false;
+    worst = std::move(answer);
+    return true;
+  };
+  const LeanEnds turned = worse_ends(runs, event, ends, worst.rail_min_V, worst.phase_deg);
+  if (turned != ends && lower(*where, turned)) ends = turned;
   for (std::size_t i = 1; i < runs.heaviest.size() && worst.usable; ++i) {
-    const auto other = set_up(runs, event, *runs.heaviest[i], ends);
-    const auto there = at_phase(runs, event, other, worst.phase_deg);
-    if (there.usable && !(there.rail_min_V < worst.rail_min_V)) continue;
-    worst = lower(worst, there.usable ? at_worst(runs, event, other, worst.phase_deg) : there);
+    if (lower(*runs.heaviest[i], ends)) where = runs.heaviest[i];
   }
+  if (!worst.usable) return worst;
+  worst = run(runs, event, set_up(runs, event, *where, ends), Search::around_phase, worst.phase_deg);
+  worst.event = which;
   worst.phase_deg = std::fmod(worst.phase_deg, 360);
   return worst;
 }

@@ -30,7 +30,7 @@ BurstAnswer try_burst(const LeanRuns& runs, const LoadProfile& loads, const Load
   answer.duration_s = *burst.duration_s;
   answer.required_V = runs.required_V();
   if (burst.at_rail) answer.required_V = std::max(answer.required_V, burst.min_voltage_V.value_or(0));
-  answer.worst = worst_event(runs, event);
+  answer.worst = worst_event(runs, {event});
   return answer;
 }
 

@@ -27,13 +27,6 @@ circuit::StartUp start_up(const LeanRuns& runs, const circuit::ElementValues& va
           stage.input_off_V.value_or(0), runs.required_V()};
 }
 
-bool longer(const circuit::StartUp::Start& a, const circuit::StartUp::Start& b) {
-  using End = circuit::StartUp::End;
-  if (!a.usable || !b.usable) return !a.usable;
-  if ((a.end == End::reached) != (b.end == End::reached)) return a.end != End::reached;
-  return a.time_s > b.time_s;
-}
-
 }  // namespace
 
 StartUpAnswer try_start(const LeanRuns& runs, double beside_A, double give_up_s) {
@@ -48,22 +41,15 @@ StartUpAnswer try_start(const LeanRuns& runs, double beside_A, double give_up_s)
     const bool first = settled == runs.heaviest.front();
     const auto values = start_values(runs, *settled, load);
     auto starter = start_up(runs, values);
-    auto start = first ? starter.worst(give_up_s) : starter.at(answer.start.phase_deg, give_up_s);
-    // Longer at the other ambient: there too the phases beside it.
-    for (const double aside_deg : {5.0, 355.0}) {
-      if (first || !longer(start, answer.start)) break;
-      const double phase_deg = answer.start.phase_deg + aside_deg;
-      const auto beside = starter.at(phase_deg < 360 ? phase_deg : phase_deg - 360, give_up_s);
-      if (longer(beside, start)) start = beside;
-    }
+    const auto start = first ? starter.worst(give_up_s) : starter.at(answer.start.phase_deg, give_up_s);
     *runs.transients += starter.runs();
-    if (!first && !longer(start, answer.start)) continue;
+    if (!first && !start.longer_than(answer.start)) continue;
     answer.start = start;
     answer.ambient_degC = settled->ambient_degC;
     answer.values = values;
     answer.local_degC = settled->local_degC;
     answer.clamp_junction_degC = settled->clamp_junction_degC;
-    if (!start.usable || start.end != circuit::StartUp::End::reached) break;
+    if (!start.usable || start.outcome != circuit::StartUp::Outcome::reached) break;
   }
   answer.usable = answer.start.usable;
   answer.reason = answer.start.reason;

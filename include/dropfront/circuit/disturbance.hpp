@@ -1,5 +1,4 @@
 #pragma once
-#include <optional>
 #include <string>
 #include <vector>
 
@@ -30,13 +29,16 @@ class Disturbance {
   /// steady one.
   Least at(double phase_deg);
 
-  /// Begun at the worst phase: every 10 degrees (half a turn where the network has half-wave symmetry; two
-  /// turns where it alternates from cycle to cycle), each run until a period after the end; the three lowest
-  /// are run to the end; then golden section around the lowest. A disturbance of more than two periods under
-  /// mains is ranked by one as many whole periods shorter as leave one to two: it begins and ends at the same
-  /// phases, and what differs between phases is the dropper's charge, which the first crest settles.
-  /// `near_deg`: only the phases within 30 degrees of this one are looked at (a neighbouring case's worst).
-  Least worst(std::optional<double> near_deg = {});
+  /// Begun at the worst place of a grid of 10 degrees (over half a turn where the network has half-wave
+  /// symmetry, over two where it alternates from cycle to cycle): every second place, then those beside the
+  /// three lowest, each run until a period after the end (half a period with the symmetry); the lowest is run
+  /// to the end, the next two as well unless that took the rail no lower. A disturbance of more than two
+  /// periods under mains is ranked by one as many whole periods shorter as leave one to two: it begins and
+  /// ends at the same phases, and what differs between phases is the dropper's charge, which the first crest
+  /// settles.
+  Least worst_of_grid();
+  /// Begun at the worst phase within a step of the grid of this one, by golden section.
+  Least worst_around(double phase_deg);
 
   /// Begun at one phase again and again, every `every_s` (>= the duration): the least rail until the
   /// reservoir is back on its orbit before the next, or the minima repeat themselves. Intervals of two mains
@@ -51,10 +53,12 @@ class Disturbance {
   double span_deg() const { return 180.0 * turns_of_two_; }
   double time_of(double phase_deg) const;
   bool still() const;
+  bool whole() const;
   bool on_orbit(double phase_deg, RunPoint& at);
   bool back(const RunPoint& at, const RunPoint& before) const;
   bool sample_grid();
   Least begun(double phase_deg, double duration_s, bool to_the_end);
+  Least ranked(double phase_deg);
   bool disturb(double duration_s, RunPoint& at, Extremes& rail);
   bool recover(RunPoint& at, bool to_the_end, Extremes& rail, Least& least);
   Least failed(double phase_deg) const;

@@ -19,10 +19,10 @@ struct DipAnswer {
   EventAnswer worst;
 };
 
-/// Tries each dip of the limits from the lean steady state at the heaviest sustained load: the line's low
-/// end, which is harder than the rated voltage that IEC 61000-4-11 tests at; residual voltages are shares of
-/// it. A generator keeps a zero-ohm source of the residual voltage, harmonics included; an interruption (0 %)
-/// is tried with the line opened too. The mains phase runs on, and comes back at once.
-std::vector<DipAnswer> try_dips(const LeanRuns& runs, const LoadProfile& loads);
+/// The worst of the limits' dips (at least one), from the lean steady state at the heaviest sustained load:
+/// the line's low end, which is harder than the rated voltage that IEC 61000-4-11 tests at; residual voltages
+/// are shares of it. A generator keeps a zero-ohm source of the residual voltage, harmonics included; an
+/// interruption (0 %) is tried with the line opened too. The mains phase runs on, and comes back at once.
+DipAnswer try_dips(const LeanRuns& runs, const LoadProfile& loads);
 
 }  // namespace dropfront::scoring

@@ -15,6 +15,11 @@
 
 namespace dropfront::scoring {
 
+struct BurstAnswer;      // load_bursts.hpp
+struct DipAnswer;        // dips.hpp
+struct StabilityAnswer;  // stability.hpp
+struct StartUpAnswer;    // start_up.hpp
+
 /// The corners of one design on one supply, each solved once, when first asked for. What a corner holds does
 /// not depend on which others were asked for, nor in which order.
 /// The design must have arrangement, dropper, series resistor, clamp, reservoir, rectifier and output stage.
@@ -54,10 +59,10 @@ class Evidence {
   double margin_ceiling_A();
 
   const OperatingPoint& nominal();
-  const OperatingPoint& rich_empty();      ///< the ambient with the greatest rail (rail_greatest_V)
-  const OperatingPoint& rich_empty_hot();  ///< the same load at the high ambient, for powers
+  const OperatingPoint& rich_empty();       ///< the ambient with the greatest rail (rail_greatest_V)
+  const OperatingPoint& rich_empty_hot();   ///< the same load at the high ambient, for powers
   const OperatingPoint& rich_empty_cold();  ///< at the low ambient: more film capacitance, low zeners higher
-  const OperatingPoint& rich_loaded();     ///< of rich_loads(), the one with the greatest input power
+  const OperatingPoint& rich_loaded();      ///< of rich_loads(), the one with the greatest input power
   /// Rich loaded from no load to the heaviest, in that order: stresses that grow with load are worst at the
   /// last, powers somewhere between. A check takes the worst of these.
   const std::vector<OperatingPoint>& rich_loads();
@@ -65,6 +70,11 @@ class Evidence {
   const OperatingPoint& standby_worst();  ///< production worst: the standby objective
   const PlugInAnswer& plug_in();
   const SurgeAnswer& surge();  ///< only where limits.surge is given
+  const std::vector<BurstAnswer>& load_bursts();  ///< one a burst of the load profile
+  const DipAnswer& dip();                         ///< the worst of limits.dips, of which there must be one
+  /// Given up after twice limits.start_time_s, which must be set.
+  const StartUpAnswer& start_up();
+  const StabilityAnswer& stability();
 
   /// Available rail current with the values of `point` (its own V_required at nominal). Absent: no answer.
   std::optional<double> available_A(const OperatingPoint& point);

@@ -16,6 +16,7 @@ struct LeanRuns {
   LeanEnds ends;                                ///< that decide the available current
   std::vector<const OperatingPoint*> heaviest;  ///< at those ends, one an ambient, the deciding one first
   int* transients = nullptr;                    ///< counts runs
+  std::string reason;                           ///< why the corner has no answer; empty: it has
 
   double required_V() const { return points->required_V(); }
   const parts::OutputStage& stage() const { return *points->design().output_stage; }
@@ -43,6 +44,7 @@ struct LeanEvent {
 struct EventAnswer {
   bool usable = false;
   std::string reason;
+  std::size_t event = 0;  ///< of those tried
   double rail_min_V = 0;
   double steady_min_V = 0;  ///< before it
   double phase_deg = 0;     ///< of the mains as it begins, 0 to 360
@@ -54,10 +56,11 @@ struct EventAnswer {
   double clamp_junction_degC = 25;
 };
 
-/// The worst of an event over phases, both ambients and both ends of series resistor, ESR and discharge
-/// chain. All phases are searched at the deciding ambient and ends with the ESR high. At the worst one each
-/// end is turned, then those that lower the rail together; then the other ambient is tried. Where one of
-/// these is lower, the phases around are searched anew.
-EventAnswer worst_event(const LeanRuns& runs, const LeanEvent& event);
+/// The worst of several events over phases, both ambients and both ends of series resistor, ESR and discharge
+/// chain. For each event the grid of phases is searched at the deciding ambient and ends with the ESR high.
+/// For the one with the lowest rail each end is turned at that phase, then those that lower the rail
+/// together, then the other ambient is tried; the phase is refined last (what moves the worst phase a little
+/// moves the rail there by its square).
+EventAnswer worst_event(const LeanRuns& runs, const std::vector<LeanEvent>& events);
 
 }  // namespace dropfront::scoring

@@ -12,6 +12,10 @@ using CheckFunction = std::optional<Check>(Evidence& evidence);
 
 CheckFunction supply_margin;
 CheckFunction supply_start;
+CheckFunction supply_start_time;
+CheckFunction supply_burst;
+CheckFunction supply_stable;
+CheckFunction supply_dip;
 CheckFunction rail_max;
 CheckFunction rail_transient;
 CheckFunction output_band;
