@@ -7,11 +7,11 @@ namespace dropfront::scoring {
 const std::vector<CheckRule>& check_table() {
   static const std::vector<CheckRule> table{
       {"supply.margin", Tier::lean, supply_margin},
-      {"supply.burst", Tier::transient, supply_burst},
+      {"supply.burst", Tier::events, supply_burst},
       {"supply.start", Tier::lean, supply_start},
-      {"supply.start_time", Tier::transient, supply_start_time},
-      {"supply.stable", Tier::transient, supply_stable},
-      {"supply.dip", Tier::transient, supply_dip},
+      {"supply.start_time", Tier::events, supply_start_time},
+      {"supply.stable", Tier::events, supply_stable},
+      {"supply.dip", Tier::events, supply_dip},
       {"rail.max", Tier::steady, rail_max},
       {"rail.transient", Tier::transient, rail_transient},
       {"output.band", Tier::steady, output_band},

@@ -177,8 +177,10 @@ bool run_stages(Score& score, Depth depth, const Stop& stop, const Evidences& ev
     return run_tier(Tier::steady, evidences, stop_at_failure, found) &&
            run_tier(Tier::transient, evidences, stop_at_failure, found);
   };
+  const auto events = [&] { return run_tier(Tier::events, evidences, stop_at_failure, found); };
   if (depth == Depth::screen) return lean() && false;
-  return stop_at_failure && margin_is_dear(evidences) ? others() && lean() : lean() && others();
+  const bool last = stop_at_failure && margin_is_dear(evidences);
+  return (last ? others() && lean() : lean() && others()) && events();
 }
 
 }  // namespace

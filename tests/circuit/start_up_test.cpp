@@ -56,6 +56,7 @@ TEST_CASE("The start takes the charge of the reservoir over the mean current") {
 
 TEST_CASE("The start grows with the reservoir and the load and shrinks with the dropper") {
   for (const auto& arrangement : arrangements()) {
+    if (!arrangement.dropper) continue;  // these values are a dropper's
     const auto time_s = [&](double reservoir_F, double load_A, double dropper_F) {
       ElementValues v = ordinary_values();
       v.reservoir_F = reservoir_F;
@@ -75,6 +76,7 @@ TEST_CASE("The start grows with the reservoir and the load and shrinks with the 
 
 TEST_CASE("No phase of switching on that was tried by hand takes longer than the worst found") {
   for (const auto& arrangement : arrangements()) {
+    if (!arrangement.dropper) continue;  // these values are a dropper's
     ElementValues v = ordinary_values();
     v.rail_current_A = 8e-3;
     auto starter = start_up(arrangement, v, 9);

@@ -8,8 +8,9 @@
 
 namespace dropfront::scoring {
 
-/// What a check costs, so that cheap ones run first.
-enum class Tier { list, lean, standby, steady, transient };
+/// What a check costs, so that cheap ones run first: `transient` a few short runs, `events` some hundred
+/// periods.
+enum class Tier { list, lean, standby, steady, transient, events };
 
 /// One check. Adding a check is one small file in scoring/checks/, its line in
 /// scoring/checks/checks.hpp, in check_table.cpp and in check_formulas.cpp.

@@ -26,7 +26,7 @@ std::vector<MemberFigures> figures_of(const Design& member, const BoundContext& 
     for (const auto& rule : check_table()) {
       const auto check = rule.evaluate(evidence);
       Use use;
-      if (!solved && (rule.tier == Tier::steady || rule.tier == Tier::transient)) {
+      if (!solved && rule.tier >= Tier::steady) {
         figures.uses.push_back(use);
         continue;
       }
