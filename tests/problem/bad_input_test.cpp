@@ -114,7 +114,7 @@ TEST_CASE("values of the wrong type or kind are refused with what is allowed") {
       {"[\"lists\"]", "[\"lists\"], \"limits\": {\"start_time\": @\"-1 s\"}", "/limits/start_time",
        "above 0 s", true},
       {"[\"lists\"]", "[\"lists\"], \"limits\": {\"start_time\": @\"1 h\"}", "/limits/start_time",
-       "at most 600 s", true},
+       "at most 10 min", true},
       {"\"8 mA\"", "\"8 mA\", \"for\": @0", "/output/loads/1/for", "above 0 s"},
       {"\"8 mA\"", "\"8 mA\", \"every\": @\"1 s\"", "/output/loads/1/every", "without \"for\""},
       {"\"8 mA\"", "\"8 mA\", \"min_voltage\": @\"9 V\"", "/output/loads/1/min_voltage", "at the output"},

@@ -5,8 +5,7 @@
 #include <cmath>
 
 #include "dropfront/circuit/disturbance.hpp"
-#include "dropfront/scoring/evidence.hpp"
-#include "dropfront/scoring/load_bursts.hpp"
+#include "dropfront/scoring/lean_search.hpp"
 #include "scoring/checks/judge.hpp"
 #include "support/catch.hpp"
 

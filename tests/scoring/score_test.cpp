@@ -203,6 +203,6 @@ TEST_CASE("A whole worst-case score takes a bounded number of steady states") {
     const auto result = score(example.design(), example.requirement, Depth::compliant);
     INFO(wiring.name << ": " << result.steady_states << " and " << result.transients << " transients");
     REQUIRE(result.steady_states <= 90);
-    REQUIRE(result.transients <= 8);
+    REQUIRE(result.transients <= 10);  // eight plug-ins, and a shunt's kick at both ambients
   }
 }
