@@ -26,7 +26,7 @@ const LeanRuns& Evidence::Impl::lean_runs() {
   events.heaviest.push_back(lean_point(hot));
   if (!one_ambient() && events.heaviest.front().state.usable()) {
     auto other = points.solve(hot ? "lean_cold" : "lean_hot", runs->solver->recipe(runs->ends),
-                              heaviest(true), ambient_degC(!hot), &events.heaviest.front());
+                              heaviest(true, End::high), ambient_degC(!hot), &events.heaviest.front());
     other.ends = ends_text(runs->ends, bled());
     events.heaviest.push_back(std::move(other));
   }

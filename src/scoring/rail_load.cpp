@@ -9,7 +9,7 @@ RailLoad rail_load(const parts::OutputStage& stage, double output_A, double besi
   const double own_A = beside_A + quiescent_A(stage, quiescent);
   const double efficiency = stage.efficiency.value_or(0);
   if (stage.kind != parts::StageKind::step_down || !(efficiency > 0)) return {own_A + output_A, 0};
-  return {own_A, stage.output_voltage_V * output_A / efficiency};
+  return {own_A, stage_output_V(stage, End::high) * output_A / efficiency};
 }
 
 void hang(const RailLoad& load, const parts::OutputStage& stage, double required_V,

@@ -6,14 +6,19 @@ namespace dropfront::scoring {
 
 namespace {
 
+/// A first start at the low ambient finds nothing warmed yet, one at the high ambient comes after a break.
+Rises start_rises(const LeanRuns& runs, const OperatingPoint& settled) {
+  const auto& ambient = runs.points->requirement().surroundings.ambient_degC;
+  if (settled.ambient_degC != ambient.high) return {};
+  return {settled.local_degC - settled.ambient_degC, settled.clamp_junction_degC - settled.local_degC};
+}
+
 /// Values of the lean corner but for the reservoir, with the load as it is once the stage runs.
 circuit::ElementValues start_values(const LeanRuns& runs, const OperatingPoint& settled,
                                     const RailLoad& load) {
   auto recipe = runs.solver->recipe(runs.ends);
   recipe.reservoir = End::high;
-  const Rises rises{settled.local_degC - settled.ambient_degC,
-                    settled.clamp_junction_degC - settled.local_degC};
-  auto values = runs.points->values(recipe, rises, settled.ambient_degC);
+  auto values = runs.points->values(recipe, start_rises(runs, settled), settled.ambient_degC);
   hang(load, runs.stage(), runs.required_V(), values);
   return values;
 }
@@ -47,8 +52,9 @@ StartUpAnswer try_start(const LeanRuns& runs, double beside_A, double give_up_s)
     answer.start = start;
     answer.ambient_degC = settled->ambient_degC;
     answer.values = values;
-    answer.local_degC = settled->local_degC;
-    answer.clamp_junction_degC = settled->clamp_junction_degC;
+    const auto warm = start_rises(runs, *settled).over(settled->ambient_degC);
+    answer.local_degC = warm.local_degC;
+    answer.clamp_junction_degC = warm.clamp_junction_degC;
     if (!start.usable || start.outcome != circuit::StartUp::Outcome::reached) break;
   }
   answer.usable = answer.start.usable;

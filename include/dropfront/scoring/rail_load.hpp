@@ -9,7 +9,7 @@ namespace dropfront::scoring {
 /// the current at its trough.
 struct RailLoad {
   double current_A = 0;  ///< constant: the whole load, or of a step-down stage all but its power
-  double power_W = 0;    ///< constant power, of a step-down stage only: V_out·I_out/eta
+  double power_W = 0;    ///< constant power, of a step-down stage only: V_out·(1 + tol)·I_out/eta
 };
 
 /// Load of `output_A` at the output with `beside_A` (leakage, rail loads) and the stage's quiescent current.
