@@ -146,8 +146,7 @@ TEST_CASE("a disk that refuses is status 3") {
 
 TEST_CASE("an interrupted run ends with status 130 and what it found is written") {
   const Workshop shop;
-  const auto finished =
-      shop.run_interrupted({"search", kSmall, "problems/sensor-family.json", "--effort", "deep"}, "Files: ");
+  const auto finished = shop.run_interrupted({"search", kSmall, "problems/sensor-family.json"}, "Files: ");
   CHECK(finished.status == 130);
   CHECK(shop.exists("results/small/candidates.json"));
   for (const auto& file : shop.files_below("results")) {
