@@ -233,9 +233,9 @@ TEST_CASE("A constant power past what the rail can carry never comes back from a
   v.rail_power_W = 0.16;
   v.power_from_V = 4;
   v.power_to_V = 14;
-  auto brief = disturb(half_wave(), v, dipped(v, 0), 0.5 * kPeriod_s);
-  auto lengthy = disturb(half_wave(), v, dipped(v, 0), 6 * kPeriod_s);
-  const auto survived = brief.at(0), lost = lengthy.at(0);
+  auto short_one = disturb(half_wave(), v, dipped(v, 0), 0.5 * kPeriod_s);
+  auto long_one = disturb(half_wave(), v, dipped(v, 0), 6 * kPeriod_s);
+  const auto survived = short_one.at(0), lost = long_one.at(0);
   REQUIRE(survived.recovers);
   REQUIRE(survived.rail_V > 9);
   REQUIRE(lost.usable);
