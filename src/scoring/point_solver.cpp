@@ -12,7 +12,7 @@ namespace {
 constexpr double kTemperatureTolerance_K = 0.05;
 constexpr double kCurrentTolerance = 1e-6;
 constexpr int kMostPasses = 12;
-constexpr double kHottest_degC = 1000;  // only keeps a hopeless design's figures finite
+constexpr double kCeiling_degC = 1000;  // only keeps a hopeless design's figures finite
 
 /// Rail maximum with no drop between a clamp ahead and the rail. Back to back, the zener in its forward
 /// direction carries the full current: its drop does not shrink by the 0.3 V of an idle diode.
@@ -26,8 +26,8 @@ double greatest_rail_V(const circuit::Arrangement& wiring, const circuit::Elemen
 }  // namespace
 
 Temperatures Rises::over(double ambient_degC) const {
-  const double local_degC = std::min(kHottest_degC, ambient_degC + local_K);
-  return {local_degC, std::min(kHottest_degC, local_degC + junction_K)};
+  const double local_degC = std::min(kCeiling_degC, ambient_degC + local_K);
+  return {local_degC, std::min(kCeiling_degC, local_degC + junction_K)};
 }
 
 PointSolver::PointSolver(const Design& design, const Requirement& requirement, double required_V)
