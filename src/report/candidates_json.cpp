@@ -3,6 +3,7 @@
 #include <algorithm>
 #include <nlohmann/json.hpp>
 
+#include "dropfront/report/arrangements.hpp"
 #include "dropfront/report/confirmation_json.hpp"
 #include "dropfront/report/conflict_json.hpp"
 #include "dropfront/report/design_json.hpp"
@@ -142,6 +143,8 @@ std::string candidates_json(const Result& result) {
   write_ranked(json, result);
   json.key("extras");
   write_entries(json, result.extras);
+  json.key("arrangements");
+  write_arrangements(json, result.arrangements);
   json.key("evidence");
   write_evidence(json, result);
   json.key("near_misses");

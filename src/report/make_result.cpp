@@ -6,6 +6,7 @@
 #include <map>
 #include <thread>
 
+#include "dropfront/report/arrangements.hpp"
 #include "dropfront/report/cautions.hpp"
 #include "dropfront/report/second_sources.hpp"
 
@@ -181,6 +182,7 @@ Result make_result(const problem::BoundProblem& bound, const search::SearchOutco
     if (miss.check >= 0 && miss.check < static_cast<int>(names.size()))
       result.near_misses.push_back({bound.design(miss.choice), names[miss.check], miss.shortfall,
                                     check_of(scorer, bound.design(miss.choice), names[miss.check])});
+  result.arrangements = arrangements_of(result, scorer);
   if (result.front.empty()) add_conflict(result, bound, scorer, outcome);
   return result;
 }

@@ -5,6 +5,7 @@
 #include <algorithm>
 #include <set>
 
+#include "dropfront/report/arrangements.hpp"
 #include "dropfront/report/confirmation_text.hpp"
 #include "dropfront/report/conflict_text.hpp"
 #include "dropfront/report/for_people.hpp"
@@ -56,6 +57,8 @@ std::string summary_body(const Result& result) {
   if (const std::string prices = prices_text(result); !prices.empty()) text += '\n' + prices;
   if (const std::string near = near_misses_text(result, 3); !near.empty())
     text += "\nMissed by one limit only, the nearest\n" + near;
+  if (const auto compared = arrangements_text(result.arrangements); !compared.empty())
+    text += '\n' + compared;
   return text + "\n" +
          wrapped(
              "Margin: output current to spare in the worst case at the end of life. Standby: nominal "

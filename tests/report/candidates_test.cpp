@@ -63,8 +63,8 @@ TEST_CASE("candidates.json has the promised keys in their order") {
   const auto document = Json::parse(candidates_json(m.result));
   CHECK(keys_of(document) == std::vector<std::string>{"format", "title", "name", "status", "problem",
                                                       "provenance", "counts", "proof", "front", "ranked",
-                                                      "extras", "evidence", "near_misses", "prices",
-                                                      "conflict", "cautions"});
+                                                      "extras", "arrangements", "evidence", "near_misses",
+                                                      "prices", "conflict", "cautions"});
   CHECK(document["name"] == "towel-rail-timer");
   CHECK(document["status"] == "done");
   CHECK(document["problem"]["title"] == document["title"]);

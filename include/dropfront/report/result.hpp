@@ -35,6 +35,17 @@ struct Entry {
   std::vector<Alternative> alternatives;  ///< second sources
 };
 
+/// The front member of one arrangement with the least standby loss, at work: what an arrangement gains asleep
+/// and what it costs awake. First supply where there are several; nominal values.
+struct ArrangementBest {
+  std::string arrangement;
+  int number = 0;
+  std::optional<double> standby_loss_W;  ///< the objective
+  double asleep_input_W = 0, awake_input_W = 0;
+  double awake_ripple_Vpp = 0;
+  std::optional<double> firing_spike_A;  ///< drawn from the line at every firing; shunts only
+};
+
 struct RankedList {
   std::string name;  ///< cheapest, lowest_standby, smallest, most_margin, balanced
   std::vector<int> numbers;
@@ -54,6 +65,7 @@ struct Result {
   std::vector<Entry> front;
   std::vector<Entry> extras;  ///< ranked, not on the front
   std::vector<RankedList> ranked;
+  std::vector<ArrangementBest> arrangements;  ///< of each arrangement on the front, where there are several
   struct NearMiss {
     scoring::Design design;
     std::string check;

@@ -1,0 +1,19 @@
+#pragma once
+#include <string>
+#include <vector>
+
+#include "dropfront/report/json_writer.hpp"
+#include "dropfront/report/result.hpp"
+
+namespace dropfront::report {
+
+/// The front member with the least standby loss of each arrangement; empty with fewer than two arrangements
+/// on the front. Evidence that the result lacks is scored anew.
+std::vector<ArrangementBest> arrangements_of(const Result& result, const scoring::Scorer& scorer);
+
+/// Side by side for people; empty for none.
+std::string arrangements_text(const std::vector<ArrangementBest>& rows);
+
+void write_arrangements(JsonWriter& json, const std::vector<ArrangementBest>& rows);
+
+}  // namespace dropfront::report
