@@ -8,6 +8,7 @@ constexpr auto kExact = BoundClass::exact;
 constexpr auto kTheorem = BoundClass::theorem;
 constexpr const char* kAny = "any box";
 constexpr const char* kCharge = "the four plainly clamped arrangements";
+constexpr const char* kParts = "any arrangement with a dropper";
 constexpr const char* kCrest = "the four plainly clamped arrangements, odd harmonics only";
 constexpr const char* kSeries = "as before, w·Rs·C < 1 over the box";
 constexpr const char* kStandby =
@@ -19,6 +20,12 @@ constexpr const char* kRich =
 constexpr const char* kHeat = "as before, reservoir single";
 constexpr const char* kPulse = "as before, reservoir and clamp single";
 constexpr const char* kSingle = "series resistor, chain, rectifier and ESR single; no step-down stage";
+
+constexpr const char* kShunt = "the thyristor shunts";
+constexpr const char* kShuntStandby =
+    "the thyristor shunts; p <= 0.4, q <= 0.15, peak dropper current >= 3 x the holding current, trigger "
+    "zener "
+    "<= 0.24 of the crest, load <= a quarter of the charge";
 
 BoundRule objective(std::string_view id, BoundClass known, int depth, std::string_view range,
                     bounds::ObjectiveBound* rule) {
@@ -45,9 +52,10 @@ const std::vector<BoundRule>& bound_table() {
       limit("resistor.opens", kAny, bounds::resistor_opens),
       limit("board.height", kAny, bounds::board_height),
       limit("reservoir.life", kAny, bounds::reservoir_life),
-      limit("dropper.slew", kCharge, bounds::dropper_slew),
-      limit("discharge.voltage", kCharge, bounds::discharge_voltage),
+      limit("dropper.slew", kParts, bounds::dropper_slew),
+      limit("discharge.voltage", kParts, bounds::discharge_voltage),
       objective("current_margin", kTheorem, 0, kCharge, bounds::margin_by_charge),
+      objective("current_margin", kTheorem, 0, kShunt, bounds::shunt_margin),
       limit("supply.start", kCharge, bounds::supply_start),
       objective("standby_loss", kTheorem, 0, kCrest, bounds::standby_by_charge),
       limit("resistor.power", kSeries, bounds::resistor_power),
@@ -65,6 +73,7 @@ const std::vector<BoundRule>& bound_table() {
       limit("rectifier.surge", kCrest, bounds::rectifier_surge),
       limit("rail.transient", kCrest, bounds::rail_transient),
       objective("standby_loss", BoundClass::monotone, 1, kStandby, bounds::standby_by_engine),
+      objective("standby_loss", BoundClass::monotone, 1, kShuntStandby, bounds::shunt_standby),
       solved_limit("rail.max", kRich, bounds::rail_max_by_engine),
       solved_limit("clamp.power", kHeat, bounds::clamp_power_by_engine),
       solved_limit("clamp.junction", kHeat, bounds::clamp_junction_by_engine),

@@ -39,6 +39,13 @@ bool plain_clamped(const circuit::Arrangement& arrangement) {
          name == "bridge-clamp-across" || name == "bridge-clamp-ahead";
 }
 
+bool shunted(const DesignBox& box) {
+  return box.arrangement != nullptr && box.arrangement->thyristor_shunt && box.thyristors.size() == 1 &&
+         box.gate_resistors.size() == 1 && box.thyristors.front() != nullptr &&
+         box.gate_resistors.front() != nullptr && box.thyristors.front()->trigger_current_A &&
+         box.thyristors.front()->holding_current_A;
+}
+
 void BoxEnds::take(Figure figure, double least, double greatest) {
   auto& ends = ends_[static_cast<std::size_t>(figure)];
   if (!(ends.least <= least)) ends.least = least;
@@ -52,11 +59,12 @@ void BoxEnds::turn(Figure figure) {
 
 BoxEnds::BoxEnds(const DesignBox& box, const BoundContext& context) {
   ends_.fill({kInfinity, -kInfinity});
-  known_circuit_ = box.arrangement != nullptr && plain_clamped(*box.arrangement) &&
-                   all_there(box.output_stages) && all_there(box.droppers) &&
+  const bool all = box.arrangement != nullptr && all_there(box.output_stages) && all_there(box.droppers) &&
                    all_there(box.series_resistors) && all_there(box.clamps) && all_there(box.reservoirs) &&
                    all_there(box.rectifiers) && all_required(box, context);
-  if (!known_circuit_) return;
+  known_circuit_ = all && plain_clamped(*box.arrangement);
+  known_shunt_ = all && shunted(box);
+  if (!known_circuit_ && !known_shunt_) return;
   take_cold_figures(box, context);
   take_air(box, context);
   take_warm_figures(box, context);

@@ -68,7 +68,7 @@ void drop_from(std::vector<Entry>& list, const BoxStress& stress, const Asked& a
 
 int drop_replaced(DesignBox& box, const BoundContext& context) {
   const BoxEnds ends(box, context);
-  if (!ends.known_circuit()) return 0;
+  if (!ends.known_circuit() && !ends.known_shunt()) return 0;  // shunts: every rating counts in full
   const BoxStress stress(box, ends, context);
   const Asked asked(*context.requirement);
   int dropped = 0;

@@ -108,8 +108,8 @@ std::vector<Nest> make_nests() {
   const values::RandomStream all(77);
   for (std::size_t a = 0; a < circuit::arrangements().size(); ++a) {
     const auto& arrangement = circuit::arrangements()[a];
-    if (!plain_clamped(arrangement)) continue;
-    for (int i = 0; i < 160; ++i) {
+    if (!arrangement.dropper) continue;
+    for (int i = 0; i < (plain_clamped(arrangement) ? 160 : 120); ++i) {
       auto random = all.split(static_cast<std::uint64_t>(i) + 1000 * a);
       Nest nest;
       nest.context = &test::contexts()[static_cast<std::size_t>(i) % test::contexts().size()];

@@ -41,6 +41,8 @@ class BoxEnds {
   /// False: a part that every member must have is missing from some members, or the arrangement is one whose
   /// currents these bounds do not know. Only lists may then be judged.
   bool known_circuit() const { return known_circuit_; }
+  /// True: every part is there and the arrangement is a thyristor shunt, whose parts are single in the box.
+  bool known_shunt() const { return known_shunt_; }
   double least(Figure figure) const { return at(figure).least; }
   double greatest(Figure figure) const { return at(figure).greatest; }
   /// Greatest temperature of the air around the parts in any corner: ambient + enclosure·input power, the
@@ -68,6 +70,7 @@ class BoxEnds {
 
   std::array<Ends, static_cast<std::size_t>(Figure::count)> ends_;
   bool known_circuit_ = false;
+  bool known_shunt_ = false;
   double hottest_air_degC_ = 0;
   double standby_air_degC_ = 0;  ///< the same when asleep
   double peak_A_ = 0;

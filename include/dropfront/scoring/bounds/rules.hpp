@@ -18,6 +18,8 @@ ObjectiveBound cost;
 ObjectiveBound board_area;
 ObjectiveBound margin_by_charge;
 ObjectiveBound margin_by_engine;
+ObjectiveBound shunt_margin;
+ObjectiveBound shunt_standby;
 ObjectiveBound standby_by_charge;
 ObjectiveBound standby_by_engine;
 

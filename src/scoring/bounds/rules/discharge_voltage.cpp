@@ -9,7 +9,7 @@ namespace dropfront::scoring::bounds {
 /// A dropper at or below the rule's capacitance shows nothing. Theorem.
 double discharge_voltage(const BoxQuestion& question) {
   const auto& rule = question.context.requirement->limits.discharge;
-  if (!rule || !question.ends.known_circuit()) return 0;
+  if (!rule || (!question.ends.known_circuit() && !question.ends.known_shunt())) return 0;
   const double cold_degC = question.context.ambient_low_degC();
   const double least_F = question.least_over(question.box.droppers, [&](const parts::Dropper* part) {
     if (part->capacitance_F * (1 + part->tolerance) <= rule->not_below_F) return 0.0;

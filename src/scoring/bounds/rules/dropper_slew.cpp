@@ -6,7 +6,7 @@ namespace dropfront::scoring::bounds {
 /// 2·Vcrest/(Rs·C) over the rating: Rs the greatest low end of the list, C and rating of one dropper.
 /// Theorem.
 double dropper_slew(const BoxQuestion& question) {
-  if (!question.ends.known_circuit()) return 0;
+  if (!question.ends.known_circuit() && !question.ends.known_shunt()) return 0;
   const double series_ohm = question.ends.greatest(Figure::series_low_ohm);
   const double step_V = 2 * question.supply.rich.crest_V;
   const double hot_degC = question.context.ambient_high_degC();

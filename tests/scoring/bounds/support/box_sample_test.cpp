@@ -195,6 +195,17 @@ DesignBox random_box(const circuit::Arrangement& arrangement, const Requirement&
   box.ceramics = {nullptr};
   box.thyristors = {nullptr};
   box.gate_resistors = {nullptr};
+  if (arrangement.thyristor_shunt) {
+    const auto gates = [](const parts::Resistor& part) {
+      return std::find(part.slots.begin(), part.slots.end(), "gate_resistor") != part.slots.end();
+    };
+    box.thyristors = {&all.thyristors[random.below(all.thyristors.size())]};
+    std::vector<const parts::Resistor*> fit;
+    for (const auto& part : all.resistors) {
+      if (gates(part)) fit.push_back(&part);
+    }
+    box.gate_resistors = {fit[random.below(fit.size())]};
+  }
   return box;
 }
 
@@ -224,6 +235,8 @@ std::vector<Design> members_of(const DesignBox& box) {
   cross(box.varistors, [](Design& d, const auto* p) { d.varistor = p; });
   cross(box.fuses, [](Design& d, const auto* p) { d.fuse = p; });
   cross(box.ceramics, [](Design& d, const auto* p) { d.ceramic = p; });
+  cross(box.thyristors, [](Design& d, const auto* p) { d.thyristor = p; });
+  cross(box.gate_resistors, [](Design& d, const auto* p) { d.gate_resistor = p; });
   return members;
 }
 
