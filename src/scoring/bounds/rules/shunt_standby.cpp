@@ -28,11 +28,15 @@ bool in_range(const BoxQuestion& question, double load_A) {
          ends.greatest(Figure::new_clamp_V) <= 0.24 * line.crest_V;
 }
 
-/// Least rail current of a member asleep: least stage, least leakage; a step-down stage at the highest rail.
+/// Least rail current of a member asleep: least stage, least leakage; a step-down stage at the highest rail,
+/// or at V_required where that is higher: below it the stage draws what it draws there.
 double load_least_A(const BoxQuestion& question, double highest_V) {
   const auto& loads = question.context.loads;
   const double stage_A = question.least_over(question.box.output_stages, [&](const auto* stage) {
-    return stage_current_A(*stage, loads.standby_A, highest_V, Quiescent::data, End::low);
+    const double required_V =
+        required_rail_V(*stage, question.context.requirement->output, loads).value_or(0);
+    const double rail_V = std::max(highest_V, required_V);
+    return stage_current_A(*stage, loads.standby_A, rail_V, Quiescent::data, End::low);
   });
   return stage_A + question.ends.least(Figure::leakage_A) + loads.rail_A;
 }
