@@ -69,7 +69,7 @@ std::optional<double> shunt_standby(const BoxQuestion& question) {
   const double highest_V =
       ends.greatest(Figure::new_clamp_V) + 1 + ends.greatest(Figure::clamp_ohm) * ends.peak_A();
   values.rail_current_A = load_least_A(question, highest_V);
-  values.load_cutoff_V = 0.5 * ends.least(Figure::required_V);
+  values.load_cutoff_V = 0.5 * ends.greatest(Figure::required_V);  // a starved rail draws less
   const auto state = circuit::solve_steady_state(question.box.arrangement->build(values), {.peaks = false});
   if (state.status != circuit::SteadyStatus::converged) return std::nullopt;
   return state.input_power_W * (1 - 5e-6);
