@@ -84,16 +84,16 @@ TEST_CASE("A check that a box is said to break is broken by every member") {
   REQUIRE(seen.size() >= 8);
 }
 
-TEST_CASE("Every bound is named after a check of the table or an objective, once a class and depth") {
+TEST_CASE("Every bound is named after a check of the table or an objective, once a class, depth and range") {
   std::set<std::string_view> ids{"cost", "board_area", "standby_loss", "current_margin"};
   for (const auto& rule : check_table()) ids.insert(rule.id);
-  std::set<std::tuple<std::string_view, BoundClass, int>> seen;
+  std::set<std::tuple<std::string_view, BoundClass, int, std::string_view>> seen;
   for (const auto& rule : bound_table()) {
     INFO(rule.id);
     REQUIRE(ids.count(rule.id) == 1);
     REQUIRE((rule.objective != nullptr) != (rule.limit != nullptr));
     REQUIRE(!rule.range.empty());
-    REQUIRE(seen.insert({rule.id, rule.bound_class, rule.depth}).second);
+    REQUIRE(seen.insert({rule.id, rule.bound_class, rule.depth, rule.range}).second);
   }
 }
 
