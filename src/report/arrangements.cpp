@@ -2,54 +2,54 @@
 
 #include <algorithm>
 #include <cmath>
+#include <utility>
 
 #include "dropfront/report/for_people.hpp"
 #include "dropfront/report/text_table.hpp"
+#include "dropfront/scoring/evidence.hpp"
 
 namespace dropfront::report {
 
 namespace {
 
 /// Of one front member; absent when a corner has no steady state.
-std::optional<ArrangementBest> at_work(const Entry& entry, const scoring::Score& evidence) {
+std::optional<ArrangementBest> at_work(const Entry& entry, const scoring::Requirement& requirement) {
+  scoring::Evidence evidence(entry.design, requirement, requirement.supplies.front());
+  const auto& asleep = evidence.standby().state;
+  const auto& awake = evidence.nominal().state;
+  if (!asleep.usable() || !awake.usable()) return std::nullopt;
   ArrangementBest best;
   best.arrangement = entry.design.arrangement->name;
   best.number = entry.number;
   best.standby_loss_W = entry.objectives.standby_loss_W;
-  if (evidence.operations.empty()) return std::nullopt;
-  int found = 0;
-  for (const auto& row : evidence.operations.front().operations) {
-    const bool asleep = row.corner == "standby";
-    if ((!asleep && row.corner != "nominal") || !row.state.usable()) continue;
-    ++found;
-    (asleep ? best.asleep_input_W : best.awake_input_W) = row.state.input_power_W;
-    if (asleep) continue;
-    best.awake_ripple_Vpp = row.state.ripple_Vpp();
-    for (const double spike_A : row.state.thyristor_peak_A) {
-      best.firing_spike_A = std::max(best.firing_spike_A.value_or(0), spike_A);
-    }
+  best.asleep_input_W = asleep.input_power_W;
+  best.awake_input_W = awake.input_power_W;
+  best.awake_ripple_Vpp = awake.ripple_Vpp();
+  for (const double spike_A : awake.thyristor_peak_A) {
+    best.firing_spike_A = std::max(best.firing_spike_A.value_or(0), spike_A);
   }
-  return found == 2 ? std::optional(best) : std::nullopt;
+  return best;
 }
 
 }  // namespace
 
-std::vector<ArrangementBest> arrangements_of(const Result& result, const scoring::Scorer& scorer) {
-  std::vector<ArrangementBest> rows;
+std::vector<ArrangementBest> arrangements_of(const Result& result) {
   const auto less = [](const Entry* a, const Entry* b) {
     const auto standby = [](const Entry* e) { return e->objectives.standby_loss_W.value_or(INFINITY); };
     return standby(a) < standby(b);
   };
+  std::vector<const Entry*> bests;
   for (const auto& arrangement : circuit::arrangements()) {
     std::vector<const Entry*> of;
     for (const auto& entry : result.front) {
       if (entry.design.arrangement == &arrangement) of.push_back(&entry);
     }
-    if (of.empty()) continue;
-    const Entry& best = **std::min_element(of.begin(), of.end(), less);
-    const auto row =
-        at_work(best, best.evidence ? *best.evidence : scorer.score(best.design, scoring::Depth::full));
-    if (row) rows.push_back(*row);
+    if (!of.empty()) bests.push_back(*std::min_element(of.begin(), of.end(), less));
+  }
+  std::vector<ArrangementBest> rows;
+  if (bests.size() < 2) return rows;
+  for (const Entry* best : bests) {
+    if (auto row = at_work(*best, result.problem->requirement)) rows.push_back(std::move(*row));
   }
   return rows.size() > 1 ? rows : std::vector<ArrangementBest>{};
 }

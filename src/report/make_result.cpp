@@ -182,7 +182,7 @@ Result make_result(const problem::BoundProblem& bound, const search::SearchOutco
     if (miss.check >= 0 && miss.check < static_cast<int>(names.size()))
       result.near_misses.push_back({bound.design(miss.choice), names[miss.check], miss.shortfall,
                                     check_of(scorer, bound.design(miss.choice), names[miss.check])});
-  result.arrangements = arrangements_of(result, scorer);
+  result.arrangements = arrangements_of(result);
   if (result.front.empty()) add_conflict(result, bound, scorer, outcome);
   return result;
 }

@@ -1,5 +1,6 @@
 #include "dropfront/report/score_json.hpp"
 
+#include "dropfront/circuit/owner_name.hpp"
 #include "dropfront/report/cautions.hpp"
 #include "dropfront/report/design_json.hpp"
 #include "dropfront/report/faults_report.hpp"
@@ -16,7 +17,7 @@ void write_losses(JsonWriter& json, const circuit::SteadyState& state) {
   json.begin_object(kFlat);
   for (int i = 0; i < static_cast<int>(circuit::Owner::count); ++i) {
     const double loss_W = state.loss_W[i];
-    if (loss_W != 0) json.member(owner_name(static_cast<circuit::Owner>(i)), loss_W);
+    if (loss_W != 0) json.member(circuit::owner_name(static_cast<circuit::Owner>(i)), loss_W);
   }
   json.end_object();
 }
@@ -99,40 +100,6 @@ void write_check(JsonWriter& json, const scoring::Check& check) {
 }
 
 }  // namespace
-
-std::string_view owner_name(circuit::Owner owner) {
-  switch (owner) {
-    case circuit::Owner::line:
-      return "line";
-    case circuit::Owner::series_resistor:
-      return "series_resistor";
-    case circuit::Owner::dropper:
-      return "dropper";
-    case circuit::Owner::discharge:
-      return "discharge";
-    case circuit::Owner::clamp:
-      return "clamp";
-    case circuit::Owner::rectifier:
-      return "rectifier";
-    case circuit::Owner::reservoir:
-      return "reservoir";
-    case circuit::Owner::load:
-      return "load";
-    case circuit::Owner::leak:
-      return "leak";
-    case circuit::Owner::thyristor:
-      return "thyristor";
-    case circuit::Owner::gate_resistor:
-      return "gate_resistor";
-    case circuit::Owner::ceramic:
-      return "ceramic";
-    case circuit::Owner::varistor:
-      return "varistor";
-    case circuit::Owner::count:
-      break;
-  }
-  return "other";
-}
 
 double corner_voltage_Vrms(const scoring::Supply& supply, std::string_view corner) {
   if (corner.starts_with("lean")) return supply.voltage_Vrms.low;

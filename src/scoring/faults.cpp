@@ -6,6 +6,7 @@
 #include <cmath>
 #include <utility>
 
+#include "dropfront/circuit/owner_name.hpp"
 #include "dropfront/circuit/transient.hpp"
 #include "dropfront/scoring/corners.hpp"
 #include "dropfront/scoring/evidence.hpp"
@@ -20,31 +21,6 @@ using circuit::FaultPlace;
 using circuit::Owner;
 
 constexpr double kLongest_s = 10;  // a rail that creeps is followed this long
-
-std::string_view slot_of(Owner owner) {
-  switch (owner) {
-    case Owner::dropper:
-      return "dropper";
-    case Owner::series_resistor:
-      return "series_resistor";
-    case Owner::discharge:
-      return "discharge";
-    case Owner::clamp:
-      return "clamp";
-    case Owner::rectifier:
-      return "rectifier";
-    case Owner::reservoir:
-      return "reservoir";
-    case Owner::thyristor:
-      return "thyristor";
-    case Owner::gate_resistor:
-      return "gate_resistor";
-    case Owner::ceramic:
-      return "ceramic";
-    default:
-      return "";
-  }
-}
 
 /// The design at the high line, unloaded and hot, ready to have one part spoilt.
 struct Whole {
@@ -165,23 +141,22 @@ std::vector<FaultRow> faults_of(const Design& design, const Requirement& require
   const double input_max_V = design.output_stage->input_max_V.value_or(INFINITY);
   whole.weakest_rail_V = std::min(design.reservoir->rated_voltage_V, input_max_V);
   const auto network = design.arrangement->build(whole.values);
+  auto low_end = whole.values;
+  low_end.series_resistor_ohm = series_resistor_ohm(design, End::low);
+  const auto at_low_end = design.arrangement->build(low_end);  // for a shorted dropper
   const auto places = circuit::fault_places(network);
   for (const auto& place : places) {
-    const auto slot = slot_of(place.owner);
-    if (slot.empty()) continue;
+    if (place.owner == Owner::varistor) continue;  // a row of its own below
     const auto alike = [&](const FaultPlace& p) { return p.owner == place.owner; };
-    std::string part(slot);
+    std::string part(circuit::owner_name(place.owner));
     if (std::count_if(places.begin(), places.end(), alike) > 1) {
       part += fmt::format(" {}", 1 + std::count_if(places.data(), &place, alike));
     }
     for (const auto kind : {FaultKind::open, FaultKind::shorted}) {
       if (place.owner == Owner::discharge && kind == FaultKind::shorted) continue;
-      Whole at = whole;
-      if (place.owner == Owner::dropper && kind == FaultKind::shorted) {
-        at.values.series_resistor_ohm = series_resistor_ohm(design, End::low);
-      }
-      const auto faulty = circuit::with_fault(design.arrangement->build(at.values), place, kind);
-      rows.push_back(solve(at, faulty, part, kind));
+      const bool film_short = place.owner == Owner::dropper && kind == FaultKind::shorted;
+      const auto faulty = circuit::with_fault(film_short ? at_low_end : network, place, kind);
+      rows.push_back(solve(whole, faulty, part, kind));
     }
   }
   add_discharge_short(whole, rows);

@@ -38,13 +38,13 @@ struct ElementValues {
   double gate_resistor_ohm = 0;
   double reservoir_F = 0;
   double reservoir_esr_ohm = 0;
-  double ceramic_F = 0;        ///< beside the reservoir; 0: none
-  double rail_power_W = 0;     ///< constant-power load beside it, between the two voltages below; 0: none
-  double power_from_V = 0;     ///< below, its current falls in proportion to the voltage
-  double power_to_V = 0;       ///< above, its current stays
-  int power_chords = 12;       ///< between them
-  double rail_current_A = 0;   ///< constant-current load on the rail, leakage and Iq included
-  double load_cutoff_V = 0;    ///< the load falls off linearly below this rail voltage
+  double ceramic_F = 0;       ///< beside the reservoir; 0: none
+  double rail_power_W = 0;    ///< constant-power load beside it, between the two voltages below; 0: none
+  double power_from_V = 0;    ///< below, its current falls in proportion to the voltage
+  double power_to_V = 0;      ///< above, its current stays
+  int power_chords = 12;      ///< between them
+  double rail_current_A = 0;  ///< constant-current load on the rail, leakage and Iq included
+  double load_cutoff_V = 0;   ///< the load falls off linearly below this rail voltage
 };
 
 }  // namespace dropfront::circuit

@@ -23,9 +23,9 @@ struct FaultPlace {
 std::vector<FaultPlace> fault_places(const Network& network);
 
 /// The network with that part open or shorted. The half-period symmetry is lost. An open diode of a bridge
-/// takes its partner out of use (they share their current); with a shorted one the other three stand singly. Of two zeners back to back
-/// an open one opens both directions; a shorted one leaves the other's breakdown in its direction and the
-/// other's forward voltage in the opposite one (its knee, if any, is left out).
+/// takes its partner out of use (they share their current); with a shorted one the other three stand singly.
+/// Of two zeners back to back an open one opens both directions; a shorted one leaves the other's breakdown
+/// in its direction and the other's forward voltage in the opposite one (its knee, if any, is left out).
 Network with_fault(Network network, const FaultPlace& place, FaultKind kind);
 
 }  // namespace dropfront::circuit

@@ -8,8 +8,8 @@
 namespace dropfront::report {
 
 /// The front member with the least standby loss of each arrangement; empty with fewer than two arrangements
-/// on the front. Evidence that the result lacks is scored anew.
-std::vector<ArrangementBest> arrangements_of(const Result& result, const scoring::Scorer& scorer);
+/// on the front. Solves two corners for each.
+std::vector<ArrangementBest> arrangements_of(const Result& result);
 
 /// Side by side for people; empty for none.
 std::string arrangements_text(const std::vector<ArrangementBest>& rows);

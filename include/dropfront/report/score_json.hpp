@@ -22,7 +22,4 @@ void write_texts(JsonWriter& json, const std::vector<std::string>& texts);
 /// R.m.s. mains voltage of a named corner: low for lean, high for rich, else nominal.
 double corner_voltage_Vrms(const scoring::Supply& supply, std::string_view corner);
 
-/// Slot or sink by which a loss is reported, e.g. "series_resistor"; "load" is all that the rail feeds.
-std::string_view owner_name(circuit::Owner owner);
-
 }  // namespace dropfront::report
